@@ -31,8 +31,8 @@ function candidatesIn(text: string): string[] {
   return [...new Set([tokens.length <= 3 ? first + second + third : '', first + second, first])].filter((token) => token !== '');
 }
 
-/** Values as people write them: `4700`-like numbers pass through to the number tables, everything with a unit stops here. */
-const LOOKS_LIKE_VALUE = /^[.,]?\d+(?:[.,]\d+)?\s*(?:[RKMGPU]|[NPUM]F|[MU]?H|OHMS?|Ω|%|V|HZ|KHZ|MHZ)?$|^\d*[RKMNPU]\d{1,3}[FGJKM]?$/;
+/** Values as people write them: a plain number passes through to the number tables, everything with a unit stops here. */
+const LOOKS_LIKE_VALUE = /^[.,]?\d+(?:[.,]\d+)?\s*(?:[RKMGPU]|[NPUM]F|[MU]?H|OHMS?|Ω|%|V|HZ|KHZ|MHZ)$|^\d*[RKMNPU]\d{1,3}[FGJKM]?$/;
 const BARE_NUMBERS = new Set(['555', '556', '741']);
 
 function readCompact(compact: string): FamilyName | null {
@@ -42,7 +42,7 @@ function readCompact(compact: string): FamilyName | null {
 }
 
 // Makers' prefixes of 4000-series logic. MC1 and NLV1 go before four digits (MC14093); 40106 is MC14106 there.
-const LOGIC_4000_FORM = /^(CD|HEF|HCF|HCC|HBF|MC1|NLV1|HD1|TC|BU|GD|KK|MSM|UPD|M|F|SCL|CM|V|XD|NTE|MMC|CA|SN)?(4\d{3}|40\d{3})(.*)$/;
+const LOGIC_4000_FORM = /^(CD|HEF|HCF|HCC|HBF|MC1|NLV1|HD1|TC|BU|GD|KK|MSM|UPD|M|F|SCL|CM|V|XD|NTE|MMC|CA|SN)?(40[1-9]\d{2}|4\d{3})(.*)$/;
 const LOGIC_SUFFIX = /^(?:-?(?:U?B|A)[A-Z]{0,4}(?:\d{1,3}[A-Z0-9]{0,3})?|[NEDPT]|)(?:[-,/].*)?$/;
 const BARE_SUFFIX = /^(?:U?B[A-Z]{0,3}|[NED]|)$/;
 
