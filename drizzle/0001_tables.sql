@@ -469,6 +469,12 @@ CREATE TABLE "counter" (
 );
 --> statement-breakpoint
 ALTER TABLE "counter" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
+CREATE TABLE "heartbeat" (
+	"name" text PRIMARY KEY NOT NULL,
+	"at" timestamp with time zone DEFAULT now() NOT NULL
+);
+--> statement-breakpoint
+ALTER TABLE "heartbeat" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
 CREATE TABLE "idempotency_key" (
 	"workshop_id" uuid NOT NULL,
 	"person_id" uuid NOT NULL,
@@ -523,6 +529,13 @@ CREATE TABLE "progress" (
 );
 --> statement-breakpoint
 ALTER TABLE "progress" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
+CREATE TABLE "rate_limit" (
+	"key" varchar(255) PRIMARY KEY NOT NULL,
+	"points" integer DEFAULT 0 NOT NULL,
+	"expire" bigint
+);
+--> statement-breakpoint
+ALTER TABLE "rate_limit" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
 CREATE TABLE "bin" (
 	"workshop_id" uuid NOT NULL,
 	"id" uuid NOT NULL,
@@ -776,10 +789,12 @@ CREATE POLICY "own_workshop" ON "supplier" AS PERMISSIVE FOR ALL TO "ohmstead_ap
 CREATE POLICY "own_workshop" ON "audit_event" AS PERMISSIVE FOR ALL TO "ohmstead_app" USING (workshop_id = nullif(current_setting('app.workshop_id', true), '')::uuid) WITH CHECK (workshop_id = nullif(current_setting('app.workshop_id', true), '')::uuid);--> statement-breakpoint
 CREATE POLICY "scope_only" ON "auth_mail" AS PERMISSIVE FOR ALL TO "ohmstead_app" USING (current_setting('app.scope', true) = 'auth') WITH CHECK (current_setting('app.scope', true) = 'auth');--> statement-breakpoint
 CREATE POLICY "own_workshop" ON "counter" AS PERMISSIVE FOR ALL TO "ohmstead_app" USING (workshop_id = nullif(current_setting('app.workshop_id', true), '')::uuid) WITH CHECK (workshop_id = nullif(current_setting('app.workshop_id', true), '')::uuid);--> statement-breakpoint
+CREATE POLICY "any_process" ON "heartbeat" AS PERMISSIVE FOR ALL TO "ohmstead_app" USING (true) WITH CHECK (true);--> statement-breakpoint
 CREATE POLICY "own_workshop" ON "idempotency_key" AS PERMISSIVE FOR ALL TO "ohmstead_app" USING (workshop_id = nullif(current_setting('app.workshop_id', true), '')::uuid) WITH CHECK (workshop_id = nullif(current_setting('app.workshop_id', true), '')::uuid);--> statement-breakpoint
 CREATE POLICY "own_workshop_or_scope" ON "outbox" AS PERMISSIVE FOR ALL TO "ohmstead_app" USING (workshop_id = nullif(current_setting('app.workshop_id', true), '')::uuid or current_setting('app.scope', true) = 'inbox') WITH CHECK (workshop_id = nullif(current_setting('app.workshop_id', true), '')::uuid or current_setting('app.scope', true) = 'inbox');--> statement-breakpoint
 CREATE POLICY "scope_only" ON "payment_event" AS PERMISSIVE FOR ALL TO "ohmstead_app" USING (current_setting('app.scope', true) = 'inbox') WITH CHECK (current_setting('app.scope', true) = 'inbox');--> statement-breakpoint
 CREATE POLICY "own_workshop" ON "progress" AS PERMISSIVE FOR ALL TO "ohmstead_app" USING (workshop_id = nullif(current_setting('app.workshop_id', true), '')::uuid) WITH CHECK (workshop_id = nullif(current_setting('app.workshop_id', true), '')::uuid);--> statement-breakpoint
+CREATE POLICY "any_process" ON "rate_limit" AS PERMISSIVE FOR ALL TO "ohmstead_app" USING (true) WITH CHECK (true);--> statement-breakpoint
 CREATE POLICY "own_workshop" ON "bin" AS PERMISSIVE FOR ALL TO "ohmstead_app" USING (workshop_id = nullif(current_setting('app.workshop_id', true), '')::uuid) WITH CHECK (workshop_id = nullif(current_setting('app.workshop_id', true), '')::uuid);--> statement-breakpoint
 CREATE POLICY "own_workshop" ON "cabinet" AS PERMISSIVE FOR ALL TO "ohmstead_app" USING (workshop_id = nullif(current_setting('app.workshop_id', true), '')::uuid) WITH CHECK (workshop_id = nullif(current_setting('app.workshop_id', true), '')::uuid);--> statement-breakpoint
 CREATE POLICY "own_workshop" ON "count_entry" AS PERMISSIVE FOR ALL TO "ohmstead_app" USING (workshop_id = nullif(current_setting('app.workshop_id', true), '')::uuid) WITH CHECK (workshop_id = nullif(current_setting('app.workshop_id', true), '')::uuid);--> statement-breakpoint

@@ -82,6 +82,10 @@ ALTER TABLE "reservation" FORCE ROW LEVEL SECURITY;--> statement-breakpoint
 GRANT SELECT, INSERT, UPDATE, DELETE ON "reservation" TO ohmstead_app;--> statement-breakpoint
 ALTER TABLE "stock_count" FORCE ROW LEVEL SECURITY;--> statement-breakpoint
 GRANT SELECT, INSERT, UPDATE, DELETE ON "stock_count" TO ohmstead_app;--> statement-breakpoint
+ALTER TABLE "heartbeat" FORCE ROW LEVEL SECURITY;--> statement-breakpoint
+GRANT SELECT, INSERT, UPDATE, DELETE ON "heartbeat" TO ohmstead_app;--> statement-breakpoint
+ALTER TABLE "rate_limit" FORCE ROW LEVEL SECURITY;--> statement-breakpoint
+GRANT SELECT, INSERT, UPDATE, DELETE ON "rate_limit" TO ohmstead_app;--> statement-breakpoint
 GRANT USAGE ON ALL SEQUENCES IN SCHEMA public TO ohmstead_app;--> statement-breakpoint
 
 -- Invariant 1: on_hand is the sum of the lot's movements. Inserting a movement is what changes it; the row lock on the

@@ -17,7 +17,7 @@ const CONSTRAINTS: Record<string, readonly [ProblemCode, string]> = {
   bin_place_once: ['name.taken', 'There is a bin in that place already.'],
   supplier_name_once: ['name.taken', 'A supplier of that name is there already.'],
   offer_code_once: ['name.taken', 'This supplier already offers something under that code.'],
-  offer_break_pk: ['input.invalid', 'Two breaks start at the same quantity.'],
+  offer_break_workshop_id_offer_id_from_quantity_pk: ['input.invalid', 'Two breaks start at the same quantity.'],
   person_email_unique: ['name.taken', 'There is an account with that address already.'],
 };
 

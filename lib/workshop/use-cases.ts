@@ -1,0 +1,4 @@
+/** Every use case of this area; lib/registry.ts joins the areas for the API description and the authorisation matrix. */
+import type { UseCase } from '@/lib/api/use-case';
+
+export const workshopUseCases: readonly UseCase[] = [];
