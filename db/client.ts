@@ -43,6 +43,9 @@ function database(): { pool: pg.Pool; db: Database } {
   return holder.ohmsteadDatabase;
 }
 
+/** For the rate limiter's store only, which brings its own statements on a table that no workshop owns. */
+export const rateLimitPool = (): pg.Pool => database().pool;
+
 export async function closeDatabase(): Promise<void> {
   const open = holder.ohmsteadDatabase;
   holder.ohmsteadDatabase = undefined;
@@ -96,6 +99,14 @@ export function withWorkshop<T>(workshopId: string, run: (tx: Tx) => Promise<T>,
 
 export function withScope<T>(scope: 'auth' | 'inbox', run: (tx: Tx) => Promise<T>): Promise<T> {
   return transact(sql`select set_config('app.scope', ${scope}, true)`, run, false);
+}
+
+/** Widens a running transaction to a scope for one question, on the same connection (a second one could starve the pool). */
+export async function inScope<T>(tx: Tx, scope: 'auth' | 'inbox', run: () => Promise<T>): Promise<T> {
+  await tx.execute(sql`select set_config('app.scope', ${scope}, true)`);
+  const result = await run();
+  await tx.execute(sql`select set_config('app.scope', '', true)`);
+  return result;
 }
 
 /** One row when the database answers; for the health route. */

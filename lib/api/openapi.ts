@@ -55,7 +55,7 @@ function operation(useCase: UseCase, method: string, path: string): Json {
   const others = Object.entries(properties).filter(([name]) => !inPath.includes(name));
   const asks = method === 'GET' || method === 'DELETE';
   if (asks) for (const [name, schema] of others) parameters.push({ name, in: 'query', required: required.has(name), schema });
-  if (useCase.type !== 'query') {
+  if (useCase.type === 'command' || useCase.type === 'errand') {
     parameters.push({
       name: 'Idempotency-Key',
       in: 'header',
@@ -70,13 +70,19 @@ function operation(useCase: UseCase, method: string, path: string): Json {
     operationId: useCase.name,
     summary: useCase.summary,
     tags: [useCase.name.split('.')[0]],
-    description: `Roles: ${useCase.roles === 'everyone' ? 'every member' : useCase.roles.join(', ')}.`,
+    description: `Roles: ${roleText(useCase)}.`,
+    ...(useCase.type === 'open' ? { security: [] } : {}),
     parameters,
     ...(asks || others.length === 0
       ? {}
       : { requestBody: { required: true, content: { [useCase.multipartLimitBytes === undefined ? 'application/json' : 'multipart/form-data']: { schema: body } } } }),
     responses: { 200: { description: 'Done', content: { 'application/json': { schema: jsonSchema(useCase.output, 'output') } } }, default: problem },
   };
+}
+
+function roleText({ roles }: UseCase): string {
+  if (roles === 'anyone') return 'none, before signing in';
+  return roles === 'everyone' ? 'every member' : roles.join(', ');
 }
 
 function jsonSchema(schema: z.ZodType, io: 'input' | 'output'): Json {

@@ -14,13 +14,15 @@ import { type Credentials, loadActor } from '@/lib/auth/load-actor';
 import type { Actor } from '@/lib/auth/actor';
 import { type FieldProblem, Refusal } from './problem';
 import { refusalFrom } from './refusal-from-fault';
-import type { Command, CommandContext, Errand, Query, UseCase } from './use-case';
+import type { Command, CommandContext, Errand, Open, Query, UseCase } from './use-case';
 
 export interface Request {
   readonly credentials: Credentials | null;
   readonly input: unknown;
   readonly requestId: string;
   readonly idempotencyKey: string | null;
+  /** Where it came from, for the rate limits of what needs no sign-in. */
+  readonly address?: string;
 }
 
 export interface Performed<T> {
@@ -35,6 +37,10 @@ const LEASE_MS = 60_000;
 export function perform<U extends UseCase>(useCase: U, request: Request): Promise<Performed<z.output<U['output']>>>;
 export async function perform(useCase: UseCase, request: Request): Promise<Performed<unknown>> {
   try {
+    if (useCase.type === 'open') {
+      const output = await useCase.run({ input: parseInput(useCase, request.input), requestId: request.requestId, address: request.address ?? 'unknown' });
+      return { output, replayed: false };
+    }
     if (!request.credentials) throw new Refusal('signed-out', 'Sign in, or send a bearer token.');
     const input = parseInput(useCase, request.input);
     switch (useCase.type) {
@@ -63,7 +69,7 @@ function parseInput(useCase: UseCase, raw: unknown): unknown {
   throw new Refusal('input.invalid', first ? `${where}${first.detail}` : 'The input is not as described.', { errors });
 }
 
-function authorise(useCase: UseCase, actor: Actor): void {
+function authorise(useCase: Exclude<UseCase, Open>, actor: Actor): void {
   if (useCase.type !== 'query' && !actor.mayWrite) {
     throw new Refusal('not-allowed', 'This API token may only read.');
   }

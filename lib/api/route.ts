@@ -18,11 +18,11 @@ export function route(useCase: UseCase): Handler {
     const instance = request.nextUrl.pathname;
     try {
       refuseForeignOrigin(request, useCase);
-      const credentials = await credentialsOf(request);
+      const credentials = useCase.type === 'open' ? null : await credentialsOf(request);
       // Before the body is read: a stranger's megabytes are not worth parsing.
-      if (!credentials) throw new Refusal('signed-out', 'Sign in, or send a bearer token.');
+      if (!credentials && useCase.type !== 'open') throw new Refusal('signed-out', 'Sign in, or send a bearer token.');
       const input = { ...(await readInput(request, useCase)), ...(await params) };
-      const { output, replayed } = await perform(useCase, { credentials, input, requestId, idempotencyKey: request.headers.get('idempotency-key') });
+      const { output, replayed } = await perform(useCase, { credentials, input, requestId, idempotencyKey: request.headers.get('idempotency-key'), address: addressOf(request) });
       if (output instanceof Response) return output;
       const headers = new Headers({ 'content-type': 'application/json', 'cache-control': 'no-store', 'x-request-id': requestId });
       if (replayed) headers.set('idempotent-replayed', 'true');
@@ -43,6 +43,11 @@ export function respondTo(error: unknown, requestId: string, instance: string, w
   if (refusal.code === 'database.away' || refusal.code === 'service.away') log.warn({ requestId, what, code: refusal.code, err: refusal.cause }, 'away');
   else log.debug({ requestId, what, code: refusal.code }, 'refused');
   return problemResponse(refusal, requestId, instance);
+}
+
+/** The address as the nearest proxy tells it (next start fills it in itself); only for rate limits, so a forged one harms nobody but its limit. */
+function addressOf(request: NextRequest): string {
+  return request.headers.get('x-forwarded-for')?.split(',').at(-1)?.trim() ?? 'unknown';
 }
 
 /** Cross-site requests can't ride on a session cookie: browsers name the origin of every write (OWASP ASVS 4.2.2). */

@@ -4,6 +4,7 @@
  *
  * query    reads, in one read-only transaction
  * command  changes, in one transaction that also holds the idempotency key, the audit row and the outbox rows
+ * open     before anybody signed in (links, invitations)
  * errand   a command that must call a service between transactions (payments, uploads); each step is its own
  *          transaction, the key is claimed before the first and answered after the last
  */
@@ -81,7 +82,15 @@ export interface Errand<Name extends string = string, At extends Endpoint = Endp
   run(context: ErrandContext<z.output<In>>): Promise<z.input<Out>>;
 }
 
-export type UseCase = Query | Command | Errand;
+/** What a person may do before signing in: ask for a link, accept an invitation. No workshop is known; `run` opens the auth scope itself. */
+export interface Open<Name extends string = string, At extends Endpoint = Endpoint, In extends z.ZodType = z.ZodType, Out extends z.ZodType = z.ZodType>
+  extends Omit<Definition<Name, At, In, Out>, 'roles'> {
+  readonly type: 'open';
+  readonly roles: 'anyone';
+  run(context: { readonly input: z.output<In>; readonly requestId: string; readonly address: string }): Promise<z.input<Out>>;
+}
+
+export type UseCase = Query | Command | Errand | Open;
 
 type Body<T> = Omit<T, 'type'>;
 
@@ -97,4 +106,8 @@ export function command<Name extends string, At extends Endpoint, In extends z.Z
 
 export function errand<Name extends string, At extends Endpoint, In extends z.ZodType, Out extends z.ZodType>(definition: Body<Errand<Name, At, In, Out>>): Errand<Name, At, In, Out> {
   return { ...definition, type: 'errand' };
+}
+
+export function open<Name extends string, At extends Endpoint, In extends z.ZodType, Out extends z.ZodType>(definition: Omit<Open<Name, At, In, Out>, 'type' | 'roles'>): Open<Name, At, In, Out> {
+  return { ...definition, type: 'open', roles: 'anyone' };
 }

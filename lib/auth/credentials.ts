@@ -1,6 +1,5 @@
 /** Reads who a request claims to be: a bearer token (looked up by its hash) or the signed session cookie of next-auth. */
 import 'server-only';
-import { createHash } from 'node:crypto';
 import { eq } from 'drizzle-orm';
 import { type JWT, getToken } from 'next-auth/jwt';
 import { cookies, headers } from 'next/headers';
@@ -8,8 +7,7 @@ import type { NextRequest } from 'next/server';
 import { withScope } from '@/db/client';
 import { apiToken } from '@/db/schema/people';
 import type { Credentials } from './load-actor';
-
-export const hashToken = (token: string): string => createHash('sha256').update(token).digest('hex');
+import { hashToken } from './one-time-token';
 
 /** Of a route handler's request; null where nothing valid was sent. */
 export async function credentialsOf(request: NextRequest): Promise<Credentials | null> {

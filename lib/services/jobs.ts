@@ -7,7 +7,7 @@ import 'server-only';
 import { asc, inArray, isNull, lte, and, sql } from 'drizzle-orm';
 import PgBoss from 'pg-boss';
 import { withScope } from '@/db/client';
-import { heartbeat, outbox } from '@/db/schema/records';
+import { authMail, heartbeat, outbox } from '@/db/schema/records';
 import type { Job } from '@/lib/api/use-case';
 import { log } from '@/lib/api/log';
 
@@ -44,7 +44,9 @@ export async function startJobs(connectionString: string, handlers: Record<Queue
     });
   }
   let stopped = false;
-  const loops = [repeat(RELAY_EVERY_MS, () => relay(boss), () => stopped), repeat(HEARTBEAT_EVERY_MS, beat, () => stopped)];
+  const loops = [repeat(RELAY_EVERY_MS, () => relay(boss), () => stopped),
+    repeat(RELAY_EVERY_MS, () => relayAuthMail(boss), () => stopped),
+    repeat(HEARTBEAT_EVERY_MS, beat, () => stopped)];
   return {
     async stop() {
       stopped = true;
@@ -85,6 +87,25 @@ async function relay(boss: PgBoss): Promise<void> {
       .where(
         inArray(
           outbox.id,
+          waiting.map((row) => row.id),
+        ),
+      );
+  });
+}
+
+/** Mails written before a workshop was known (links, resets) join the same queue. */
+async function relayAuthMail(boss: PgBoss): Promise<void> {
+  await withScope('auth', async (tx) => {
+    const waiting = await tx.select().from(authMail).where(isNull(authMail.relayedAt)).orderBy(asc(authMail.createdAt)).limit(RELAY_AT_ONCE).for('update', { skipLocked: true });
+    if (waiting.length === 0) return;
+    await boss.insert(waiting.map((row) => ({ id: row.id, name: 'send-mail', data: { workshopId: '', payload: row.payload }, retryLimit: RETRY_LIMIT, retryDelay: 2, retryBackoff: true })));
+    // The link in the mail is a secret: once relayed, only the queue holds it, until the mail is out.
+    await tx
+      .update(authMail)
+      .set({ relayedAt: new Date(), payload: {} })
+      .where(
+        inArray(
+          authMail.id,
           waiting.map((row) => row.id),
         ),
       );

@@ -1,0 +1,5 @@
+import NextAuth from 'next-auth';
+import { authOptions } from '@/lib/auth/auth-options';
+
+const handler = NextAuth(authOptions);
+export { handler as GET, handler as POST };

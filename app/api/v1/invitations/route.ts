@@ -1,0 +1,4 @@
+import { route } from '@/lib/api/route';
+import { invitePerson } from '@/lib/workshop/invite-person';
+
+export const POST = route(invitePerson);
