@@ -151,8 +151,10 @@ serve() {
   if [ "${OHMSTEAD_SERVICES:-fake}" = fake ]; then
     launch "$folder" fakes node --import tsx docker-free-scripts/fakes/main.ts
   fi
-  launch "$folder" jobs node --import tsx docker-free-scripts/commands/jobs.ts
-  launch "$folder" web node node_modules/next/dist/bin/next start -H 127.0.0.1 -p "$port"
+  # lib/ marks what may never reach a browser with the package server-only, which needs this condition outside of Next.js.
+  # Neither process gets the owner's address; the empty value also hides one from .env files.
+  launch "$folder" jobs env DATABASE_OWNER_URL= OHMSTEAD_PROCESS=jobs node --conditions=react-server --import tsx docker-free-scripts/commands/jobs.ts
+  launch "$folder" web env DATABASE_OWNER_URL= OHMSTEAD_PROCESS=web NODE_ENV=production node node_modules/next/dist/bin/next start -H 127.0.0.1 -p "$port"
   if ! node --import tsx docker-free-scripts/commands/wait-for.ts "http://127.0.0.1:$port/api/health" 90 "$folder"/*.pid 2>"$folder/wait.txt"; then
     SERVE_FAULT=$(head -n 1 "$folder/wait.txt")
     for name in fakes jobs web; do
