@@ -1,7 +1,8 @@
 /**
  * The queue: pg-boss on our own database, fed from the outbox. A command writes its job beside its change; the relay
  * hands each outbox row to pg-boss under the row's own id, so a relay that dies between the two steps repeats itself
- * without making a second job. Handlers run at least once and must bear a repeat.
+ * without making a second job. Handlers run at least once and must bear a repeat; how often each queue retries is set
+ * where migrate.ts makes the queues.
  */
 import 'server-only';
 import { asc, inArray, isNull, lte, and, sql } from 'drizzle-orm';
@@ -23,15 +24,12 @@ const RELAY_EVERY_MS = 250;
 const RELAY_AT_ONCE = 100;
 const HEARTBEAT_EVERY_MS = 5_000;
 export const HEARTBEAT_NAME = 'jobs';
-/** A job that failed this often stays in pgboss.job with state `failed`. */
-const RETRY_LIMIT = 6;
 
-export async function startJobs(connectionString: string, handlers: Record<Queue, JobHandler>): Promise<{ stop(): Promise<void> }> {
+export async function startJobs(connectionString: string, handlers: Partial<Record<Queue, JobHandler>>): Promise<{ stop(): Promise<void> }> {
   const boss = new PgBoss({ connectionString, schema: 'pgboss', migrate: false, max: 4, application_name: 'ohmstead-jobs' });
   boss.on('error', (error) => log.warn({ err: error }, 'queue error'));
   await boss.start();
   for (const [queue, handle] of Object.entries(handlers) as [Queue, JobHandler][]) {
-    await boss.createQueue(queue).catch(() => undefined);
     await boss.work<{ workshopId: string; payload: Record<string, unknown> }>(queue, { pollingIntervalSeconds: 0.5, batchSize: 1 }, async (jobs) => {
       for (const job of jobs) {
         try {
@@ -79,7 +77,7 @@ async function relay(boss: PgBoss): Promise<void> {
       .for('update', { skipLocked: true });
     if (waiting.length === 0) return;
     await boss.insert(
-      waiting.map((row) => ({ id: row.id, name: row.queue, data: { workshopId: row.workshopId, payload: row.payload }, retryLimit: RETRY_LIMIT, retryDelay: 2, retryBackoff: true })),
+      waiting.map((row) => ({ id: row.id, name: row.queue, data: { workshopId: row.workshopId, payload: row.payload } })),
     );
     await tx
       .update(outbox)
@@ -98,7 +96,7 @@ async function relayAuthMail(boss: PgBoss): Promise<void> {
   await withScope('auth', async (tx) => {
     const waiting = await tx.select().from(authMail).where(isNull(authMail.relayedAt)).orderBy(asc(authMail.createdAt)).limit(RELAY_AT_ONCE).for('update', { skipLocked: true });
     if (waiting.length === 0) return;
-    await boss.insert(waiting.map((row) => ({ id: row.id, name: 'send-mail', data: { workshopId: '', payload: row.payload }, retryLimit: RETRY_LIMIT, retryDelay: 2, retryBackoff: true })));
+    await boss.insert(waiting.map((row) => ({ id: row.id, name: 'send-mail', data: { workshopId: '', payload: row.payload } })));
     // The link in the mail is a secret: once relayed, only the queue holds it, until the mail is out.
     await tx
       .update(authMail)
