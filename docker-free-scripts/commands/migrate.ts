@@ -66,10 +66,8 @@ async function prepareJobStore(connectionString: string, client: pg.Client): Pro
     schedule: false,
     max: 2,
   });
-  let fault: Error | null = null;
-  boss.on('error', (error) => {
-    fault ??= error;
-  });
+  const faults: Error[] = [];
+  boss.on('error', (error) => faults.push(error));
   await boss.start();
   try {
     await boss.createQueue(SCHEDULE_QUEUE);
@@ -80,6 +78,7 @@ async function prepareJobStore(connectionString: string, client: pg.Client): Pro
   } finally {
     await boss.stop({ graceful: false, wait: true });
   }
+  const [fault] = faults;
   if (fault) throw fault;
   await client.query(`
     GRANT USAGE ON SCHEMA pgboss TO ohmstead_app;
