@@ -26,21 +26,21 @@ const LAYOUTS: Readonly<Record<string, readonly [PinOut, number, string]>> = {
 // Columns: id | layout | input | supply min max abs | output above V-, below V+ | input above V-, below V+ | GBW MHz | slew V/us |
 // noise nV | bias nA | mA per amplifier | unity-gain stable | phase reversal | source of the datasheet figures
 const TABLE = `
-tl071 | s741 | JFET | 6p 36d 36d | 1.5d 1.5d | 3d 0d | 3d | 13d | 18d | 0.065m | 1.4d | yes | yes | TI 1996 and ST TL071/TL072 sheets (±12 to ±13.5 V out, inputs -12 to +15 V at ±15 V, ±18 V absolute)
-tl072 | dual | JFET | 6p 36d 36d | 1.5d 1.5d | 3d 0d | 3d | 13d | 18d | 0.065m | 1.4d | yes | yes | TI 1996 and ST TL071/TL072 sheets (±12 to ±13.5 V out, inputs -12 to +15 V at ±15 V, ±18 V absolute)
-tl074 | quad | JFET | 6p 36d 36d | 1.5d 1.5d | 3d 0d | 3d | 13d | 18d | 0.065m | 1.4d | yes | yes | TI 1996 and ST TL071/TL072 sheets (±12 to ±13.5 V out, inputs -12 to +15 V at ±15 V, ±18 V absolute)
-tl061 | s741 | JFET | 7m 36m 36m | 1.5m 1.5m | 3m 0d | 1m | 3.5d | 42m | 0.03m | 0.2d | yes | yes | TI 1999
-tl062 | dual | JFET | 7m 36m 36m | 1.5m 1.5m | 3m 0d | 1m | 3.5d | 42m | 0.03m | 0.2d | yes | yes | TI 1999
-tl064 | quad | JFET | 7m 36m 36m | 1.5m 1.5m | 3m 0d | 1m | 3.5d | 42m | 0.03m | 0.2d | yes | yes | TI 1999
-tl081 | s741 | JFET | 7m 36m 36m | 1.5d 1.5d | 3d 0d | 3d | 13m | 18m | 0.03d | 1.4d | yes | yes | TI 2004
-tl082 | dual | JFET | 7m 36m 36m | 1.5d 1.5d | 3d 0d | 3d | 13m | 18m | 0.03d | 1.4d | yes | yes | TI 2004
-tl084 | quad | JFET | 7m 36m 36m | 1.5d 1.5d | 3d 0d | 3d | 13m | 18m | 0.03d | 1.4d | yes | yes | TI 2004
+tl071 | s741 | JFET | 7m 36d 36d | 1.5d 1.5d | 3d 0d | 3d | 13d | 18d | 0.065m | 1.4d | yes | yes | TI 1996 and ST TL071/TL072 sheets (±12 to ±13.5 V out, inputs -12 to +15 V at ±15 V, ±18 V absolute)
+tl072 | dual | JFET | 7m 36d 36d | 1.5d 1.5d | 3d 0d | 3d | 13d | 18d | 0.065m | 1.4d | yes | yes | TI 1996 and ST TL071/TL072 sheets (±12 to ±13.5 V out, inputs -12 to +15 V at ±15 V, ±18 V absolute)
+tl074 | quad | JFET | 7m 36d 36d | 1.5d 1.5d | 3d 0d | 3d | 13d | 18d | 0.065m | 1.4d | yes | yes | TI 1996 and ST TL071/TL072 sheets (±12 to ±13.5 V out, inputs -12 to +15 V at ±15 V, ±18 V absolute)
+tl061 | s741 | JFET | 7m 36p 36m | 1.5m 1.5m | 3m 0d | 1m | 3.5d | 42m | 0.03m | 0.2d | yes | yes | TI 1999
+tl062 | dual | JFET | 7m 36p 36m | 1.5m 1.5m | 3m 0d | 1m | 3.5d | 42m | 0.03m | 0.2d | yes | yes | TI 1999
+tl064 | quad | JFET | 7m 36p 36m | 1.5m 1.5m | 3m 0d | 1m | 3.5d | 42m | 0.03m | 0.2d | yes | yes | TI 1999
+tl081 | s741 | JFET | 7m 36p 36m | 1.5d 1.5d | 3d 0d | 3d | 13m | 18m | 0.03d | 1.4d | yes | yes | TI 2004
+tl082 | dual | JFET | 7m 36p 36m | 1.5d 1.5d | 3d 0d | 3d | 13m | 18m | 0.03d | 1.4d | yes | yes | TI 2004
+tl084 | quad | JFET | 7m 36p 36m | 1.5d 1.5d | 3d 0d | 3d | 13m | 18m | 0.03d | 1.4d | yes | yes | TI 2004
 tlc072 | dual | CMOS | 4.5m 16m 17m | - - | 0.5m 0.8m | 10m | 16m | 7m | 0.0015m | 1.9m | yes | no | -
 tlc074 | quad | CMOS | 4.5m 16m 17m | - - | 0.5m 0.8m | 10m | 16m | 7m | 0.0015m | 1.9m | yes | no | -
-ne5532 | dual | bipolar | 10m 30m 44m | 2m 2m | 2m 2m | 10m | 9m | 5m | 200m | 4m | yes | no | -
-ne5534 | s5534 | bipolar | 10m 30m 44m | 2m 2m | 2m 2m | 10m | 13m | 4m | 500m | 4m | no | no | -
-lm833 | dual | bipolar | 10m 30m 36m | 1.5m 1.5m | 2m 2m | 15m | 7m | 4.5m | 500m | 2.5m | yes | no | -
-lm837 | quad | bipolar | 10m 36m 36m | 2m 2m | 2m 2m | 25m | 10m | 4.5m | 500m | 2.5m | yes | no | -
+ne5532 | dual | bipolar | 10m 30p 44m | 2m 2m | 2m 2m | 10m | 9m | 5m | 200m | 4m | yes | no | -
+ne5534 | s5534 | bipolar | 10m 30p 44m | 2m 2m | 2m 2m | 10m | 13m | 4m | 500m | 4m | no | no | -
+lm833 | dual | bipolar | 10m 30p 36m | 1.5m 1.5m | 2m 2m | 15m | 7m | 4.5m | 500m | 2.5m | yes | no | -
+lm837 | quad | bipolar | 10m 36p 36m | 2m 2m | 2m 2m | 25m | 10m | 4.5m | 500m | 2.5m | yes | no | -
 lm358 | dual | bipolar | 3p 32p 32p | 0.005d 1.5d | 0d 1.5d | 0.7d | 0.3d | 40d | 20d | 0.35p | yes | yes | TI 2018
 lm324 | quad | bipolar | 3p 32p 32p | 0.005p 1.5p | 0p 1.5p | 1.2m | 0.5m | 35m | 20m | 0.175m | yes | yes | the quad of the LM358
 lm2904 | dual | bipolar | 3m 26m 26m | 0.005p 1.5p | 0p 1.5p | 0.7m | 0.3m | 40m | 20m | 0.35m | yes | yes | the automotive grade of the LM358
@@ -50,23 +50,23 @@ lmv321 | - | CMOS | 2.7m 5.5m 5.5m | 0.05m 0.05m | 0m 1m | 1m | 1m | 39m | 15m |
 lmv358 | dual | CMOS | 2.7m 5.5m 5.5m | 0.05m 0.05m | 0m 1m | 1m | 1m | 39m | 15m | 0.13m | yes | no | -
 lmv324 | quad | CMOS | 2.7m 5.5m 5.5m | 0.05m 0.05m | 0m 1m | 1m | 1m | 39m | 15m | 0.13m | yes | no | -
 4558 | dual | bipolar | 8m 36d 36d | 1d 1d | 1d 1d | 3m | 1d | 9m | 60d | 1.75m | yes | no | BA4558 sheet; TI's RC4558 is recalled at 1.7 V/µs and 30 V
-njm4556 | dual | bipolar | 4m 36m 36m | 1.5m 1.5m | 1.5m 1.5m | 8m | 3m | 8m | 50m | 4.5m | yes | no | -
-4559 | dual | bipolar | 8m 36m 36m | 1m 1m | 1m 1m | 4m | 2m | 8m | 40m | 1.75m | yes | no | -
-4560 | dual | bipolar | 8m 36m 36m | 1m 1m | 1m 1m | 10m | 4m | 8m | 40m | 2.2m | yes | no | -
-4580 | dual | bipolar | 4m 36m 36m | 1.5m 1.5m | 1.5m 1.5m | 15m | 5m | 5m | 100m | 3m | yes | no | -
-njm2043 | dual | bipolar | 8m 36m 36m | 2m 2m | 2m 2m | 14m | 6m | 6m | 250m | 3m | yes | no | -
-njm2068 | dual | bipolar | 8m 36m 36m | 1.5m 1.5m | 1.5m 1.5m | 27m | 6m | 5m | 150m | 2.5m | yes | no | -
-njm2114 | dual | bipolar | 6m 44m 44m | 2m 2m | 2m 2m | 13m | 15m | 3.3m | 500m | 4.5m | yes | no | -
-mc33078 | dual | bipolar | 10m 36m 36m | 1.3m 1.3m | 1m 1m | 16m | 7m | 4.5m | 300m | 2m | yes | no | -
-mc33079 | quad | bipolar | 10m 36m 36m | 1.3m 1.3m | 1m 1m | 16m | 7m | 4.5m | 300m | 2m | yes | no | -
+njm4556 | dual | bipolar | 4m 36p 36m | 1.5m 1.5m | 1.5m 1.5m | 8m | 3m | 8m | 50m | 4.5m | yes | no | -
+4559 | dual | bipolar | 8m 36p 36m | 1m 1m | 1m 1m | 4m | 2m | 8m | 40m | 1.75m | yes | no | -
+4560 | dual | bipolar | 8m 36p 36m | 1m 1m | 1m 1m | 10m | 4m | 8m | 40m | 2.2m | yes | no | -
+4580 | dual | bipolar | 4m 36p 36m | 1.5m 1.5m | 1.5m 1.5m | 15m | 5m | 5m | 100m | 3m | yes | no | -
+njm2043 | dual | bipolar | 8m 36p 36m | 2m 2m | 2m 2m | 14m | 6m | 6m | 250m | 3m | yes | no | -
+njm2068 | dual | bipolar | 8m 36p 36m | 1.5m 1.5m | 1.5m 1.5m | 27m | 6m | 5m | 150m | 2.5m | yes | no | -
+njm2114 | dual | bipolar | 6m 44p 44m | 2m 2m | 2m 2m | 13m | 15m | 3.3m | 500m | 4.5m | yes | no | -
+mc33078 | dual | bipolar | 10m 36p 36m | 1.3m 1.3m | 1m 1m | 16m | 7m | 4.5m | 300m | 2m | yes | no | -
+mc33079 | quad | bipolar | 10m 36p 36m | 1.3m 1.3m | 1m 1m | 16m | 7m | 4.5m | 300m | 2m | yes | no | -
 mc33172 | dual | bipolar | 3m 44m 44m | 0.2m 1m | 0m 1.8m | 1.8m | 2.1m | 32m | 20m | 0.2m | yes | no | -
 mc33174 | quad | bipolar | 3m 44m 44m | 0.2m 1m | 0m 1.8m | 1.8m | 2.1m | 32m | 20m | 0.2m | yes | no | -
 mc33178 | dual | bipolar | 4m 36m 36m | 1.2m 1.2m | 1m 1m | 5m | 2m | 8m | 100m | 0.42m | yes | no | -
 mc33179 | quad | bipolar | 4m 36m 36m | 1.2m 1.2m | 1m 1m | 5m | 2m | 8m | 100m | 0.42m | yes | no | -
-mc1458 | dual | bipolar | 10m 36m 36m | 1m 1m | 2m 2m | 1m | 0.5m | 45m | 80m | 1.2m | yes | no | -
-opa134 | sop07 | JFET | 5m 36m 36m | 1.2d 1.2d | 2.5d 2.5d | 8m | 20d | 8d | 0.005d | 4d | yes | no | the OPA2134's audio reference page
-opa2134 | dual | JFET | 5m 36m 36m | 1.2d 1.2d | 2.5d 2.5d | 8m | 20d | 8d | 0.005d | 4d | yes | no | audio reference page
-opa4134 | quad | JFET | 5m 36m 36m | 1.2d 1.2d | 2.5d 2.5d | 8m | 20d | 8d | 0.005d | 4d | yes | no | the OPA2134's audio reference page
+mc1458 | dual | bipolar | 10m 36p 36m | 1m 1m | 2m 2m | 1m | 0.5m | 45m | 80m | 1.2m | yes | no | -
+opa134 | sop07 | JFET | 5m 36p 36m | 1.2d 1.2d | 2.5d 2.5d | 8m | 20d | 8d | 0.005d | 4d | yes | no | the OPA2134's audio reference page
+opa2134 | dual | JFET | 5m 36p 36m | 1.2d 1.2d | 2.5d 2.5d | 8m | 20d | 8d | 0.005d | 4d | yes | no | audio reference page
+opa4134 | quad | JFET | 5m 36p 36m | 1.2d 1.2d | 2.5d 2.5d | 8m | 20d | 8d | 0.005d | 4d | yes | no | the OPA2134's audio reference page
 opa1641 | sbare | JFET | 4.5d 36d 40d | 0.2m 0.2m | -0.1m 3.5d | 11m | 20m | 5.1m | 0.002m | 1.8m | yes | no | TI 2010; surface mount only
 opa1642 | dual | JFET | 4.5d 36d 40d | 0.2m 0.2m | -0.1m 3.5d | 11m | 20m | 5.1m | 0.002m | 1.8m | yes | no | TI 2010; surface mount only
 opa1644 | quad | JFET | 4.5d 36d 40d | 0.2m 0.2m | -0.1m 3.5d | 11m | 20m | 5.1m | 0.002m | 1.8m | yes | no | TI 2010; surface mount only
@@ -78,19 +78,19 @@ opa2277 | dual | bipolar | 4m 36m 36m | 1.2m 1.2m | 2m 2m | 1m | 0.8m | 8m | 0.5
 opa340 | sbare | CMOS | 2.7m 5.5m 7m | 0.005m 0.005m | -0.3m -0.3m | 5.5m | 6m | 25m | 0.0002m | 0.75m | yes | no | -
 opa2340 | dual | CMOS | 2.7m 5.5m 7m | 0.005m 0.005m | -0.3m -0.3m | 5.5m | 6m | 25m | 0.0002m | 0.75m | yes | no | -
 opa4340 | quad | CMOS | 2.7m 5.5m 7m | 0.005m 0.005m | -0.3m -0.3m | 5.5m | 6m | 25m | 0.0002m | 0.75m | yes | no | -
-opa2604 | dual | JFET | 9m 48m 50m | 3m 3m | 3m 3m | 20m | 25m | 10m | 0.1m | 5.3m | yes | no | -
-lm741 | s741 | bipolar | 10m 36m 44m | 1m 1m | 2m 2m | 1m | 0.5m | 25m | 80m | 1.7m | yes | no | -
+opa2604 | dual | JFET | 9m 48p 50m | 3m 3m | 3m 3m | 20m | 25m | 10m | 0.1m | 5.3m | yes | no | -
+lm741 | s741 | bipolar | 10m 36p 44m | 1m 1m | 2m 2m | 1m | 0.5m | 25m | 80m | 1.7m | yes | no | -
 lm301 | s5534 | bipolar | 10m 36m 36m | 1m 1m | 2m 2m | 1m | 0.5m | 25m | 70m | 1.8m | no | no | -
-lm318 | s5534 | bipolar | 10m 40m 40m | 2m 2m | 3.5m 3.5m | 15m | 70m | 14m | 150m | 5m | yes | no | -
-lf351 | s741 | JFET | 7m 36m 36m | 1.5m 1.5m | 3m 0m | 4m | 13m | 25m | 0.05m | 1.8m | yes | yes | -
-lf353 | dual | JFET | 7m 36m 36d | 1.5m 1.5m | 3m 0m | 4d | 13d | 25d | 0.05d | 1.8d | yes | yes | National
-lf347 | quad | JFET | 7m 36m 36m | 1.5m 1.5m | 3m 0m | 4m | 13m | 25m | 0.05m | 1.8m | yes | yes | -
-lf355 | s741 | JFET | 10m 36m 40m | 2m 2m | 3m 0m | 2.5m | 5m | 20m | 0.03m | 2m | yes | yes | -
-lf356 | s741 | JFET | 10m 36m 40m | 2m 2m | 3m 0m | 5m | 12m | 12m | 0.03m | 5m | yes | yes | -
-lf357 | s741 | JFET | 10m 36m 40m | 2m 2m | 3m 0m | 20m | 50m | 12m | 0.03m | 5m | no | yes | -
-lf411 | s741 | JFET | 7m 36m 36m | 1.5m 1.5m | 3.5m 0.5m | 4m | 15m | 25m | 0.05m | 1.8m | yes | yes | -
-lf412 | dual | JFET | 7m 36m 36m | 1.5d 1.5d | 3.5d 0.5d | 4m | 15m | 25m | 0.05d | 1.8d | yes | yes | TI 2013
-lm4562 | dual | bipolar | 5m 34m 36m | 1m 1m | 2m 2m | 55m | 20m | 2.7m | 10m | 5m | yes | no | -
+lm318 | s5534 | bipolar | 10m 40p 40m | 2m 2m | 3.5m 3.5m | 15m | 70m | 14m | 150m | 5m | yes | no | -
+lf351 | s741 | JFET | 7m 36p 36m | 1.5m 1.5m | 3m 0m | 4m | 13m | 25m | 0.05m | 1.8m | yes | yes | -
+lf353 | dual | JFET | 7m 36p 36d | 1.5m 1.5m | 3m 0m | 4d | 13d | 25d | 0.05d | 1.8d | yes | yes | National
+lf347 | quad | JFET | 7m 36p 36m | 1.5m 1.5m | 3m 0m | 4m | 13m | 25m | 0.05m | 1.8m | yes | yes | -
+lf355 | s741 | JFET | 10m 36p 40m | 2m 2m | 3m 0m | 2.5m | 5m | 20m | 0.03m | 2m | yes | yes | -
+lf356 | s741 | JFET | 10m 36p 40m | 2m 2m | 3m 0m | 5m | 12m | 12m | 0.03m | 5m | yes | yes | -
+lf357 | s741 | JFET | 10m 36p 40m | 2m 2m | 3m 0m | 20m | 50m | 12m | 0.03m | 5m | no | yes | -
+lf411 | s741 | JFET | 7m 36p 36m | 1.5m 1.5m | 3.5m 0.5m | 4m | 15m | 25m | 0.05m | 1.8m | yes | yes | -
+lf412 | dual | JFET | 7m 36p 36m | 1.5d 1.5d | 3.5d 0.5d | 4m | 15m | 25m | 0.05d | 1.8d | yes | yes | TI 2013
+lm4562 | dual | bipolar | 5m 34p 36m | 1m 1m | 2m 2m | 55m | 20m | 2.7m | 10m | 5m | yes | no | -
 lm6172 | dual | bipolar | 5.5m 36m 36m | 1.5m 1.5m | 1.5m 1.5m | 100m | 3000m | 12m | 1200m | 2.3m | yes | no | -
 mcp601 | sbare | CMOS | 2.7d 6d 7d | 0.02d 0.02d | -0.3m 1.2m | 2.8d | 2.3d | 29m | 0.001m | 0.23d | yes | no | Microchip DS21314
 mcp602 | dual | CMOS | 2.7d 6d 7d | 0.02d 0.02d | -0.3m 1.2m | 2.8d | 2.3d | 29m | 0.001m | 0.23d | yes | no | Microchip DS21314
@@ -118,16 +118,16 @@ lmc6484 | quad | CMOS | 3d 15.5d 16m | 0.02d 0.02d | 0d 0d | 1.5m | 1.3m | 37m |
 lmc6062 | dual | CMOS | 4.5m 15.5m 16m | 0.02m 0.02m | -0.1m 2m | 0.1m | 0.035m | 83m | 0.00001m | 0.02m | yes | no | -
 lmc6082 | dual | CMOS | 4.5m 15.5m 16m | 0.02m 0.02m | -0.1m 2m | 1.3m | 1.5m | 22m | 0.00001m | 0.45m | yes | no | -
 ts912 | dual | CMOS | 2.7m 16m 18m | 0.05m 0.05m | 0m 0m | 1.4m | 1m | 30m | 0.001m | 0.4m | yes | no | -
-lt1013 | dual | bipolar | 3.4m 44m 44m | 0.015d 1m | 0d 1.5m | 0.8m | 0.4m | 22m | 15m | 0.35m | yes | no | Linear Technology and TI LT1013
-lt1014 | quad | bipolar | 3.4m 44m 44m | 0.015d 1m | 0d 1.5m | 0.8m | 0.4m | 22m | 15m | 0.35m | yes | no | the quad of the LT1013
+lt1013 | dual | bipolar | 3.4m 44p 44m | 0.015d 1m | 0d 1.5m | 0.8m | 0.4m | 22m | 15m | 0.35m | yes | no | Linear Technology and TI LT1013
+lt1014 | quad | bipolar | 3.4m 44p 44m | 0.015d 1m | 0d 1.5m | 0.8m | 0.4m | 22m | 15m | 0.35m | yes | no | the quad of the LT1013
 lt1012 | sop07 | bipolar | 2.4m 40m 40m | 1m 1m | 1m 1m | 0.8m | 0.2m | 14m | 0.025m | 0.38m | yes | no | -
-op07 | sop07 | bipolar | 6m 36m 44m | 2m 2m | 1m 1m | 0.6m | 0.3m | 9.6m | 1.5m | 2.7m | yes | no | -
-op27 | sop07 | bipolar | 8m 36m 44m | 1.2d 1.2d | 2.7d 2.7d | 8d | 2.8d | 3d | 10d | 3m | yes | no | Analog Devices OP27
+op07 | sop07 | bipolar | 6m 36p 44m | 2m 2m | 1m 1m | 0.6m | 0.3m | 9.6m | 1.5m | 2.7m | yes | no | -
+op27 | sop07 | bipolar | 8m 36p 44m | 1.2d 1.2d | 2.7d 2.7d | 8d | 2.8d | 3d | 10d | 3m | yes | no | Analog Devices OP27
 op37 | sop07 | bipolar | 8m 36m 44m | 1.2m 1.2m | 2.7m 2.7m | 63m | 17m | 3m | 10m | 3m | no | no | -
 op77 | sop07 | bipolar | 6m 36m 44m | 2m 2m | 1m 1m | 0.6m | 0.3m | 9.6m | 1.2m | 2m | yes | no | -
 op177 | sop07 | bipolar | 6m 36m 44m | 2m 2m | 1m 1m | 0.6m | 0.3m | 10m | 1.2m | 1.6m | yes | no | -
-op249 | dual | JFET | 9m 36m 36m | 2.5m 2.5m | 3m 2m | 4.7m | 22m | 17m | 0.03m | 3.5m | yes | no | -
-op275 | dual | bipolar | 9m 44m 44m | 1.5m 1.5m | 4.5m 4.5m | 9m | 22m | 6m | 100m | 2m | yes | no | -
+op249 | dual | JFET | 9m 36p 36m | 2.5m 2.5m | 3m 2m | 4.7m | 22m | 17m | 0.03m | 3.5m | yes | no | -
+op275 | dual | bipolar | 9m 44p 44m | 1.5m 1.5m | 4.5m 4.5m | 9m | 22m | 6m | 100m | 2m | yes | no | -
 op279 | dual | bipolar | 4.5m 12m 16m | 0.1m 0.1m | 0m 0m | 5m | 3m | 22m | 300m | 1.9m | yes | no | -
 ca3130 | s5534 | CMOS | 5m 16m 16m | 0.01m 0.01m | -0.5m 3m | 15m | 10m | 23m | 0.005m | 2m | no | no | -
 ca3140 | sstrobe | CMOS | 4d 36d 36m | 0.1m 2.5m | -0.5d 2.5m | 4.5m | 9m | 40m | 0.01d | 4m | yes | no | Harris/Intersil CA3140
@@ -168,7 +168,7 @@ function readRow(line: string): OpAmpFamily {
     units,
     pinOut: pins === null ? null : practice(pins, PIN_SOURCE),
     input: input(kind),
-    supply: supplyOf(supply, source),
+    supply: supplyOf(supply, source === '-' || supply.includes('p') ? 'run on ±12 to ±15 V throughout the trade; exact limit to be read in the datasheet' : source),
     outputAboveNegativeVolts: noted(outLow, source),
     outputBelowPositiveVolts: noted(outHigh, source),
     inputAboveNegativeVolts: noted(inLow, source),
