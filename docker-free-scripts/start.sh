@@ -70,11 +70,12 @@ node --import tsx docker-free-scripts/commands/migrate.ts >"$DATA/logs/migrate.l
   fail "the database could not be brought up to date: $(tail -n 1 "$DATA/logs/migrate.log")"
 if [ "$($DB psql -Atc 'SELECT count(*) FROM (SELECT 1 FROM workshop LIMIT 1) AS one')" = 0 ]; then
   say "Filling the empty database with the demo workshops"
-  npm run -s db:seed </dev/null >"$DATA/logs/seed.log" 2>&1 9>&- || fail "the demo data could not be written: see $DATA/logs/seed.log ($(grep -m 1 -i error "$DATA/logs/seed.log" | cut -c1-200))"
+  # Others on this machine have no business with the sign-ins.
+  (umask 077 && npm run -s db:seed) </dev/null >"$DATA/logs/seed.log" 2>&1 9>&- || fail "the demo data could not be written: see $DATA/logs/seed.log ($(grep -m 1 -i error "$DATA/logs/seed.log" | cut -c1-200))"
 fi
 need_build 9>&- || fail "the production build failed: see $DATA/logs/build.log ($(grep -m 1 -iE 'error' "$DATA/logs/build.log" | cut -c1-200))"
 
-serve "$RUN" "$PORT" || fail "it did not start: $SERVE_FAULT"
+serve "$RUN" "$PORT" 9>&- || fail "it did not start: $SERVE_FAULT"
 printf '%s\n' "$PORT" >"$RUN/port"
 exec 9>&-
 
