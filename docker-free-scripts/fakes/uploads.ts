@@ -201,6 +201,7 @@ export class Uploads {
   private async fail(file: StoredFile, status: number, error: string): Promise<Answer> {
     this.storage.dropBytes(`file:${file.key}`);
     file.received = 0;
+    file.fileHash = null;
     file.callback = 'failed';
     this.storage.changed();
     const registration = this.state.registrations[file.key];
