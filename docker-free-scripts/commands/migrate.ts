@@ -22,6 +22,7 @@ const QUEUES = {
   'send-mail': { retryLimit: 8, retryDelay: 15, retryBackoff: true, expireInSeconds: 120 },
   'send-order': { retryLimit: 8, retryDelay: 15, retryBackoff: true, expireInSeconds: 180 },
   'payment-event': { retryLimit: 10, retryDelay: 5, retryBackoff: true, expireInSeconds: 60 },
+  'refund-payment': { retryLimit: 10, retryDelay: 5, retryBackoff: true, expireInSeconds: 60 },
   'read-upload': { retryLimit: 3, retryDelay: 5, retryBackoff: true, expireInSeconds: 600 },
   'match-revision': { retryLimit: 3, retryDelay: 5, retryBackoff: true, expireInSeconds: 600 },
   'match-stock-changed': { retryLimit: 3, retryDelay: 5, retryBackoff: true, expireInSeconds: 600 },

@@ -21,7 +21,7 @@ export type Policy = readonly Role[] | 'everyone';
 
 /** Queues of the job process; `queue` names one and its payload is checked there. */
 export interface Job {
-  readonly queue: 'send-mail' | 'match-revision' | 'match-stock-changed' | 'read-upload' | 'payment-event' | 'send-order';
+  readonly queue: 'send-mail' | 'match-revision' | 'match-stock-changed' | 'read-upload' | 'payment-event' | 'send-order' | 'refund-payment';
   readonly payload: Record<string, unknown>;
   readonly runAfter?: Date;
 }

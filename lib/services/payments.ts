@@ -32,6 +32,8 @@ export type Checkout = {
   currency: string;
   orderId: string | null;
   attempt: number | null;
+  /** Our own ids, as given when it was made. */
+  metadata: Readonly<Record<string, string>>;
   /** Null until a card was tried. */
   paymentIntentId: string | null;
   expiresAt: Date;
@@ -51,11 +53,16 @@ export type CheckoutRequest = {
   cancelUrl: string;
   /** One per order and attempt, so that a double click makes one session. */
   idempotencyKey: string;
+  /** Ids of ours that come back with the session and every event about it. */
+  metadata?: Readonly<Record<string, string>>;
 };
+
+/** Worth pressing again, or trying again from a job with the same key. */
+export const isPassing = (failure: PaymentFailure): boolean => failure.reason === 'busy' || failure.reason === 'unreachable';
 
 /** Opens a page where an order is paid by card, the money passed on to the supplier's account. */
 export async function createCheckout(request: CheckoutRequest): Promise<{ ok: true; checkout: Checkout } | PaymentFailure> {
-  const about = { order_id: request.orderId, attempt: String(request.attempt) };
+  const about = { ...request.metadata, order_id: request.orderId, attempt: String(request.attempt) };
   return attempt(async (stripe) => {
     const session = await stripe.checkout.sessions.create(
       {
@@ -237,6 +244,7 @@ function checkoutFrom(session: Stripe.Checkout.Session): Checkout {
     currency: (session.currency ?? '').toUpperCase(),
     orderId: session.client_reference_id,
     attempt: attemptText === undefined ? null : Number(attemptText),
+    metadata: { ...session.metadata },
     paymentIntentId: typeof session.payment_intent === 'string' ? session.payment_intent : (session.payment_intent?.id ?? null),
     expiresAt: new Date(session.expires_at * 1000),
   };

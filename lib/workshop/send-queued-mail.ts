@@ -9,5 +9,5 @@ const payload = z.object({ to: z.email(), subject: z.string().min(1).max(200), t
 export async function sendQueuedMail(job: HandledJob): Promise<void> {
   const mail = payload.parse(job.payload);
   const sent = await sendMail({ to: mail.to, subject: mail.subject, text: mail.text, messageIdFrom: mail.cause });
-  if (!sent.ok) throw new Error(`the mail server did not take it: ${sent.problem}`);
+  if (!sent.ok) throw new Error(`the mail server did not take it: ${sent.message}`);
 }

@@ -1,0 +1,4 @@
+import { route } from '@/lib/api/route';
+import { changeSupplier } from '@/lib/purchasing/suppliers';
+
+export const PUT = route(changeSupplier);
