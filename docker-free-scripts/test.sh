@@ -7,9 +7,11 @@ set -euo pipefail
 . "$(dirname "${BASH_SOURCE[0]}")/setup.sh"
 
 ALL="types lint format boundaries migrations unused unit reference lists integration api browser faults"
+usage() { sed -n '2,5p' "${BASH_SOURCE[0]}" | sed 's/^# \{0,1\}//'; }
+if [ "${1:-}" = --help ]; then usage; exit 0; fi
 PARTS=" ${*:-$ALL} "
 for part in $PARTS; do
-  [[ " $ALL " == *" $part "* ]] || { sed -n '2,5p' "${BASH_SOURCE[0]}" | sed 's/^# \{0,1\}//'; fail "there is no part '$part'"; }
+  [[ " $ALL " == *" $part "* ]] || { usage; fail "there is no part '$part'"; }
 done
 wants() { [[ $PARTS == *" $1 "* ]]; }
 has_tests() { [ -n "$(find "tests/$1" -name '*.test.*' -print -quit 2>/dev/null)" ]; }
@@ -48,6 +50,7 @@ need_packages "${packages[@]}"
 need_node_modules 8>&-
 if [ $NEEDS_SERVER = yes ]; then rm -rf "$OUT"; fi
 mkdir -p "$OUT" "$RUN"
+chmod 0700 "$OUT"
 : >"$OUT/results.jsonl"
 
 # Everything runs in its own process group with a time limit, so that a signal to this script ends it at once.
