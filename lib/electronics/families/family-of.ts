@@ -32,7 +32,7 @@ function candidatesIn(text: string): string[] {
 }
 
 /** Values as people write them: a plain number passes through to the number tables, everything with a unit stops here. */
-const LOOKS_LIKE_VALUE = /^[.,]?\d+(?:[.,]\d+)?\s*(?:[RKMGPU]|[NPUM]F|[MU]?H|OHMS?|Ω|%|V|HZ|KHZ|MHZ)$|^\d*[RKMNPU]\d{1,3}[FGJKM]?$/;
+const LOOKS_LIKE_VALUE = /^[.,]?\d+(?:[.,]\d+)?\s*(?:[RKMGPU]|[NPUM]F|[MU]?H|OHMS?|Ω|%|V|HZ|KHZ|MHZ)$/;
 const BARE_NUMBERS = new Set(['555', '556', '741']);
 
 function readCompact(compact: string): FamilyName | null {
