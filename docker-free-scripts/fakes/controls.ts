@@ -7,7 +7,7 @@ import { FORGERIES } from './webhooks';
 const MOST_WAIT_MS = 60_000;
 const MOST_TIMES = 100;
 
-export type Controlled = Shown & { reset: () => void; changed: () => void };
+export type Controlled = Shown & { reset: () => Promise<void>; changed: () => void };
 
 /** Answers a control. Throws BadRequest for an order that makes no sense. */
 export async function controls(call: Call, held: Controlled): Promise<Answer> {
@@ -18,7 +18,7 @@ export async function controls(call: Call, held: Controlled): Promise<Answer> {
     case 'GET health':
       return json(200, { ok: true });
     case 'POST reset':
-      held.reset();
+      await held.reset();
       return json(200, { ok: true });
     case 'POST next':
       return json(200, troubles.order(given));

@@ -51,10 +51,8 @@ function readBody(request: IncomingMessage, limitBytes: number): Promise<Buffer>
     let size = 0;
     request.on('data', (chunk: Buffer) => {
       size += chunk.length;
-      if (size > limitBytes) {
-        request.pause();
-        reject(new TooLarge(`body above ${limitBytes} bytes`));
-      } else chunks.push(chunk);
+      if (size <= limitBytes) chunks.push(chunk);
+      else reject(new TooLarge(`body above ${limitBytes} bytes`));
     });
     request.on('end', () => resolve(Buffer.concat(chunks)));
     request.on('error', () => reject(new Interrupted(Buffer.concat(chunks))));
@@ -90,9 +88,30 @@ export const text = (status: number, body: string): Answer => ({ status, headers
 /** 303 makes the browser fetch the target with GET whatever the form's method was. */
 export const redirect = (location: string): Answer => ({ status: 303, headers: { location } });
 
+const DRAIN_LIMIT_MS = 2_000;
+
+/**
+ * Lets the rest of a body come and throws it away, for a while: a sender that is cut off while it writes never reads
+ * the answer, and a body left in the connection would be taken for the next request.
+ */
+export function drained(request: IncomingMessage): Promise<void> {
+  if (request.complete || request.destroyed) return Promise.resolve();
+  return new Promise((resolve) => {
+    const timer = setTimeout(resolve, DRAIN_LIMIT_MS);
+    const done = (): void => {
+      clearTimeout(timer);
+      resolve();
+    };
+    request.once('end', done);
+    request.once('close', done);
+    request.resume();
+  });
+}
+
 export function send(response: ServerResponse, answer: Answer): void {
   if (response.destroyed || response.headersSent) return;
   response.writeHead(answer.status, {
+    ...(response.req.complete ? {} : { connection: 'close' }),
     'cache-control': 'no-store',
     'x-content-type-options': 'nosniff',
     'referrer-policy': 'no-referrer',

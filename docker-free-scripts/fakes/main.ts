@@ -2,11 +2,11 @@
  * The local stand-ins in one process: HTTP (payments, upload store, pages, controls) and SMTP, on 127.0.0.1 only.
  *   node --env-file=.env.local --import tsx docker-free-scripts/fakes/main.ts
  */
-import { createServer, type IncomingMessage, type ServerResponse } from 'node:http';
+import { type IncomingMessage, createServer } from 'node:http';
 import { checkoutPage } from './checkout-page';
 import { isLoopbackAddress, readConfiguration } from './configuration';
 import { controls } from './controls';
-import { type Answer, BadRequest, type Call, Interrupted, TooLarge, callFrom, json, send, text } from './http';
+import { type Answer, BadRequest, type Call, Interrupted, TooLarge, callFrom, drained, json, send, text } from './http';
 import { Mailbox, type StoredMail } from './mailbox';
 import { filePage, pages } from './pages';
 import { PaymentRefusal, PaymentRules, type PaymentState, emptyPayments } from './payment-rules';
@@ -18,6 +18,8 @@ import { type Delivery, Webhooks } from './webhooks';
 
 /** The connection is to be cut, as ordered. */
 class Dropped extends Error {}
+
+const RESET_LIMIT_MS = 12_000;
 
 const configuration = configurationOrExit();
 const storage = new Storage(configuration.dataFolder);
@@ -35,14 +37,16 @@ const mailbox: Mailbox = new Mailbox(storage, troubles, storage.keep<StoredMail[
 const shown = { rules, webhooks, mailbox, uploads, troubles };
 
 const server = createServer((request, response) => {
-  void answer(callFrom(request)).then(
-    (given) => {
-      // A body that was not read to its end would be taken for the next request.
-      if (!request.complete) given.headers = { ...given.headers, connection: 'close' };
+  void answer(callFrom(request))
+    .catch((error: unknown) => failure(request, error))
+    .then(async (given) => {
+      if (given === null) {
+        request.socket.destroy();
+        return;
+      }
+      await drained(request);
       send(response, given);
-    },
-    (error: unknown) => fail(request, response, error),
-  );
+    });
 });
 
 await mailbox.listen(configuration.smtpPort);
@@ -95,23 +99,21 @@ async function troubled(service: Service, call: Call, work: (trouble: () => Prom
   return answered;
 }
 
-function fail(request: IncomingMessage, response: ServerResponse, error: unknown): void {
-  if (error instanceof Dropped || error instanceof Interrupted) {
-    request.socket.destroy();
-    return;
-  }
-  if (error instanceof BadRequest) send(response, json(400, { error: error.message }));
-  else if (error instanceof PaymentRefusal) send(response, json(error.status, { error: error.message }));
-  else if (error instanceof TooLarge) send(response, { ...json(413, { error: error.message }), headers: { 'content-type': 'application/json', connection: 'close' } });
-  else {
-    process.stderr.write(`stand-ins: ${request.method ?? ''} ${(request.url ?? '').split('?')[0] ?? ''}: ${error instanceof Error ? (error.stack ?? error.message) : String(error)}\n`);
-    send(response, json(500, { error: 'the stand-in failed; see its log' }));
-  }
+/** What is answered to an error; null cuts the connection. */
+function failure(request: IncomingMessage, error: unknown): Answer | null {
+  if (error instanceof Dropped || error instanceof Interrupted) return null;
+  if (error instanceof BadRequest) return json(400, { error: error.message });
+  if (error instanceof PaymentRefusal) return json(error.status, { error: error.message });
+  if (error instanceof TooLarge) return json(413, { error: error.message });
+  process.stderr.write(`stand-ins: ${request.method ?? ''} ${(request.url ?? '').split('?')[0] ?? ''}: ${error instanceof Error ? (error.stack ?? error.message) : String(error)}\n`);
+  return json(500, { error: 'the stand-in failed; see its log' });
 }
 
-function reset(): void {
+async function reset(): Promise<void> {
   troubles.clear();
   webhooks.clear();
+  // A message on its way would otherwise arrive in what comes after.
+  await webhooks.settled(RESET_LIMIT_MS);
   Object.assign(paymentState, emptyPayments());
   payments.forgetKeys();
   uploads.clear();
