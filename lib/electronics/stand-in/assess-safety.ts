@@ -6,7 +6,7 @@ export const SAFETY_CAUTION =
   'Same type and approval only: the local electrical code rules here, and mains work belongs to a licensed person.';
 
 const SAFETY_WORDS: readonly (readonly [RegExp, string])[] = [
-  [/\b[XY][1-4]\b/i, 'a class X or Y capacitor'],
+  [/\b[XY][1-4]\b/, 'a class X or Y capacitor'],
   [/\bthermal\s+(?:fuse|cut-?out)/i, 'a thermal fuse'],
   [/\b(?:varistor|MOV)\b/i, 'a varistor'],
   [/\b(?:fusible|flame-?proof)\b/i, 'a fusible resistor'],
