@@ -1,5 +1,6 @@
 /** Stand-in checks for capacitors: what the dielectric means for the use, and voltage with derating. */
 import type { Dielectric, PartSpec } from '../part-spec';
+import { toNumber } from '../quantity';
 import { compareTolerance, compareValue } from './assess-value';
 import { type Check, effect, fail, highestRail, measure, pass, remark, spanOf, type StandInContext, unknown } from './check';
 
@@ -110,7 +111,7 @@ function polarity(wanted: PartSpec, offered: PartSpec): Check {
   if (to === null) return pass('polarised', ...words, 'Nothing says that it is polarised.');
   if (!POLARISED.includes(to)) return pass('polarised', ...words, 'It may go in either way round.');
   if (from !== null) return POLARISED.includes(from) ? pass('polarised', ...words, 'Both are polarised.') : fail('polarised', ...words, 'A polarised capacitor in a place that swings both ways breaks down.');
-  const farads = wanted.value === null ? 0 : wanted.value.significand * 10 ** wanted.value.exponent;
+  const farads = wanted.value === null ? 0 : toNumber(wanted.value);
   return farads >= 1e-6
     ? unknown('polarised', ...words, 'May the place take a polarised one? See whether its voltage ever turns round.')
     : fail('polarised', ...words, 'Values below 1 µF are meant as film or ceramic; a polarised one does not go there.');

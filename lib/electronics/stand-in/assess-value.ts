@@ -1,46 +1,23 @@
 /** Value and tolerance: checks that resistors, capacitors, inductors and potentiometers share. */
 import type { PartSpec, Quantity } from '../part-spec';
+import { printQuantity } from '../print-quantity';
+import { equalQuantity, toNumber } from '../quantity';
 import { type Check, effect, fail, pass, remark, type StandInContext, unknown } from './check';
 
 /** Beyond half as much again it is another value, no stand-in. */
 const FARTHEST_PERCENT = 50;
 
-export function asNumber({ significand, exponent }: Quantity): number {
-  return Number(`${significand}e${exponent}`);
-}
-
-const PREFIXES: readonly (readonly [number, string])[] = [
-  [9, 'G'],
-  [6, 'M'],
-  [3, 'k'],
-  [0, ''],
-  [-3, 'm'],
-  [-6, 'µ'],
-  [-9, 'n'],
-  [-12, 'p'],
-];
-const SYMBOLS: Readonly<Record<Quantity['unit'], string>> = { ohm: 'Ω', farad: 'F', henry: 'H', hertz: 'Hz', volt: 'V', ampere: 'A', watt: 'W' };
-
-export function say(quantity: Quantity | null): string {
-  if (quantity === null) return 'not said';
-  const value = asNumber(quantity);
-  const [power, prefix] = PREFIXES.find(([exponent]) => Math.abs(value) >= 10 ** exponent * 0.9999999) ?? [0, ''];
-  return `${Number((value / 10 ** power).toPrecision(6))} ${prefix}${SYMBOLS[quantity.unit]}`;
-}
-
-function equal(a: Quantity, b: Quantity): boolean {
-  return a.significand === b.significand && a.exponent === b.exponent && a.unit === b.unit;
-}
+const say = (value: Quantity | null): string => (value === null ? 'not said' : printQuantity(value));
 
 export function compareValue(wanted: PartSpec, offered: PartSpec, { lineTolerancePercent, use }: StandInContext): Check {
   const [a, b] = [wanted.value, offered.value];
   const words = [say(a), say(b)] as const;
   if (a === null || b === null) return unknown('value', ...words, `The ${a === null ? 'wanted' : 'offered'} value is not said.`);
   if (a.unit !== b.unit) return fail('value', ...words, 'They are measured in different units.');
-  if (equal(a, b)) return pass('value', ...words, 'Same value.');
-  const wantedValue = asNumber(a);
+  if (equalQuantity(a, b)) return pass('value', ...words, 'Same value.');
+  const wantedValue = toNumber(a);
   if (wantedValue === 0) return fail('value', ...words, 'A link was wanted.');
-  const percent = (asNumber(b) / wantedValue - 1) * 100;
+  const percent = (toNumber(b) / wantedValue - 1) * 100;
   const shown = `${percent > 0 ? '+' : '−'}${Number(Math.abs(percent).toPrecision(3))} %`;
   const bears = lineTolerancePercent ?? wanted.tolerancePercent;
   if (bears !== null && bears !== undefined && Math.abs(percent) <= bears + 1e-9) return remark('value', ...words, `${shown}, inside the ${bears} % that the line bears.`);
