@@ -13,9 +13,14 @@ export async function checkoutPage(call: Call, rules: PaymentRules, changed: () 
     session = rules.getSession(id);
   } catch (error) {
     if (!(error instanceof PaymentRefusal)) throw error;
-    return page('No such payment', markup`<p>This address belongs to no payment. It may be from before the stand-in was restarted.</p>`, { status: 404 });
+    return page(
+      'No such payment',
+      markup`<p>This address belongs to no payment. It may be from before the stand-in was restarted.</p>`,
+      { status: 404 },
+    );
   }
-  if (session.status === 'complete') return call.method === 'POST' ? redirect(returnAddress(session)) : finished(session);
+  if (session.status === 'complete')
+    return call.method === 'POST' ? redirect(returnAddress(session)) : finished(session);
   if (session.status === 'expired') return expired(session);
   if (call.method !== 'POST') return form(session, null);
 
@@ -60,16 +65,24 @@ ${session.cancelUrl ? markup`<p><a href="${session.cancelUrl}">Cancel and go bac
 <dt><code>4000 0000 0000 0127</code></dt><dd>is declined: wrong security code</dd>
 </dl>
 </div>`;
-  return page(`Pay ${money(session.amountMinor, session.currency)}`, content, { status: problem ? 402 : 200, formTargets: [new URL(returnAddress(session)).origin] });
+  return page(`Pay ${money(session.amountMinor, session.currency)}`, content, {
+    status: problem ? 402 : 200,
+    formTargets: [new URL(returnAddress(session)).origin],
+  });
 }
 
 function finished(session: Session): Answer {
-  return page('Paid', markup`${facts(session)}<p>This payment is made. <a href="${returnAddress(session)}">Go back</a></p>`);
+  return page(
+    'Paid',
+    markup`${facts(session)}<p>This payment is made. <a href="${returnAddress(session)}">Go back</a></p>`,
+  );
 }
 
 function expired(session: Session): Answer {
   const back = session.cancelUrl ? markup`<p><a href="${session.cancelUrl}">Go back</a></p>` : raw('');
-  return page('This payment has expired', markup`${facts(session)}<p>Start it again from the order.</p>${back}`, { status: 410 });
+  return page('This payment has expired', markup`${facts(session)}<p>Start it again from the order.</p>${back}`, {
+    status: 410,
+  });
 }
 
 function facts(session: Session): Html {
@@ -84,7 +97,8 @@ function fieldProblem(fields: URLSearchParams): string | null {
   const expiry = /^(0[1-9]|1[0-2])\s*\/\s*(\d{2})$/.exec((fields.get('expiry') ?? '').trim());
   if (!expiry) return 'The expiry date is incomplete: write it as MM/YY.';
   // A card is good until the end of its month.
-  if (Date.UTC(2000 + Number(expiry[2]), Number(expiry[1]), 1) <= Date.now()) return "Your card's expiry date is in the past.";
+  if (Date.UTC(2000 + Number(expiry[2]), Number(expiry[1]), 1) <= Date.now())
+    return "Your card's expiry date is in the past.";
   if (!/^\d{3,4}$/.test((fields.get('cvc') ?? '').trim())) return "Your card's security code is incomplete.";
   return null;
 }

@@ -21,13 +21,20 @@ export function readConfiguration(record: Readonly<Record<string, string | undef
   const token = readUploadToken(required(record, 'UPLOADTHING_TOKEN', 'base64 of {"apiKey":"sk_fake_…","appId":"…"}'));
   const origin = record.NEXTAUTH_URL || 'http://localhost:3000';
   const webhookUrl = record.FAKES_WEBHOOK_URL || `${origin.replace(/\/$/, '')}/api/webhooks/stripe`;
-  if (!isLoopbackAddress(webhookUrl)) throw new Error('FAKES_WEBHOOK_URL (or NEXTAUTH_URL) must be a loopback address such as http://localhost:3000/api/webhooks/stripe');
+  if (!isLoopbackAddress(webhookUrl))
+    throw new Error(
+      'FAKES_WEBHOOK_URL (or NEXTAUTH_URL) must be a loopback address such as http://localhost:3000/api/webhooks/stripe',
+    );
   return {
     port: readNumber(record, 'FAKES_PORT', 4601, 65_535),
     smtpPort: readNumber(record, 'FAKES_SMTP_PORT', 4602, 65_535),
     dataFolder: record.FAKES_DATA || null,
     paymentKey: fakeKey('STRIPE_SECRET_KEY', required(record, 'STRIPE_SECRET_KEY', 'sk_test_fake_…'), 'sk_test_fake_'),
-    webhookSecret: fakeKey('STRIPE_WEBHOOK_SECRET', required(record, 'STRIPE_WEBHOOK_SECRET', 'whsec_fake_…'), 'whsec_fake_'),
+    webhookSecret: fakeKey(
+      'STRIPE_WEBHOOK_SECRET',
+      required(record, 'STRIPE_WEBHOOK_SECRET', 'whsec_fake_…'),
+      'whsec_fake_',
+    ),
     webhookUrl,
     uploadKey: fakeKey('UPLOADTHING_TOKEN (its apiKey)', token.apiKey, 'sk_fake_'),
     uploadAppId: token.appId,
@@ -56,24 +63,32 @@ function fakeKey(name: string, key: string, prefix: string): string {
   return key;
 }
 
-function readNumber(record: Readonly<Record<string, string | undefined>>, name: string, fallback: number, most: number): number {
+function readNumber(
+  record: Readonly<Record<string, string | undefined>>,
+  name: string,
+  fallback: number,
+  most: number,
+): number {
   const text = record[name];
   if (!text) return fallback;
   const value = Number(text);
-  if (!Number.isInteger(value) || value < 1 || value > most) throw new Error(`${name} must be a whole number from 1 to ${most}`);
+  if (!Number.isInteger(value) || value < 1 || value > most)
+    throw new Error(`${name} must be a whole number from 1 to ${most}`);
   return value;
 }
 
 function readUploadToken(text: string): { apiKey: string; appId: string } {
-  const failure = new Error('UPLOADTHING_TOKEN is not base64 of {"apiKey":"sk_fake_…","appId":"…","regions":["local"]}');
+  const failure = new Error(
+    'UPLOADTHING_TOKEN is not base64 of {"apiKey":"sk_fake_…","appId":"…","regions":["local"]}',
+  );
   let value: unknown;
   try {
     value = JSON.parse(Buffer.from(text, 'base64').toString('utf8'));
   } catch {
     throw failure;
   }
-  if (typeof value !== 'object' || value === null) throw failure;
-  const { apiKey, appId } = value as Record<string, unknown>;
+  if (typeof value !== 'object' || value === null || !('apiKey' in value) || !('appId' in value)) throw failure;
+  const { apiKey, appId } = value;
   if (typeof apiKey !== 'string' || typeof appId !== 'string') throw failure;
   return { apiKey, appId };
 }

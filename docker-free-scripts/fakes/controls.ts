@@ -27,7 +27,9 @@ export async function controls(call: Call, held: Controlled): Promise<Answer> {
     case 'GET webhooks':
       return json(200, webhooks.list());
     case 'GET settled':
-      return json(200, { settled: await webhooks.settled(Math.min(MOST_WAIT_MS, Number(call.query.get('limitMs')) || 10_000)) });
+      return json(200, {
+        settled: await webhooks.settled(Math.min(MOST_WAIT_MS, Number(call.query.get('limitMs')) || 10_000)),
+      });
     case 'POST webhooks/hold':
       webhooks.hold();
       return json(200, { ok: true });
@@ -42,7 +44,10 @@ export async function controls(call: Call, held: Controlled): Promise<Answer> {
     case 'POST webhooks/forge':
       return json(200, await forge(given, held));
     case 'POST payments/pay': {
-      const outcome = rules.payWithCard(wordOf(given, 'session'), typeof given.card === 'string' ? given.card : '4242424242424242');
+      const outcome = rules.payWithCard(
+        wordOf(given, 'session'),
+        typeof given.card === 'string' ? given.card : '4242424242424242',
+      );
       held.changed();
       return json(200, outcome);
     }

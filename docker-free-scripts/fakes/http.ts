@@ -75,7 +75,8 @@ export async function jsonBody(call: Call, limitBytes = 1_000_000): Promise<Reco
 
 export class BadRequest extends Error {}
 
-export const isRecord = (value: unknown): value is Record<string, unknown> => typeof value === 'object' && value !== null && !Array.isArray(value);
+export const isRecord = (value: unknown): value is Record<string, unknown> =>
+  typeof value === 'object' && value !== null && !Array.isArray(value);
 
 export const json = (status: number, value: unknown, headers: Record<string, string> = {}): Answer => ({
   status,
@@ -83,7 +84,11 @@ export const json = (status: number, value: unknown, headers: Record<string, str
   body: JSON.stringify(value),
 });
 
-export const text = (status: number, body: string): Answer => ({ status, headers: { 'content-type': 'text/plain; charset=utf-8' }, body });
+export const text = (status: number, body: string): Answer => ({
+  status,
+  headers: { 'content-type': 'text/plain; charset=utf-8' },
+  body,
+});
 
 /** 303 makes the browser fetch the target with GET whatever the form's method was. */
 export const redirect = (location: string): Answer => ({ status: 303, headers: { location } });

@@ -89,7 +89,11 @@ export class Mailbox {
   }
 
   /** The mails that match, newest first, as soon as there are `count` of them or the time is over. */
-  async matching(wanted: { to: string | null; subject: string | null; messageId: string | null }, count: number, waitMs: number): Promise<StoredMail[]> {
+  async matching(
+    wanted: { to: string | null; subject: string | null; messageId: string | null },
+    count: number,
+    waitMs: number,
+  ): Promise<StoredMail[]> {
     const matches = () =>
       this.mails
         .filter(
@@ -119,7 +123,8 @@ export class Mailbox {
     const to = session.envelope.rcptTo.map((recipient) => recipient.address.toLowerCase());
     const trouble = this.troubles.take('mail', `MAIL ${to.join(' ')}`);
     if (trouble?.delayMs) await delay(trouble.delayMs);
-    if (trouble?.status) return trouble.status >= 500 ? refusal(554, 'Refused, as ordered') : refusal(451, 'Try again later, as ordered');
+    if (trouble?.status)
+      return trouble.status >= 500 ? refusal(554, 'Refused, as ordered') : refusal(451, 'Try again later, as ordered');
     if (trouble?.drop === 'before') return this.cut(session);
     const source = Buffer.concat(chunks);
     this.keep(source, await simpleParser(source, { skipTextLinks: true }), to);
@@ -175,6 +180,8 @@ function refusal(responseCode: number, message: string): Error {
 
 function linksIn(text: string, html: string): string[] {
   const inText = text.match(/https?:\/\/[^\s<>"')]+/g) ?? [];
-  const inHtml = [...html.matchAll(/href="(https?:\/\/[^"]+)"/g)].map((match) => (match[1] ?? '').replaceAll('&amp;', '&'));
+  const inHtml = [...html.matchAll(/href="(https?:\/\/[^"]+)"/g)].map((match) =>
+    (match[1] ?? '').replaceAll('&amp;', '&'),
+  );
   return [...new Set([...inText, ...inHtml])].slice(0, MOST_LINKS);
 }

@@ -13,7 +13,9 @@ import { PaymentRefusal, PaymentRules, type PaymentState, emptyPayments } from '
 import { Payments, type Remembered, paymentTrouble } from './payments';
 import { Storage } from './storage';
 import { type Service, Troubles, delay } from './trouble';
-import { Uploads, emptyUploads, uploadTrouble } from './uploads';
+import { uploadTrouble } from './upload-cors';
+import { emptyUploads } from './upload-state';
+import { Uploads } from './uploads';
 import { type Delivery, Webhooks } from './webhooks';
 
 /** The connection is to be cut, as ordered. */
@@ -27,13 +29,31 @@ const changed = (): void => storage.changed();
 const troubles = new Troubles();
 const paymentState: PaymentState = storage.keep('payments', emptyPayments(), () => paymentState);
 const webhooks: Webhooks = new Webhooks(
-  { url: configuration.webhookUrl, secret: configuration.webhookSecret, findEvent: (id) => paymentState.events[id] ?? null, changed },
+  {
+    url: configuration.webhookUrl,
+    secret: configuration.webhookSecret,
+    findEvent: (id) => paymentState.events[id] ?? null,
+    changed,
+  },
   storage.keep<Delivery[]>('deliveries', [], () => webhooks.list()),
 );
 const rules = new PaymentRules(paymentState, (event) => webhooks.announce(event));
-const payments: Payments = new Payments(configuration, rules, storage.keep<Record<string, Remembered>>('idempotencyKeys', {}, () => payments.savedKeys()), changed);
-const uploads: Uploads = new Uploads(configuration, storage, storage.keep('uploads', emptyUploads(), () => uploads.state));
-const mailbox: Mailbox = new Mailbox(storage, troubles, storage.keep<StoredMail[]>('mails', [], () => mailbox.mails));
+const payments: Payments = new Payments(
+  configuration,
+  rules,
+  storage.keep<Record<string, Remembered>>('idempotencyKeys', {}, () => payments.savedKeys()),
+  changed,
+);
+const uploads: Uploads = new Uploads(
+  configuration,
+  storage,
+  storage.keep('uploads', emptyUploads(), () => uploads.state),
+);
+const mailbox: Mailbox = new Mailbox(
+  storage,
+  troubles,
+  storage.keep<StoredMail[]>('mails', [], () => mailbox.mails),
+);
 const shown = { rules, webhooks, mailbox, uploads, troubles };
 
 const server = createServer((request, response) => {
@@ -55,7 +75,9 @@ await new Promise<void>((resolve, reject) => {
   server.listen(configuration.port, '127.0.0.1', () => resolve());
 });
 webhooks.resume();
-process.stdout.write(`stand-ins ready: http://localhost:${configuration.port}/ and smtp://127.0.0.1:${configuration.smtpPort}\n`);
+process.stdout.write(
+  `stand-ins ready: http://localhost:${configuration.port}/ and smtp://127.0.0.1:${configuration.smtpPort}\n`,
+);
 for (const signal of ['SIGINT', 'SIGTERM'] as const) process.once(signal, stop);
 
 function configurationOrExit(): ReturnType<typeof readConfiguration> {
@@ -71,13 +93,19 @@ async function answer(call: Call): Promise<Answer> {
   // A page on another name that resolves to this machine, or on another site, has no business here.
   if (!isLoopbackAddress(`http://${call.host}`)) return text(421, 'The stand-ins answer to localhost only.');
   const origin = call.headers.origin;
-  if (origin !== undefined && origin !== 'null' && !isLoopbackAddress(origin)) return text(403, 'The stand-ins answer to pages of this machine only.');
+  if (origin !== undefined && origin !== 'null' && !isLoopbackAddress(origin))
+    return text(403, 'The stand-ins answer to pages of this machine only.');
 
   if (call.path.startsWith('/v1/')) {
     return troubled('payments', call, (trouble) => payments.handle(call, trouble), paymentTrouble);
   }
   if (/^\/(?:ingest|files-api|a)\//.test(call.path)) {
-    return troubled('uploads', call, async (trouble) => (await trouble()) ?? uploads.handle(call), (status) => uploadTrouble(call, status));
+    return troubled(
+      'uploads',
+      call,
+      async (trouble) => (await trouble()) ?? uploads.handle(call),
+      (status) => uploadTrouble(call, status),
+    );
   }
   if (call.path.startsWith('/__/')) return controls(call, { ...shown, reset, changed });
   if (call.path.startsWith('/checkout/')) return checkoutPage(call, rules, changed);
@@ -86,7 +114,12 @@ async function answer(call: Call): Promise<Answer> {
 }
 
 /** Does the work with the trouble that was ordered for it: delay, then refusal or cut, then the work, then perhaps a cut. */
-async function troubled(service: Service, call: Call, work: (trouble: () => Promise<Answer | null>) => Promise<Answer>, refuse: (status: number) => Answer): Promise<Answer> {
+async function troubled(
+  service: Service,
+  call: Call,
+  work: (trouble: () => Promise<Answer | null>) => Promise<Answer>,
+  refuse: (status: number) => Answer,
+): Promise<Answer> {
   // Asking beforehand is not the work, so it is not troubled.
   const ordered = call.method === 'OPTIONS' ? null : troubles.take(service, `${call.method} ${call.path}`);
   const answered = await work(async () => {
@@ -105,7 +138,9 @@ function failure(request: IncomingMessage, error: unknown): Answer | null {
   if (error instanceof BadRequest) return json(400, { error: error.message });
   if (error instanceof PaymentRefusal) return json(error.status, { error: error.message });
   if (error instanceof TooLarge) return json(413, { error: error.message });
-  process.stderr.write(`stand-ins: ${request.method ?? ''} ${(request.url ?? '').split('?')[0] ?? ''}: ${error instanceof Error ? (error.stack ?? error.message) : String(error)}\n`);
+  process.stderr.write(
+    `stand-ins: ${request.method ?? ''} ${(request.url ?? '').split('?')[0] ?? ''}: ${error instanceof Error ? (error.stack ?? error.message) : String(error)}\n`,
+  );
   return json(500, { error: 'the stand-in failed; see its log' });
 }
 

@@ -16,7 +16,8 @@ export function filePart(body: Buffer, contentType: string | undefined): FilePar
   const headerEnd = body.indexOf('\r\n\r\n', opening.length);
   if (headerEnd < 0 || headerEnd > MOST_HEADER_BYTES) throw new BadRequest('the part has no header');
   const header = body.subarray(opening.length, headerEnd).toString('utf8');
-  if (!/^content-disposition:\s*form-data;.*\bname="file"/im.test(header)) throw new BadRequest('the first field must be named file');
+  if (!/^content-disposition:\s*form-data;.*\bname="file"/im.test(header))
+    throw new BadRequest('the first field must be named file');
   const from = headerEnd + 4;
   const closing = Buffer.from(`\r\n--${name}`);
   const end = body.indexOf(closing, from);

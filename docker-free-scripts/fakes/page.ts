@@ -16,10 +16,15 @@ function shown(value: string | number | Html | readonly Html[]): string {
   return 'html' in value ? value.html : value.map((each) => each.html).join('');
 }
 
-export const escape = (text: string): string => text.replace(/[&<>"']/g, (character) => `&#${character.charCodeAt(0)};`);
+export const escape = (text: string): string =>
+  text.replace(/[&<>"']/g, (character) => `&#${character.charCodeAt(0)};`);
 
 /** A whole page. `formTargets` are origins that a form's answer may lead to, since browsers check redirects too. */
-export function page(title: string, content: Html, options: { status?: number; formTargets?: string[]; frames?: boolean } = {}): Answer {
+export function page(
+  title: string,
+  content: Html,
+  options: { status?: number; formTargets?: string[]; frames?: boolean } = {},
+): Answer {
   const html = markup`<!doctype html>
 <html lang="en">
 <head>
@@ -41,12 +46,29 @@ ${content}
 </body>
 </html>
 `.html;
-  const policy = ["default-src 'none'", "style-src 'self'", 'img-src data:', `form-action 'self' ${(options.formTargets ?? []).join(' ')}`, "base-uri 'none'", "frame-ancestors 'none'", options.frames ? "frame-src 'self'" : "frame-src 'none'"];
-  return { status: options.status ?? 200, headers: { 'content-type': 'text/html; charset=utf-8', 'content-security-policy': policy.join('; ') }, body: html };
+  const policy = [
+    "default-src 'none'",
+    "style-src 'self'",
+    'img-src data:',
+    `form-action 'self' ${(options.formTargets ?? []).join(' ')}`,
+    "base-uri 'none'",
+    "frame-ancestors 'none'",
+    options.frames ? "frame-src 'self'" : "frame-src 'none'",
+  ];
+  return {
+    status: options.status ?? 200,
+    headers: { 'content-type': 'text/html; charset=utf-8', 'content-security-policy': policy.join('; ') },
+    body: html,
+  };
 }
 
 /** A table with a caption; empty ones say so. */
-export function table(caption: string, headings: readonly string[], rows: readonly (readonly (string | Html)[])[], empty: string): Html {
+export function table(
+  caption: string,
+  headings: readonly string[],
+  rows: readonly (readonly (string | Html)[])[],
+  empty: string,
+): Html {
   if (rows.length === 0) return markup`<h2>${caption}</h2><p>${empty}</p>`;
   return markup`<h2 id="${idOf(caption)}">${caption}</h2>
 <div class="wide" role="region" tabindex="0" aria-labelledby="${idOf(caption)}"><table aria-labelledby="${idOf(caption)}">
@@ -73,7 +95,7 @@ h1 { font-size: 1.6rem; line-height: 1.25; margin: 1.75rem 0 1rem; overflow-wrap
 h2 { font-size: 1.1rem; margin: 2rem 0 .5rem; }
 .wide { overflow-x: auto; }
 table { border-collapse: collapse; width: 100%; font-variant-numeric: tabular-nums; }
-th, td { text-align: left; vertical-align: top; padding: .4rem .75rem .4rem 0; border-bottom: 1px solid var(--rule); overflow-wrap: anywhere; }
+th, td { text-align: left; vertical-align: top; padding: .4rem .75rem .4rem 0; border-bottom: 1px solid var(--rule); overflow-wrap: break-word; }
 th { border-bottom-color: var(--ink); font-weight: 600; }
 dl { display: grid; grid-template-columns: max-content 1fr; gap: .25rem 1.25rem; }
 dt { color: var(--soft); } dd { margin: 0; overflow-wrap: anywhere; }

@@ -31,7 +31,14 @@ export type Session = {
 
 export type Decline = { code: string; declineCode: string | null; message: string };
 
-export type Intent = { id: string; sessionId: string; status: 'requires_payment_method' | 'succeeded' | 'canceled'; lastError: (Decline & { chargeId: string }) | null; latestChargeId: string | null; createdSeconds: number };
+export type Intent = {
+  id: string;
+  sessionId: string;
+  status: 'requires_payment_method' | 'succeeded' | 'canceled';
+  lastError: (Decline & { chargeId: string }) | null;
+  latestChargeId: string | null;
+  createdSeconds: number;
+};
 
 export type Charge = {
   id: string;
@@ -45,11 +52,34 @@ export type Charge = {
   createdSeconds: number;
 };
 
-export type Refund = { id: string; chargeId: string; amountMinor: number; reason: string | null; metadata: Record<string, string>; transferReversalId: string | null; createdSeconds: number };
+export type Refund = {
+  id: string;
+  chargeId: string;
+  amountMinor: number;
+  reason: string | null;
+  metadata: Record<string, string>;
+  transferReversalId: string | null;
+  createdSeconds: number;
+};
 
-export type PaymentEvent = { id: string; object: 'event'; api_version: string; created: number; type: string; livemode: false; data: { object: Record<string, unknown> }; request: { id: string | null; idempotency_key: string | null } };
+export type PaymentEvent = {
+  id: string;
+  object: 'event';
+  api_version: string;
+  created: number;
+  type: string;
+  livemode: false;
+  data: { object: Record<string, unknown> };
+  request: { id: string | null; idempotency_key: string | null };
+};
 
-export type PaymentState = { sessions: Record<string, Session>; intents: Record<string, Intent>; charges: Record<string, Charge>; refunds: Record<string, Refund>; events: Record<string, PaymentEvent> };
+export type PaymentState = {
+  sessions: Record<string, Session>;
+  intents: Record<string, Intent>;
+  charges: Record<string, Charge>;
+  refunds: Record<string, Refund>;
+  events: Record<string, PaymentEvent>;
+};
 
 export const emptyPayments = (): PaymentState => ({ sessions: {}, intents: {}, charges: {}, refunds: {}, events: {} });
 
@@ -64,7 +94,8 @@ export class PaymentRefusal extends Error {
   }
 }
 
-export const missing = (kind: string, id: string, param = 'id'): PaymentRefusal => new PaymentRefusal(404, `No such ${kind}: '${id}'`, { code: 'resource_missing', param });
+export const missing = (kind: string, id: string, param = 'id'): PaymentRefusal =>
+  new PaymentRefusal(404, `No such ${kind}: '${id}'`, { code: 'resource_missing', param });
 
 export type CardOutcome = { ok: true } | { ok: false; message: string };
 
@@ -73,10 +104,23 @@ const TEST_CARDS = new Map<string, Decline | null>([
   ['4242424242424242', null],
   ['5555555555554444', null],
   ['4000000000000002', { code: 'card_declined', declineCode: 'generic_decline', message: 'Your card was declined.' }],
-  ['4000000000009995', { code: 'card_declined', declineCode: 'insufficient_funds', message: 'Your card has insufficient funds.' }],
+  [
+    '4000000000009995',
+    { code: 'card_declined', declineCode: 'insufficient_funds', message: 'Your card has insufficient funds.' },
+  ],
   ['4000000000000069', { code: 'expired_card', declineCode: null, message: 'Your card has expired.' }],
-  ['4000000000000127', { code: 'incorrect_cvc', declineCode: null, message: "Your card's security code is incorrect." }],
-  ['4000000000000119', { code: 'processing_error', declineCode: null, message: 'An error occurred while processing your card. Try again in a little bit.' }],
+  [
+    '4000000000000127',
+    { code: 'incorrect_cvc', declineCode: null, message: "Your card's security code is incorrect." },
+  ],
+  [
+    '4000000000000119',
+    {
+      code: 'processing_error',
+      declineCode: null,
+      message: 'An error occurred while processing your card. Try again in a little bit.',
+    },
+  ],
 ]);
 
 const newId = (prefix: string): string => `${prefix}${randomBytes(16).toString('hex')}`;
@@ -95,9 +139,20 @@ export class PaymentRules {
     this.tell = tell;
   }
 
-  createSession(given: Omit<Session, 'id' | 'status' | 'paid' | 'url' | 'intentId' | 'createdSeconds'>, pageOrigin: string): Session {
+  createSession(
+    given: Omit<Session, 'id' | 'status' | 'paid' | 'url' | 'intentId' | 'createdSeconds'>,
+    pageOrigin: string,
+  ): Session {
     const id = newId('cs_test_');
-    const session: Session = { ...given, id, status: 'open', paid: false, url: `${pageOrigin}/checkout/${id}`, intentId: null, createdSeconds: nowSeconds() };
+    const session: Session = {
+      ...given,
+      id,
+      status: 'open',
+      paid: false,
+      url: `${pageOrigin}/checkout/${id}`,
+      intentId: null,
+      createdSeconds: nowSeconds(),
+    };
     this.state.sessions[id] = session;
     return session;
   }
@@ -113,7 +168,10 @@ export class PaymentRules {
   expireSession(id: string, origin: Origin): Session {
     const session = this.getSession(id);
     if (session.status !== 'open') {
-      throw new PaymentRefusal(400, `Only Checkout Sessions with a status in ["open"] can be expired. This Session has a status of ${session.status}.`);
+      throw new PaymentRefusal(
+        400,
+        `Only Checkout Sessions with a status in ["open"] can be expired. This Session has a status of ${session.status}.`,
+      );
     }
     this.close(session, origin);
     return session;
@@ -123,16 +181,35 @@ export class PaymentRules {
   payWithCard(sessionId: string, number: string): CardOutcome {
     const session = this.getSession(sessionId);
     if (session.status === 'complete') return { ok: true };
-    if (session.status === 'expired') return { ok: false, message: 'This page has expired. Go back to the order and start the payment again.' };
+    if (session.status === 'expired')
+      return { ok: false, message: 'This page has expired. Go back to the order and start the payment again.' };
     const digits = number.replace(/[\s-]/g, '');
-    if (!/^\d{12,19}$/.test(digits) || !passesLuhn(digits)) return { ok: false, message: 'Your card number is incorrect.' };
+    if (!/^\d{12,19}$/.test(digits) || !passesLuhn(digits))
+      return { ok: false, message: 'Your card number is incorrect.' };
     const known = TEST_CARDS.get(digits);
     // Nothing of a number that could be somebody's is kept, not even its last digits.
-    const decline = known === undefined ? { code: 'card_declined', declineCode: 'test_mode_live_card', message: 'Only the test numbers below are taken here. Never type a real card number into a stand-in.' } : known;
+    const decline =
+      known === undefined
+        ? {
+            code: 'card_declined',
+            declineCode: 'test_mode_live_card',
+            message: 'Only the test numbers below are taken here. Never type a real card number into a stand-in.',
+          }
+        : known;
     const lastFour = known === undefined ? '0000' : digits.slice(-4);
 
     const intent = this.intentOf(session);
-    const charge: Charge = { id: newId('ch_'), intentId: intent.id, amountMinor: session.amountMinor, refundedMinor: 0, failed: decline, lastFour, transferId: null, reversedMinor: 0, createdSeconds: nowSeconds() };
+    const charge: Charge = {
+      id: newId('ch_'),
+      intentId: intent.id,
+      amountMinor: session.amountMinor,
+      refundedMinor: 0,
+      failed: decline,
+      lastFour,
+      transferId: null,
+      reversedMinor: 0,
+      createdSeconds: nowSeconds(),
+    };
     this.state.charges[charge.id] = charge;
     intent.latestChargeId = charge.id;
     if (decline) {
@@ -153,19 +230,39 @@ export class PaymentRules {
   }
 
   /** Gives back part or all of a charge; the parts together never exceed it. */
-  refund(given: { intentId: string | null; chargeId: string | null; amountMinor: number | null; reason: string | null; reverseTransfer: boolean; metadata: Record<string, string> }, origin: Origin): Refund {
+  refund(
+    given: {
+      intentId: string | null;
+      chargeId: string | null;
+      amountMinor: number | null;
+      reason: string | null;
+      reverseTransfer: boolean;
+      metadata: Record<string, string>;
+    },
+    origin: Origin,
+  ): Refund {
     const charge = this.chargeToRefund(given);
     const intent = this.getIntent(charge.intentId);
     const session = this.getSession(intent.sessionId);
     const leftMinor = charge.amountMinor - charge.refundedMinor;
-    if (leftMinor === 0) throw new PaymentRefusal(400, `Charge ${charge.id} has already been refunded.`, { code: 'charge_already_refunded' });
+    if (leftMinor === 0)
+      throw new PaymentRefusal(400, `Charge ${charge.id} has already been refunded.`, {
+        code: 'charge_already_refunded',
+      });
     const amountMinor = given.amountMinor ?? leftMinor;
     if (amountMinor > leftMinor) {
       const scale = minorDigits(session.currency);
       const shown = (minor: number) => `${(minor / 10 ** scale).toFixed(scale)} ${session.currency.toUpperCase()}`;
-      throw new PaymentRefusal(400, `Refund amount (${shown(amountMinor)}) is greater than unrefunded amount on charge (${shown(leftMinor)})`, { param: 'amount' });
+      throw new PaymentRefusal(
+        400,
+        `Refund amount (${shown(amountMinor)}) is greater than unrefunded amount on charge (${shown(leftMinor)})`,
+        { param: 'amount' },
+      );
     }
-    if (given.reverseTransfer && !charge.transferId) throw new PaymentRefusal(400, 'Cannot reverse transfer: the charge has no associated transfer.', { param: 'reverse_transfer' });
+    if (given.reverseTransfer && !charge.transferId)
+      throw new PaymentRefusal(400, 'Cannot reverse transfer: the charge has no associated transfer.', {
+        param: 'reverse_transfer',
+      });
 
     charge.refundedMinor += amountMinor;
     if (given.reverseTransfer) charge.reversedMinor += amountMinor;
@@ -210,7 +307,16 @@ export class PaymentRules {
 
   /** An event that never happened, for a test that forges one. It is not stored and can't be fetched. */
   inventEvent(type: string, object: Record<string, unknown>): PaymentEvent {
-    return { id: newId('evt_'), object: 'event', api_version: API_VERSION, created: nowSeconds(), type, livemode: false, data: { object }, request: { id: null, idempotency_key: null } };
+    return {
+      id: newId('evt_'),
+      object: 'event',
+      api_version: API_VERSION,
+      created: nowSeconds(),
+      type,
+      livemode: false,
+      data: { object },
+      request: { id: null, idempotency_key: null },
+    };
   }
 
   private close(session: Session, origin: Origin): void {
@@ -226,7 +332,14 @@ export class PaymentRules {
   // The provider makes the intent at the first try with a card, not with the session.
   private intentOf(session: Session): Intent {
     if (session.intentId) return this.getIntent(session.intentId);
-    const intent: Intent = { id: newId('pi_'), sessionId: session.id, status: 'requires_payment_method', lastError: null, latestChargeId: null, createdSeconds: nowSeconds() };
+    const intent: Intent = {
+      id: newId('pi_'),
+      sessionId: session.id,
+      status: 'requires_payment_method',
+      lastError: null,
+      latestChargeId: null,
+      createdSeconds: nowSeconds(),
+    };
     this.state.intents[intent.id] = intent;
     session.intentId = intent.id;
     this.event('payment_intent.created', intentShape(intent, session), FROM_PAGE);
@@ -242,12 +355,18 @@ export class PaymentRules {
     }
     const intent = this.state.intents[given.intentId ?? ''];
     if (!intent) throw missing('payment_intent', given.intentId ?? '', 'payment_intent');
-    if (intent.status !== 'succeeded' || !intent.latestChargeId) throw new PaymentRefusal(400, `This PaymentIntent (${intent.id}) does not have a successful charge to refund.`, { code: 'payment_intent_unexpected_state' });
+    if (intent.status !== 'succeeded' || !intent.latestChargeId)
+      throw new PaymentRefusal(400, `This PaymentIntent (${intent.id}) does not have a successful charge to refund.`, {
+        code: 'payment_intent_unexpected_state',
+      });
     return this.getCharge(intent.latestChargeId);
   }
 
   private event(type: string, object: Record<string, unknown>, origin: Origin): void {
-    const event: PaymentEvent = { ...this.inventEvent(type, object), request: { id: origin.requestId, idempotency_key: origin.idempotencyKey } };
+    const event: PaymentEvent = {
+      ...this.inventEvent(type, object),
+      request: { id: origin.requestId, idempotency_key: origin.idempotencyKey },
+    };
     this.state.events[event.id] = event;
     this.tell(event);
   }

@@ -30,7 +30,11 @@ export function sessionShape(session: Session, intent: Record<string, unknown> |
   };
 }
 
-export function intentShape(intent: Intent, session: Session, charge: Record<string, unknown> | null = null): Record<string, unknown> {
+export function intentShape(
+  intent: Intent,
+  session: Session,
+  charge: Record<string, unknown> | null = null,
+): Record<string, unknown> {
   return {
     id: intent.id,
     object: 'payment_intent',
@@ -43,7 +47,13 @@ export function intentShape(intent: Intent, session: Session, charge: Record<str
     currency: session.currency,
     description: session.description,
     last_payment_error: intent.lastError
-      ? { type: 'card_error', code: intent.lastError.code, decline_code: intent.lastError.declineCode, message: intent.lastError.message, charge: intent.lastError.chargeId }
+      ? {
+          type: 'card_error',
+          code: intent.lastError.code,
+          decline_code: intent.lastError.declineCode,
+          message: intent.lastError.message,
+          charge: intent.lastError.chargeId,
+        }
       : null,
     latest_charge: charge ?? intent.latestChargeId,
     livemode: false,
@@ -96,4 +106,8 @@ export function refundShape(refund: Refund, intent: Intent, session: Session): R
   };
 }
 
-export const listShape = (url: string, data: readonly Record<string, unknown>[], hasMore: boolean): Record<string, unknown> => ({ object: 'list', url, has_more: hasMore, data });
+export const listShape = (
+  url: string,
+  data: readonly Record<string, unknown>[],
+  hasMore: boolean,
+): Record<string, unknown> => ({ object: 'list', url, has_more: hasMore, data });

@@ -10,7 +10,12 @@ import { readRefund, readSession } from './payment-parameters';
 import { type Origin, PaymentRefusal, type PaymentRules, missing } from './payment-rules';
 import { API_VERSION, chargeShape, intentShape, listShape, refundShape, sessionShape } from './payment-shapes';
 
-export type Remembered = { fingerprint: string; atMs: number; originalRequest: string; answer: { status: number; body: string } | null };
+export type Remembered = {
+  fingerprint: string;
+  atMs: number;
+  originalRequest: string;
+  answer: { status: number; body: string } | null;
+};
 
 const MOST_BODY_BYTES = 100_000;
 // The provider forgets a key after at least a day.
@@ -24,7 +29,12 @@ export class Payments {
   private keys: Map<string, Remembered>;
   private readonly changed: () => void;
 
-  constructor(configuration: Configuration, rules: PaymentRules, savedKeys: Record<string, Remembered>, changed: () => void) {
+  constructor(
+    configuration: Configuration,
+    rules: PaymentRules,
+    savedKeys: Record<string, Remembered>,
+    changed: () => void,
+  ) {
     this.configuration = configuration;
     this.rules = rules;
     // A request that was under way when the process died did nothing that lasts: its key is free again.
@@ -44,7 +54,8 @@ export class Payments {
   async handle(call: Call, trouble: () => Promise<Answer | null>): Promise<Answer> {
     const requestId = `req_${randomBytes(8).toString('hex')}`;
     try {
-      const answer = call.method === 'POST' ? await this.post(call, requestId, trouble) : ((await trouble()) ?? this.get(call));
+      const answer =
+        call.method === 'POST' ? await this.post(call, requestId, trouble) : ((await trouble()) ?? this.get(call));
       return { ...answer, headers: { 'request-id': requestId, 'stripe-version': API_VERSION, ...answer.headers } };
     } catch (error) {
       if (!(error instanceof PaymentRefusal)) throw error;
@@ -54,11 +65,23 @@ export class Payments {
 
   private admit(call: Call): void {
     const given = /^Bearer (.+)$/.exec(call.headers.authorization ?? '')?.[1];
-    if (!given) throw new PaymentRefusal(401, 'You did not provide an API key. You need to provide your API key in the Authorization header, using Bearer auth.');
-    if (!given.startsWith('sk_test_fake_')) throw new PaymentRefusal(401, 'This is a local stand-in and refuses keys that look real. If that key is real, replace it: it has been sent in the clear.');
+    if (!given)
+      throw new PaymentRefusal(
+        401,
+        'You did not provide an API key. You need to provide your API key in the Authorization header, using Bearer auth.',
+      );
+    if (!given.startsWith('sk_test_fake_'))
+      throw new PaymentRefusal(
+        401,
+        'This is a local stand-in and refuses keys that look real. If that key is real, replace it: it has been sent in the clear.',
+      );
     if (given !== this.configuration.paymentKey) throw new PaymentRefusal(401, 'Invalid API Key provided.');
     const version = call.headers['stripe-version'];
-    if (version !== undefined && version !== API_VERSION) throw new PaymentRefusal(400, `Invalid Stripe API version: ${String(version)}. The stand-in speaks ${API_VERSION}.`);
+    if (version !== undefined && version !== API_VERSION)
+      throw new PaymentRefusal(
+        400,
+        `Invalid Stripe API version: ${String(version)}. The stand-in speaks ${API_VERSION}.`,
+      );
   }
 
   private get(call: Call): Answer {
@@ -68,19 +91,30 @@ export class Payments {
     if (fourth !== undefined) throw unknownUrl(call);
     if (resource === 'checkout' && second === 'sessions' && third) {
       const session = this.rules.getSession(third);
-      const intent = session.intentId && expand.has('payment_intent') ? intentShape(this.rules.getIntent(session.intentId), session) : null;
+      const intent =
+        session.intentId && expand.has('payment_intent')
+          ? intentShape(this.rules.getIntent(session.intentId), session)
+          : null;
       return json(200, sessionShape(session, intent));
     }
     if (third !== undefined) throw unknownUrl(call);
     if (resource === 'payment_intents' && second) return json(200, this.intent(second, expand.has('latest_charge')));
     if (resource === 'charges' && second) return json(200, this.charge(second));
     if (resource === 'refunds' && second) return json(200, this.refund(second));
-    if (resource === 'refunds') return json(200, this.list('/v1/refunds', this.refundsOf(call.query.get('payment_intent')), call.query));
+    if (resource === 'refunds')
+      return json(200, this.list('/v1/refunds', this.refundsOf(call.query.get('payment_intent')), call.query));
     if (resource === 'events' && second) return json(200, { ...this.rules.getEvent(second) });
     if (resource === 'events') {
       const type = call.query.get('type');
       const events = Object.values(this.rules.state.events).filter((event) => type === null || event.type === type);
-      return json(200, this.list('/v1/events', events.toReversed().map((event) => ({ ...event })), call.query));
+      return json(
+        200,
+        this.list(
+          '/v1/events',
+          events.toReversed().map((event) => ({ ...event })),
+          call.query,
+        ),
+      );
     }
     throw unknownUrl(call);
   }
@@ -89,20 +123,40 @@ export class Payments {
     this.admit(call);
     const body = (await call.body(MOST_BODY_BYTES)).toString('utf8');
     const key = call.headers['idempotency-key'];
-    if (typeof key !== 'string' || key === '') return (await trouble()) ?? this.change(call, formFrom(body), { requestId, idempotencyKey: null });
-    if (key.length > MOST_KEY_CHARACTERS) throw new PaymentRefusal(400, `Idempotency keys may have at most ${MOST_KEY_CHARACTERS} characters.`, { type: 'idempotency_error' });
+    if (typeof key !== 'string' || key === '')
+      return (await trouble()) ?? this.change(call, formFrom(body), { requestId, idempotencyKey: null });
+    if (key.length > MOST_KEY_CHARACTERS)
+      throw new PaymentRefusal(400, `Idempotency keys may have at most ${MOST_KEY_CHARACTERS} characters.`, {
+        type: 'idempotency_error',
+      });
 
     const fingerprint = createHash('sha256').update(`${call.path}\n${body}`).digest('hex');
     this.dropOldKeys();
     const before = this.keys.get(key);
     if (before) {
       if (before.fingerprint !== fingerprint) {
-        throw new PaymentRefusal(400, `Keys for idempotent requests can only be used with the same parameters they were first used with. Try using a key other than '${key}' if you meant to execute a different request.`, { type: 'idempotency_error' });
+        throw new PaymentRefusal(
+          400,
+          `Keys for idempotent requests can only be used with the same parameters they were first used with. Try using a key other than '${key}' if you meant to execute a different request.`,
+          { type: 'idempotency_error' },
+        );
       }
       if (!before.answer) {
-        throw new PaymentRefusal(409, `There is currently another in-progress request using this Idempotency Key (${key}).`, { type: 'idempotency_error', code: 'idempotency_key_in_use' });
+        throw new PaymentRefusal(
+          409,
+          `There is currently another in-progress request using this Idempotency Key (${key}).`,
+          { type: 'idempotency_error', code: 'idempotency_key_in_use' },
+        );
       }
-      return { ...before.answer, headers: { 'content-type': 'application/json', 'idempotency-key': key, 'idempotent-replayed': 'true', 'original-request': before.originalRequest } };
+      return {
+        ...before.answer,
+        headers: {
+          'content-type': 'application/json',
+          'idempotency-key': key,
+          'idempotent-replayed': 'true',
+          'original-request': before.originalRequest,
+        },
+      };
     }
     const claim: Remembered = { fingerprint, atMs: Date.now(), originalRequest: requestId, answer: null };
     this.keys.set(key, claim);
@@ -136,7 +190,8 @@ export class Payments {
     if (resource === 'checkout' && second === 'sessions' && third === undefined) {
       return json(200, sessionShape(this.rules.createSession(readSession(form), `http://${call.host}`)));
     }
-    if (resource === 'checkout' && second === 'sessions' && third && fourth === 'expire' && parts.length === 4) return json(200, sessionShape(this.rules.expireSession(third, origin)));
+    if (resource === 'checkout' && second === 'sessions' && third && fourth === 'expire' && parts.length === 4)
+      return json(200, sessionShape(this.rules.expireSession(third, origin)));
     if (resource === 'refunds' && second === undefined) {
       const refund = this.rules.refund(readRefund(form), origin);
       return json(200, this.refund(refund.id));
@@ -164,14 +219,17 @@ export class Payments {
   }
 
   private refundsOf(intentId: string | null): Record<string, unknown>[] {
-    const refunds = Object.values(this.rules.state.refunds).filter((refund) => intentId === null || this.rules.getCharge(refund.chargeId).intentId === intentId);
+    const refunds = Object.values(this.rules.state.refunds).filter(
+      (refund) => intentId === null || this.rules.getCharge(refund.chargeId).intentId === intentId,
+    );
     return refunds.toReversed().map((refund) => this.refund(refund.id));
   }
 
   // Newest first, continued with starting_after, as the provider's lists are.
   private list(url: string, all: Record<string, unknown>[], query: URLSearchParams): Record<string, unknown> {
     const limit = Number(query.get('limit') ?? 10);
-    if (!Number.isInteger(limit) || limit < 1 || limit > 100) throw new PaymentRefusal(400, 'limit must be from 1 to 100', { param: 'limit' });
+    if (!Number.isInteger(limit) || limit < 1 || limit > 100)
+      throw new PaymentRefusal(400, 'limit must be from 1 to 100', { param: 'limit' });
     const after = query.get('starting_after');
     const from = after === null ? 0 : all.findIndex((item) => item.id === after) + 1;
     if (after !== null && from === 0) throw missing('object', after, 'starting_after');
@@ -189,7 +247,12 @@ export class Payments {
 
 /** Trouble as the provider words it. */
 export function paymentTrouble(status: number): Answer {
-  if (status === 429) return json(429, { error: { type: 'invalid_request_error', code: 'rate_limit', message: 'Request rate limit exceeded.' } }, { 'retry-after': '0' });
+  if (status === 429)
+    return json(
+      429,
+      { error: { type: 'invalid_request_error', code: 'rate_limit', message: 'Request rate limit exceeded.' } },
+      { 'retry-after': '0' },
+    );
   return json(status, { error: { type: 'api_error', message: 'Something went wrong on our end.' } });
 }
 
@@ -198,5 +261,8 @@ function refusal(error: PaymentRefusal): Answer {
 }
 
 function unknownUrl(call: Call): PaymentRefusal {
-  return new PaymentRefusal(404, `Unrecognized request URL (${call.method}: ${call.path}). The stand-in knows checkout sessions, payment intents, charges, refunds and events.`);
+  return new PaymentRefusal(
+    404,
+    `Unrecognized request URL (${call.method}: ${call.path}). The stand-in knows checkout sessions, payment intents, charges, refunds and events.`,
+  );
 }

@@ -38,7 +38,8 @@ export class Troubles {
       drop: given.drop === 'before' || given.drop === 'after' ? given.drop : null,
     };
     if (given.drop !== undefined && trouble.drop === null) throw new BadRequest('drop must be before or after');
-    if (trouble.delayMs === 0 && trouble.status === null && trouble.drop === null) throw new BadRequest('name a delayMs, a status or a drop');
+    if (trouble.delayMs === 0 && trouble.status === null && trouble.drop === null)
+      throw new BadRequest('name a delayMs, a status or a drop');
     if (this.waiting.length >= MOST_WAITING) throw new BadRequest(`${MOST_WAITING} troubles are waiting already`);
     this.waiting.push(trouble);
     return trouble;
@@ -46,7 +47,9 @@ export class Troubles {
 
   /** The trouble that strikes this request, in the order they were given. */
   take(service: Service, request: string): Trouble | null {
-    const found = this.waiting.find((trouble) => trouble.service === service && (trouble.match === null || request.includes(trouble.match)));
+    const found = this.waiting.find(
+      (trouble) => trouble.service === service && (trouble.match === null || request.includes(trouble.match)),
+    );
     if (!found) return null;
     found.times -= 1;
     if (found.times === 0) this.waiting = this.waiting.filter((trouble) => trouble !== found);
@@ -67,6 +70,7 @@ export const delay = (ms: number): Promise<void> => new Promise((resolve) => set
 
 export function whole(value: unknown, name: string, fallback: number, least: number, most: number): number {
   if (value === undefined) return fallback;
-  if (typeof value !== 'number' || !Number.isInteger(value) || value < least || value > most) throw new BadRequest(`${name} must be a whole number from ${least} to ${most}`);
+  if (typeof value !== 'number' || !Number.isInteger(value) || value < least || value > most)
+    throw new BadRequest(`${name} must be a whole number from ${least} to ${most}`);
   return value;
 }

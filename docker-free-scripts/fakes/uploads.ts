@@ -2,33 +2,15 @@
  * The upload store: takes files at addresses that the application signed, tells the application, serves and deletes
  * them. The wire protocol is that of the uploadthing SDK 7.7, read in its sources.
  */
-import { createHash, createHmac, timingSafeEqual } from 'node:crypto';
+import { createHash, createHmac } from 'node:crypto';
 import { type Configuration, isLoopbackAddress } from './configuration';
 import { type Answer, BadRequest, type Call, Interrupted, TooLarge, json, jsonBody, text } from './http';
 import { filePart } from './multipart';
 import type { Storage } from './storage';
+import { claimedFile, refuseSignature, sameText } from './upload-address';
+import { withCors } from './upload-cors';
+import type { Registration, StoredFile, UploadState } from './upload-state';
 
-export type StoredFile = {
-  key: string;
-  name: string;
-  size: number;
-  type: string;
-  customId: string | null;
-  isPrivate: boolean;
-  disposition: 'inline' | 'attachment';
-  /** Bytes here; less than size while an upload was interrupted. */
-  received: number;
-  fileHash: string | null;
-  uploadedAtMs: number | null;
-  callback: 'none' | 'waiting' | 'answered' | 'failed' | 'lost';
-};
-
-export type Registration = { key: string; slug: string; callbackUrl: string; metadata: unknown; awaitServerData: boolean; atMs: number };
-export type UploadState = { files: Record<string, StoredFile>; registrations: Record<string, Registration> };
-export const emptyUploads = (): UploadState => ({ files: {}, registrations: {} });
-
-// Above the application's own 64 MB, so that its limit and not this one is what a person meets.
-const MOST_FILE_BYTES = 128 * 1024 * 1024;
 const MULTIPART_ROOM_BYTES = 64 * 1024;
 const REGISTRATION_WAIT_MS = 3_000;
 
@@ -50,7 +32,8 @@ export class Uploads {
 
   /** Answers /ingest/…, /files-api/… and /a/…. */
   async handle(call: Call): Promise<Answer> {
-    if (call.path.startsWith('/ingest/')) return withCors(call, await this.ingest(call, call.path.slice('/ingest/'.length)));
+    if (call.path.startsWith('/ingest/'))
+      return withCors(call, await this.ingest(call, call.path.slice('/ingest/'.length)));
     if (call.path.startsWith('/files-api/')) return this.filesApi(call);
     if (call.method === 'OPTIONS') return withCors(call, { status: 204 });
     return withCors(call, this.download(call));
@@ -65,7 +48,13 @@ export class Uploads {
     const file = this.state.files[key];
     const registration = this.state.registrations[key];
     if (!file?.fileHash || !registration) throw new BadRequest(`no uploaded file ${key} with a callback`);
-    return { status: await this.postCallback(registration, 'callback', this.callbackBody(file, registration, `http://localhost:${this.configuration.port}`)) };
+    return {
+      status: await this.postCallback(
+        registration,
+        'callback',
+        this.callbackBody(file, registration, `http://localhost:${this.configuration.port}`),
+      ),
+    };
   }
 
   /** A callback with a signature that is not ours; the application must refuse it. */
@@ -98,10 +87,11 @@ export class Uploads {
     const refused = this.refuseAddress(call);
     if (refused) return refused;
     if (!/^[\w-]{1,300}$/.test(key)) return json(400, { error: 'Invalid file key.' });
-    const claimed = this.claimedFile(call, key);
+    const claimed = claimedFile(call, key);
     if (!claimed) return json(400, { error: 'The address lacks a file name, a type or a size that is possible.' });
     const file = (this.state.files[key] ??= claimed);
-    if (call.method === 'HEAD') return { status: 200, headers: { 'x-ut-range-start': String(file.fileHash ? 0 : file.received) } };
+    if (call.method === 'HEAD')
+      return { status: 200, headers: { 'x-ut-range-start': String(file.fileHash ? 0 : file.received) } };
     return this.take(call, file);
   }
 
@@ -115,13 +105,15 @@ export class Uploads {
     try {
       body = await call.body(file.size - from + MULTIPART_ROOM_BYTES);
     } catch (error) {
-      if (error instanceof TooLarge) return this.fail(file, 413, `The file is larger than the ${file.size} bytes announced.`);
+      if (error instanceof TooLarge)
+        return this.fail(file, 413, `The file is larger than the ${file.size} bytes announced.`);
       if (error instanceof Interrupted) this.keepWhatCame(file, before, error.received, call.headers['content-type']);
       throw error;
     }
     const part = filePart(body, call.headers['content-type']);
     const bytes = Buffer.concat([before, part.bytes]);
-    if (!part.complete || bytes.length !== file.size) return this.fail(file, 400, `Received ${bytes.length} bytes where ${file.size} were announced.`);
+    if (!part.complete || bytes.length !== file.size)
+      return this.fail(file, 400, `Received ${bytes.length} bytes where ${file.size} were announced.`);
 
     this.storage.putBytes(`file:${file.key}`, bytes);
     file.received = bytes.length;
@@ -149,11 +141,17 @@ export class Uploads {
     file.callback = 'waiting';
     let timer: NodeJS.Timeout | undefined;
     const result = new Promise<{ data: unknown } | { error: string }>((resolve) => {
-      timer = setTimeout(() => resolve({ error: 'The application did not take note of the file in time.' }), this.configuration.callbackLimitMs);
+      timer = setTimeout(
+        () => resolve({ error: 'The application did not take note of the file in time.' }),
+        this.configuration.callbackLimitMs,
+      );
       this.waiting.set(file.key, { answer: resolve });
     });
     const sent = this.postCallback(registration, 'callback', body).then((status) => {
-      if (status === null || status >= 400) this.waiting.get(file.key)?.answer({ error: `The application answered ${status ?? 'nothing'} to the callback.` });
+      if (status === null || status >= 400)
+        this.waiting
+          .get(file.key)
+          ?.answer({ error: `The application answered ${status ?? 'nothing'} to the callback.` });
     });
     if (!registration.awaitServerData) {
       clearTimeout(timer);
@@ -175,18 +173,34 @@ export class Uploads {
       status: 'uploaded',
       metadata: registration.metadata,
       origin: `${origin}/ingest`,
-      file: { key: file.key, name: file.name, size: file.size, type: file.type, customId: file.customId, ...this.addresses(file, origin) },
+      file: {
+        key: file.key,
+        name: file.name,
+        size: file.size,
+        type: file.type,
+        customId: file.customId,
+        ...this.addresses(file, origin),
+      },
     });
   }
 
   /** The application's status, or null where it could not be reached. */
-  private async postCallback(registration: Registration, hook: 'callback' | 'error', body: string, key = this.configuration.uploadKey): Promise<number | null> {
+  private async postCallback(
+    registration: Registration,
+    hook: 'callback' | 'error',
+    body: string,
+    key = this.configuration.uploadKey,
+  ): Promise<number | null> {
     const url = new URL(registration.callbackUrl);
     url.searchParams.set('slug', registration.slug);
     try {
       const response = await fetch(url, {
         method: 'POST',
-        headers: { 'content-type': 'application/json', 'uploadthing-hook': hook, 'x-uploadthing-signature': `hmac-sha256=${createHmac('sha256', key).update(body).digest('hex')}` },
+        headers: {
+          'content-type': 'application/json',
+          'uploadthing-hook': hook,
+          'x-uploadthing-signature': `hmac-sha256=${createHmac('sha256', key).update(body).digest('hex')}`,
+        },
         body,
         redirect: 'manual',
         signal: AbortSignal.timeout(this.configuration.callbackLimitMs),
@@ -227,11 +241,19 @@ export class Uploads {
     if (refused) return refused;
     const given = await jsonBody(call);
     const { fileKeys, callbackUrl, callbackSlug } = given;
-    if (!Array.isArray(fileKeys) || typeof callbackUrl !== 'string' || typeof callbackSlug !== 'string') return json(400, { error: 'Expected fileKeys, callbackUrl and callbackSlug.' });
+    if (!Array.isArray(fileKeys) || typeof callbackUrl !== 'string' || typeof callbackSlug !== 'string')
+      return json(400, { error: 'Expected fileKeys, callbackUrl and callbackSlug.' });
     if (!isLoopbackAddress(callbackUrl)) return json(400, { error: 'The stand-in calls back to this machine only.' });
     for (const key of fileKeys) {
       if (typeof key !== 'string') return json(400, { error: 'File keys are text.' });
-      this.state.registrations[key] = { key, slug: callbackSlug, callbackUrl, metadata: given.metadata ?? {}, awaitServerData: given.awaitServerData !== false, atMs: Date.now() };
+      this.state.registrations[key] = {
+        key,
+        slug: callbackSlug,
+        callbackUrl,
+        metadata: given.metadata ?? {},
+        awaitServerData: given.awaitServerData !== false,
+        atMs: Date.now(),
+      };
       for (const tell of this.awaitingRegistration.get(key) ?? []) tell();
     }
     this.storage.changed();
@@ -276,7 +298,8 @@ export class Uploads {
     const keysOf = (): string[] => {
       const { fileKeys, customIds } = given;
       if (Array.isArray(fileKeys)) return fileKeys.filter((key) => typeof key === 'string');
-      if (Array.isArray(customIds)) return Object.values(this.state.files).flatMap((file) => (customIds.includes(file.customId) ? [file.key] : []));
+      if (Array.isArray(customIds))
+        return Object.values(this.state.files).flatMap((file) => (customIds.includes(file.customId) ? [file.key] : []));
       throw new BadRequest('expected fileKeys or customIds');
     };
     if (call.method === 'POST' && call.path === '/files-api/v6/deleteFiles') {
@@ -289,7 +312,15 @@ export class Uploads {
       const limit = typeof given.limit === 'number' ? Math.min(500, Math.max(1, Math.floor(given.limit))) : 500;
       const offset = typeof given.offset === 'number' ? Math.max(0, Math.floor(given.offset)) : 0;
       const all = Object.values(this.state.files);
-      const files = all.slice(offset, offset + limit).map((file) => ({ id: file.key, customId: file.customId, key: file.key, name: file.name, size: file.size, status: file.fileHash ? 'Uploaded' : 'Uploading', uploadedAt: file.uploadedAtMs ?? 0 }));
+      const files = all.slice(offset, offset + limit).map((file) => ({
+        id: file.key,
+        customId: file.customId,
+        key: file.key,
+        name: file.name,
+        size: file.size,
+        status: file.fileHash ? 'Uploaded' : 'Uploading',
+        uploadedAt: file.uploadedAtMs ?? 0,
+      }));
       return json(200, { hasMore: all.length > offset + limit, files });
     }
     return json(404, { error: 'The stand-in knows deleteFiles and listFiles.' });
@@ -301,7 +332,7 @@ export class Uploads {
     const file = appId === this.configuration.uploadAppId ? this.state.files[key] : undefined;
     const bytes = file?.fileHash ? this.bytesOf(key) : null;
     if (!file || !bytes) return text(404, 'No such file.');
-    const isSigned = call.query.has('signature') && this.refuseSignature(call) === null;
+    const isSigned = call.query.has('signature') && refuseSignature(call, this.configuration.uploadKey) === null;
     if (file.isPrivate && !isSigned) return text(403, 'This file is private: its address must be signed and in time.');
     return {
       status: 200,
@@ -316,61 +347,26 @@ export class Uploads {
     };
   }
 
-  private claimedFile(call: Call, key: string): StoredFile | null {
-    // Values are percent-encoded once more than a query needs, so they are decoded once more.
-    const value = (name: string): string | null => {
-      const once = call.query.get(name);
-      try {
-        return once === null ? null : decodeURIComponent(once);
-      } catch {
-        return null;
-      }
-    };
-    const size = Number(value('x-ut-file-size') ?? '');
-    const name = value('x-ut-file-name');
-    const type = value('x-ut-file-type');
-    if (!name || type === null || !Number.isInteger(size) || size < 0 || size > MOST_FILE_BYTES) return null;
-    return {
-      key,
-      name,
-      size,
-      type,
-      customId: value('x-ut-custom-id'),
-      isPrivate: value('x-ut-acl') === 'private',
-      disposition: value('x-ut-content-disposition') === 'attachment' ? 'attachment' : 'inline',
-      received: 0,
-      fileHash: null,
-      uploadedAtMs: null,
-      callback: 'none',
-    };
-  }
-
   private refuseAddress(call: Call): Answer | null {
-    const refused = this.refuseSignature(call);
+    const refused = refuseSignature(call, this.configuration.uploadKey);
     if (refused) return refused;
-    return call.query.get('x-ut-identifier') === this.configuration.uploadAppId ? null : json(403, { error: 'The address is of another application.' });
-  }
-
-  /** Null if the address is signed by our key and in time. The signature is over the raw text up to itself. */
-  private refuseSignature(call: Call): Answer | null {
-    const address = `http://${call.host}${call.rawUrl}`;
-    const at = address.lastIndexOf('&signature=');
-    if (at < 0) return json(403, { error: 'The address is not signed.' });
-    const given = decodeURIComponentOrEmpty(address.slice(at + '&signature='.length));
-    const wanted = `hmac-sha256=${createHmac('sha256', this.configuration.uploadKey).update(address.slice(0, at)).digest('hex')}`;
-    if (!sameText(given, wanted)) return json(403, { error: 'The signature does not fit the address.' });
-    const expires = Number(call.query.get('expires'));
-    return Number.isFinite(expires) && expires > Date.now() ? null : json(403, { error: 'The address has expired.' });
+    return call.query.get('x-ut-identifier') === this.configuration.uploadAppId
+      ? null
+      : json(403, { error: 'The address is of another application.' });
   }
 
   private refuseKey(call: Call): Answer | null {
     const given = call.headers['x-uploadthing-api-key'];
     if (typeof given !== 'string') return json(401, { error: 'Missing API key.' });
-    if (!given.startsWith('sk_fake_')) return json(401, { error: 'This is a local stand-in and refuses keys that look real.' });
+    if (!given.startsWith('sk_fake_'))
+      return json(401, { error: 'This is a local stand-in and refuses keys that look real.' });
     return sameText(given, this.configuration.uploadKey) ? null : json(401, { error: 'Invalid API key.' });
   }
 
-  private addresses(file: StoredFile, origin: string): { url: string; appUrl: string; ufsUrl: string; fileHash: string } {
+  private addresses(
+    file: StoredFile,
+    origin: string,
+  ): { url: string; appUrl: string; ufsUrl: string; fileHash: string } {
     const address = `${origin}/a/${this.configuration.uploadAppId}/${file.key}`;
     return { url: address, appUrl: address, ufsUrl: address, fileHash: file.fileHash ?? '' };
   }
@@ -379,38 +375,5 @@ export class Uploads {
     this.storage.dropBytes(`file:${key}`);
     delete this.state.files[key];
     delete this.state.registrations[key];
-  }
-}
-
-export const uploadTrouble = (call: Call, status: number): Answer => withCors(call, json(status, { error: status === 429 ? 'Too many requests.' : 'The store is in trouble.' }));
-
-// The browser sends files from the application's origin to this one.
-function withCors(call: Call, answer: Answer): Answer {
-  const origin = call.headers.origin;
-  if (origin === undefined || !isLoopbackAddress(origin)) return answer;
-  return {
-    ...answer,
-    headers: {
-      ...answer.headers,
-      'access-control-allow-origin': origin,
-      'access-control-allow-methods': 'GET, HEAD, PUT, OPTIONS',
-      'access-control-allow-headers': 'range, content-type, x-uploadthing-version, b3, traceparent',
-      'access-control-expose-headers': 'x-ut-range-start',
-      'access-control-max-age': '600',
-      vary: 'origin',
-    },
-  };
-}
-
-function sameText(one: string, other: string): boolean {
-  const [a, b] = [Buffer.from(one), Buffer.from(other)];
-  return a.length === b.length && timingSafeEqual(a, b);
-}
-
-function decodeURIComponentOrEmpty(encoded: string): string {
-  try {
-    return decodeURIComponent(encoded);
-  } catch {
-    return '';
   }
 }

@@ -6,10 +6,22 @@ import { createHmac } from 'node:crypto';
 import type { PaymentEvent } from './payment-rules';
 import { BadRequest } from './http';
 
-export type Delivery = { eventId: string; type: string; state: 'held' | 'waiting' | 'taken' | 'lost' | 'given-up'; attempts: { atMs: number; outcome: string }[] };
+export type Delivery = {
+  eventId: string;
+  type: string;
+  state: 'held' | 'waiting' | 'taken' | 'lost' | 'given-up';
+  attempts: { atMs: number; outcome: string }[];
+};
 
 export type Forgery = 'wrong-secret' | 'empty-signature' | 'no-header' | 'stale' | 'future' | 'changed-body';
-export const FORGERIES: readonly Forgery[] = ['wrong-secret', 'empty-signature', 'no-header', 'stale', 'future', 'changed-body'];
+export const FORGERIES: readonly Forgery[] = [
+  'wrong-secret',
+  'empty-signature',
+  'no-header',
+  'stale',
+  'future',
+  'changed-body',
+];
 
 // The provider goes on for days; a minute is enough for an application that restarts on the same machine.
 const RETRY_DELAYS_MS = [200, 400, 800, 1_600, 3_200, 6_400, 12_800, 25_600];
@@ -99,9 +111,13 @@ export class Webhooks {
     const body = JSON.stringify(event);
     const seconds = Math.floor(Date.now() / 1000) + (how === 'stale' ? -600 : how === 'future' ? 600 : 0);
     const secret = how === 'wrong-secret' ? 'whsec_fake_somebodyelses' : this.sender.secret;
-    const signature = how === 'no-header' ? null : how === 'empty-signature' ? `t=${seconds},v1=` : signatureOf(body, secret, seconds);
+    const signature =
+      how === 'no-header' ? null : how === 'empty-signature' ? `t=${seconds},v1=` : signatureOf(body, secret, seconds);
     try {
-      const response = await this.post(how === 'changed-body' ? body.replace('"livemode":false', '"livemode": false') : body, signature);
+      const response = await this.post(
+        how === 'changed-body' ? body.replace('"livemode":false', '"livemode": false') : body,
+        signature,
+      );
       return { status: response.status, answer: (await response.text()).slice(0, 2_000) };
     } catch (error) {
       return { status: null, answer: error instanceof Error ? error.message : String(error) };
@@ -171,7 +187,7 @@ export class Webhooks {
       outcome = String(response.status);
       if (response.ok) delivery.state = 'taken';
     } catch (error) {
-      outcome = error instanceof Error ? error.name : 'failed';
+      outcome = error instanceof Error && error.name === 'TimeoutError' ? 'no answer in time' : 'no connection';
     }
     delivery.attempts.push({ atMs: Date.now(), outcome });
     if (delivery.state === 'taken' || !this.deliveries.includes(delivery)) return;
@@ -191,7 +207,11 @@ export class Webhooks {
   private post(body: string, signature: string | null): Promise<Response> {
     return fetch(this.sender.url, {
       method: 'POST',
-      headers: { 'content-type': 'application/json; charset=utf-8', 'user-agent': 'Ohmstead-stand-in/1.0', ...(signature === null ? {} : { 'stripe-signature': signature }) },
+      headers: {
+        'content-type': 'application/json; charset=utf-8',
+        'user-agent': 'Ohmstead-stand-in/1.0',
+        ...(signature === null ? {} : { 'stripe-signature': signature }),
+      },
       body,
       redirect: 'manual',
       signal: AbortSignal.timeout(ANSWER_LIMIT_MS),
@@ -207,7 +227,9 @@ function orderOf(held: Delivery[], order: unknown): Delivery[] {
   if (order === undefined || order === 'given') return held;
   if (order === 'reversed') return held.toReversed();
   if (Array.isArray(order)) {
-    const named = order.flatMap((wanted) => held.filter((delivery) => delivery.eventId === wanted || delivery.type === wanted));
+    const named = order.flatMap((wanted) =>
+      held.filter((delivery) => delivery.eventId === wanted || delivery.type === wanted),
+    );
     return [...new Set([...named, ...held])];
   }
   throw new BadRequest('order must be given, reversed, or a list of event ids or types');

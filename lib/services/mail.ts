@@ -36,14 +36,19 @@ export async function sendMail(mail: Mail): Promise<{ ok: true; messageId: strin
       subject: mail.subject,
       text: mail.text,
       ...(mail.html === undefined ? {} : { html: mail.html }),
-      attachments: (mail.attachments ?? []).map(({ filename, contentType, content }) => ({ filename, contentType, content: Buffer.from(content) })),
+      attachments: (mail.attachments ?? []).map(({ filename, contentType, content }) => ({
+        filename,
+        contentType,
+        content: Buffer.from(content),
+      })),
       messageId,
       headers: { 'Auto-Submitted': 'auto-generated' },
       // A path or address in a field of ours must never become a file or a fetched page.
       disableFileAccess: true,
       disableUrlAccess: true,
     });
-    if (sent.rejected.length > 0) return { ok: false, reason: 'refused', message: `the server refused ${sent.rejected.length} of the recipients` };
+    if (sent.rejected.length > 0)
+      return { ok: false, reason: 'refused', message: `the server refused ${sent.rejected.length} of the recipients` };
     return { ok: true, messageId };
   } catch (error) {
     return failureFrom(error);
@@ -79,7 +84,8 @@ function failureFrom(error: unknown): MailFailure {
   if (responseCode >= 500) return { ok: false, reason: 'refused', message: error.message };
   if (responseCode >= 400) return { ok: false, reason: 'later', message: error.message };
   if (code === 'EENVELOPE') return { ok: false, reason: 'refused', message: error.message };
-  if (['ECONNECTION', 'ESOCKET', 'ETIMEDOUT', 'EDNS', 'ETLS', 'EPROTOCOL', 'ECONNREFUSED', 'ECONNRESET'].includes(code)) return { ok: false, reason: 'unreachable', message: error.message };
+  if (['ECONNECTION', 'ESOCKET', 'ETIMEDOUT', 'EDNS', 'ETLS', 'EPROTOCOL', 'ECONNREFUSED', 'ECONNRESET'].includes(code))
+    return { ok: false, reason: 'unreachable', message: error.message };
   // Anything else is a bug of ours.
   throw error;
 }

@@ -58,21 +58,37 @@ export type CheckoutRequest = {
 };
 
 /** Worth pressing again, or trying again from a job with the same key. */
-export const isPassing = (failure: PaymentFailure): boolean => failure.reason === 'busy' || failure.reason === 'unreachable';
+export const isPassing = (failure: PaymentFailure): boolean =>
+  failure.reason === 'busy' || failure.reason === 'unreachable';
 
 /** Opens a page where an order is paid by card, the money passed on to the supplier's account. */
-export async function createCheckout(request: CheckoutRequest): Promise<{ ok: true; checkout: Checkout } | PaymentFailure> {
+export async function createCheckout(
+  request: CheckoutRequest,
+): Promise<{ ok: true; checkout: Checkout } | PaymentFailure> {
   const about = { ...request.metadata, order_id: request.orderId, attempt: String(request.attempt) };
   return attempt(async (stripe) => {
     const session = await stripe.checkout.sessions.create(
       {
         mode: 'payment',
-        line_items: [{ quantity: 1, price_data: { currency: request.currency.toLowerCase(), unit_amount: request.amountMinor, product_data: { name: request.description } } }],
+        line_items: [
+          {
+            quantity: 1,
+            price_data: {
+              currency: request.currency.toLowerCase(),
+              unit_amount: request.amountMinor,
+              product_data: { name: request.description },
+            },
+          },
+        ],
         success_url: request.successUrl,
         cancel_url: request.cancelUrl,
         client_reference_id: request.orderId,
         metadata: about,
-        payment_intent_data: { description: request.description, metadata: about, transfer_data: { destination: request.supplierAccount } },
+        payment_intent_data: {
+          description: request.description,
+          metadata: about,
+          transfer_data: { destination: request.supplierAccount },
+        },
       },
       { idempotencyKey: request.idempotencyKey },
     );
@@ -100,13 +116,33 @@ export type RefundRequest = {
   reverseTransfer: boolean;
 };
 
-export type Refund = { id: string; amountMinor: number; currency: string; status: 'pending' | 'requires_action' | 'succeeded' | 'failed' | 'canceled' };
+export type Refund = {
+  id: string;
+  amountMinor: number;
+  currency: string;
+  status: 'pending' | 'requires_action' | 'succeeded' | 'failed' | 'canceled';
+};
 
 /** Gives back part or all of a payment: a short delivery, a cancelled line. */
 export async function refund(request: RefundRequest): Promise<{ ok: true; refund: Refund } | PaymentFailure> {
   return attempt(async (stripe) => {
-    const made = await stripe.refunds.create({ payment_intent: request.paymentIntentId, amount: request.amountMinor, reverse_transfer: request.reverseTransfer }, { idempotencyKey: request.idempotencyKey });
-    return { ok: true, refund: { id: made.id, amountMinor: made.amount, currency: made.currency.toUpperCase(), status: refundStatus.parse(made.status) } };
+    const made = await stripe.refunds.create(
+      {
+        payment_intent: request.paymentIntentId,
+        amount: request.amountMinor,
+        reverse_transfer: request.reverseTransfer,
+      },
+      { idempotencyKey: request.idempotencyKey },
+    );
+    return {
+      ok: true,
+      refund: {
+        id: made.id,
+        amountMinor: made.amount,
+        currency: made.currency.toUpperCase(),
+        status: refundStatus.parse(made.status),
+      },
+    };
   });
 }
 
@@ -122,13 +158,20 @@ export type PaymentEvent = {
   body: Record<string, unknown>;
 };
 
-export type WebhookRefusal = { ok: false; reason: 'unsigned' | 'forged' | 'stale' | 'from-the-future' | 'unreadable' | 'wrong-mode'; message: string };
+export type WebhookRefusal = {
+  ok: false;
+  reason: 'unsigned' | 'forged' | 'stale' | 'from-the-future' | 'unreadable' | 'wrong-mode';
+  message: string;
+};
 
 /**
  * Believes a webhook or says why not; answer 400 for every refusal. `rawBody` is the text as it came (req.text()):
  * parsed and written again it no longer fits its signature.
  */
-export function verifyWebhook(rawBody: string, signature: string | null): { ok: true; event: PaymentEvent } | WebhookRefusal {
+export function verifyWebhook(
+  rawBody: string,
+  signature: string | null,
+): { ok: true; event: PaymentEvent } | WebhookRefusal {
   if (!signature) return webhookRefusal('unsigned', 'no stripe-signature header');
   const { secretKey, webhookSecret } = environment().payments;
   let believed: unknown;
@@ -142,7 +185,8 @@ export function verifyWebhook(rawBody: string, signature: string | null): { ok: 
   }
   // The SDK refuses an old time but takes any later one, which would let a captured message be kept for years.
   const seconds = Number(/(?:^|,)\s*t=(\d{1,12})/.exec(signature)?.[1] ?? Number.NaN);
-  if (!(seconds <= Date.now() / 1000 + CLOCK_SKEW_SECONDS)) return webhookRefusal('from-the-future', `signed for ${seconds}`);
+  if (!(seconds <= Date.now() / 1000 + CLOCK_SKEW_SECONDS))
+    return webhookRefusal('from-the-future', `signed for ${seconds}`);
   const parsed = eventShape.safeParse(believed);
   if (!parsed.success) return webhookRefusal('unreadable', 'the body is not an event');
   const { data, ...event } = parsed.data;
@@ -178,7 +222,9 @@ const eventShape = z.looseObject({
   type: z.string().min(1),
   created: z.number().int(),
   livemode: z.boolean(),
-  data: z.looseObject({ object: z.looseObject({ id: z.string().optional(), object: z.string(), payment_intent: idOrObject }) }),
+  data: z.looseObject({
+    object: z.looseObject({ id: z.string().optional(), object: z.string(), payment_intent: idOrObject }),
+  }),
 });
 
 let made: Stripe | undefined;
@@ -197,7 +243,9 @@ function client(): Stripe {
 }
 
 /** Runs one request; waits and repeats a bounded number of times while the provider says it is busy. */
-async function attempt<Success extends { ok: true }>(request: (stripe: Stripe) => Promise<Success>): Promise<Success | PaymentFailure> {
+async function attempt<Success extends { ok: true }>(
+  request: (stripe: Stripe) => Promise<Success>,
+): Promise<Success | PaymentFailure> {
   for (const delayMs of [...BUSY_DELAYS_MS, null]) {
     try {
       return await request(client());
@@ -212,7 +260,10 @@ async function attempt<Success extends { ok: true }>(request: (stripe: Stripe) =
 
 // Jitter keeps two processes that were refused together from coming back together.
 function delayBefore(error: unknown, delayMs: number): number {
-  const asked = error instanceof Stripe.errors.StripeError ? Number(error.headers?.['retry-after'] ?? Number.NaN) * 1000 : Number.NaN;
+  const asked =
+    error instanceof Stripe.errors.StripeError
+      ? Number(error.headers?.['retry-after'] ?? Number.NaN) * 1000
+      : Number.NaN;
   const leastMs = Number.isFinite(asked) ? Math.min(LONGEST_ASKED_DELAY_MS, Math.max(0, asked)) : 0;
   return Math.max(leastMs, delayMs / 2 + Math.random() * (delayMs / 2));
 }
@@ -227,7 +278,8 @@ function reasonOf(error: Stripe.errors.StripeError): PaymentFailure['reason'] {
   const { errors } = Stripe;
   if (error instanceof errors.StripeRateLimitError) return 'busy';
   if (error instanceof errors.StripeIdempotencyError) return 'conflict';
-  if (error instanceof errors.StripeAuthenticationError || error instanceof errors.StripePermissionError) return 'misconfigured';
+  if (error instanceof errors.StripeAuthenticationError || error instanceof errors.StripePermissionError)
+    return 'misconfigured';
   if (error.code === 'resource_missing' && error.statusCode === 404) return 'not-found';
   if (error instanceof errors.StripeConnectionError || error instanceof errors.StripeAPIError) return 'unreachable';
   return 'refused';
@@ -245,7 +297,8 @@ function checkoutFrom(session: Stripe.Checkout.Session): Checkout {
     orderId: session.client_reference_id,
     attempt: attemptText === undefined ? null : Number(attemptText),
     metadata: { ...session.metadata },
-    paymentIntentId: typeof session.payment_intent === 'string' ? session.payment_intent : (session.payment_intent?.id ?? null),
+    paymentIntentId:
+      typeof session.payment_intent === 'string' ? session.payment_intent : (session.payment_intent?.id ?? null),
     expiresAt: new Date(session.expires_at * 1000),
   };
 }

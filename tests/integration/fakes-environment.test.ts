@@ -5,7 +5,8 @@ import { describe, expect, it } from 'vitest';
 import { EnvironmentError, readEnvironment } from '@/lib/services/environment';
 
 const EXAMPLE = fileURLToPath(new URL('../../.env.example', import.meta.url));
-const token = (apiKey: string) => Buffer.from(JSON.stringify({ apiKey, appId: 'app', regions: ['eu1'] })).toString('base64');
+const token = (apiKey: string) =>
+  Buffer.from(JSON.stringify({ apiKey, appId: 'app', regions: ['eu1'] })).toString('base64');
 
 // The example as written, with the one secret that it leaves to the reader.
 const fake: Record<string, string> = {
@@ -43,25 +44,49 @@ function problemsOf(record: Record<string, string | undefined>): readonly { vari
   return [];
 }
 
-const without = (record: Record<string, string>, name: string) => Object.fromEntries(Object.entries(record).filter(([key]) => key !== name));
+const without = (record: Record<string, string>, name: string) =>
+  Object.fromEntries(Object.entries(record).filter(([key]) => key !== name));
 
 describe('a complete environment', () => {
   it('is what .env.example says, but for the secret', () => {
     const read = readEnvironment(fake);
-    expect(read).toMatchObject({ services: 'fake', port: 3000, appOrigin: 'http://localhost:3000', payments: { api: { host: 'localhost', port: 4601, protocol: 'http' } } });
+    expect(read).toMatchObject({
+      services: 'fake',
+      port: 3000,
+      appOrigin: 'http://localhost:3000',
+      payments: { api: { host: 'localhost', port: 4601, protocol: 'http' } },
+    });
     expect(read.foreignOrigins).toEqual({ connect: ['http://localhost:4601'], form: ['http://localhost:4601'] });
-    expect(problemsOf({ ...fake, NEXTAUTH_SECRET: '' }).map((problem) => problem.variable)).toEqual(['NEXTAUTH_SECRET']);
+    expect(problemsOf({ ...fake, NEXTAUTH_SECRET: '' }).map((problem) => problem.variable)).toEqual([
+      'NEXTAUTH_SECRET',
+    ]);
   });
 
   it('is read for the hosted services, which nothing redirects', () => {
     const read = readEnvironment(live);
     expect(read.payments.api).toBeNull();
-    expect(read.foreignOrigins).toEqual({ connect: ['https://eu1.ingest.uploadthing.com'], form: ['https://checkout.stripe.com'] });
+    expect(read.foreignOrigins).toEqual({
+      connect: ['https://eu1.ingest.uploadthing.com'],
+      form: ['https://checkout.stripe.com'],
+    });
   });
 });
 
 describe('a missing variable', () => {
-  const needed = ['OHMSTEAD_SERVICES', 'DATABASE_URL', 'NEXTAUTH_URL', 'NEXTAUTH_SECRET', 'STRIPE_SECRET_KEY', 'STRIPE_WEBHOOK_SECRET', 'UPLOADTHING_TOKEN', 'UPLOADTHING_CALLBACK_URL', 'UPLOADTHING_IS_DEV', 'UPLOADTHING_LOG_LEVEL', 'SMTP_URL', 'MAIL_FROM'];
+  const needed = [
+    'OHMSTEAD_SERVICES',
+    'DATABASE_URL',
+    'NEXTAUTH_URL',
+    'NEXTAUTH_SECRET',
+    'STRIPE_SECRET_KEY',
+    'STRIPE_WEBHOOK_SECRET',
+    'UPLOADTHING_TOKEN',
+    'UPLOADTHING_CALLBACK_URL',
+    'UPLOADTHING_IS_DEV',
+    'UPLOADTHING_LOG_LEVEL',
+    'SMTP_URL',
+    'MAIL_FROM',
+  ];
   it.each(needed)('%s is named, with what it should look like', (name) => {
     for (const record of [fake, live]) {
       const problems = problemsOf(without(record, name));
@@ -70,13 +95,23 @@ describe('a missing variable', () => {
     }
   });
 
-  it.each(['STRIPE_API_URL', 'UPLOADTHING_INGEST_URL', 'UPLOADTHING_API_URL', 'UPLOADTHING_UFS_HOST', 'UPLOADTHING_UFS_APP_ID_LOCATION'])('%s is demanded with the stand-ins and refused with the hosted services', (name) => {
+  it.each([
+    'STRIPE_API_URL',
+    'UPLOADTHING_INGEST_URL',
+    'UPLOADTHING_API_URL',
+    'UPLOADTHING_UFS_HOST',
+    'UPLOADTHING_UFS_APP_ID_LOCATION',
+  ])('%s is demanded with the stand-ins and refused with the hosted services', (name) => {
     expect(problemsOf(without(fake, name)).map((problem) => problem.variable)).toEqual([name]);
     expect(problemsOf({ ...live, [name]: fake[name] }).map((problem) => problem.variable)).toEqual([name]);
   });
 
   it('is told together with all others, so that the file is repaired once', () => {
-    expect(problemsOf({}).map((problem) => problem.variable).sort()).toEqual([...needed].sort());
+    expect(
+      problemsOf({})
+        .map((problem) => problem.variable)
+        .sort(),
+    ).toEqual([...needed].sort());
   });
 });
 
@@ -88,7 +123,10 @@ describe('a wrong variable', () => {
     ['a real upload token with the stand-ins', { UPLOADTHING_TOKEN: token('sk_live_abcdefgh1') }],
     ['payments sent to another machine', { STRIPE_API_URL: 'http://192.0.2.1:4601' }],
     ['payments with a path, which the SDK would drop', { STRIPE_API_URL: 'http://localhost:4601/stripe' }],
-    ['a host that merely starts like this machine', { UPLOADTHING_INGEST_URL: 'http://localhost.elsewhere.example/ingest' }],
+    [
+      'a host that merely starts like this machine',
+      { UPLOADTHING_INGEST_URL: 'http://localhost.elsewhere.example/ingest' },
+    ],
     ['mail sent to another machine', { SMTP_URL: 'smtp://mail.example:25' }],
     ['a store host that the SDK would reach by https', { UPLOADTHING_UFS_HOST: '127.0.0.1:4601' }],
     ['a database that is none', { DATABASE_URL: 'mysql://a:b@127.0.0.1/x' }],
@@ -115,7 +153,12 @@ describe('a wrong variable', () => {
   });
 
   it('is never repeated in the message, since it may be a secret', () => {
-    const problems = problemsOf({ ...fake, STRIPE_SECRET_KEY: 'sk_live_verysecret', DATABASE_URL: 'verysecret', NEXTAUTH_SECRET: 'verysecret' });
+    const problems = problemsOf({
+      ...fake,
+      STRIPE_SECRET_KEY: 'sk_live_verysecret',
+      DATABASE_URL: 'verysecret',
+      NEXTAUTH_SECRET: 'verysecret',
+    });
     expect(problems).toHaveLength(3);
     expect(JSON.stringify(problems)).not.toContain('verysecret');
   });

@@ -33,8 +33,16 @@ const order: Mail = {
   text: 'The order is attached.\nhttp://localhost:3000/orders/2031',
   html: '<p>The order is <a href="http://localhost:3000/orders/2031?from=mail&amp;x=1">attached</a>.</p><script>alert(1)</script>',
   attachments: [
-    { filename: 'order-2031.csv', contentType: 'text/csv', content: new TextEncoder().encode('part,quantity\nTL072,40\n') },
-    { filename: 'order-2031 ±.pdf', contentType: 'application/pdf', content: new Uint8Array(70_000).map((_, at) => (at * 7) % 256) },
+    {
+      filename: 'order-2031.csv',
+      contentType: 'text/csv',
+      content: new TextEncoder().encode('part,quantity\nTL072,40\n'),
+    },
+    {
+      filename: 'order-2031 ±.pdf',
+      contentType: 'application/pdf',
+      content: new Uint8Array(70_000).map((_, at) => (at * 7) % 256),
+    },
   ],
   messageIdFrom: 'order-sent:2031:1',
 };
@@ -47,11 +55,22 @@ describe('an order sent to a supplier', () => {
   it('arrives with its documents unchanged', async () => {
     expect(await sendMail(order)).toMatchObject({ ok: true });
     const [mail] = await received(`to=${encodeURIComponent('orders@brasskettle.example')}`);
-    expect(mail).toMatchObject({ to: ['orders@brasskettle.example'], subject: order.subject, from: expect.stringContaining('stores@ohmstead.example') });
+    expect(mail).toMatchObject({
+      to: ['orders@brasskettle.example'],
+      subject: order.subject,
+      from: expect.stringContaining('stores@ohmstead.example'),
+    });
     expect(mail?.text).toContain('The order is attached.');
-    expect(mail?.links).toEqual(['http://localhost:3000/orders/2031', 'http://localhost:3000/orders/2031?from=mail&x=1']);
+    expect(mail?.links).toEqual([
+      'http://localhost:3000/orders/2031',
+      'http://localhost:3000/orders/2031?from=mail&x=1',
+    ]);
     expect(mail?.attachments.map(({ filename, contentType, sha256 }) => ({ filename, contentType, sha256 }))).toEqual(
-      (order.attachments ?? []).map(({ filename, contentType, content }) => ({ filename, contentType, sha256: createHash('sha256').update(content).digest('hex') })),
+      (order.attachments ?? []).map(({ filename, contentType, content }) => ({
+        filename,
+        contentType,
+        sha256: createHash('sha256').update(content).digest('hex'),
+      })),
     );
     const pdf = await fetch(`${fakes.origin}${mail?.attachments[1]?.href ?? ''}`);
     expect(pdf.headers.get('content-disposition')).toMatch(/^attachment/);
@@ -108,11 +127,17 @@ describe('what people type', () => {
     const shown = await fetch(`${fakes.origin}/mail/${mail?.id ?? ''}/html`);
     expect(shown.headers.get('content-security-policy')).toMatch(/^sandbox (?!.*allow-scripts)/);
     expect(await (await fetch(`${fakes.origin}/mail`)).text()).not.toContain('<img');
-    expect(await (await fetch(`${fakes.origin}/mail/${mail?.id ?? ''}`)).text()).toContain('sandbox="allow-popups allow-popups-to-escape-sandbox"');
+    expect(await (await fetch(`${fakes.origin}/mail/${mail?.id ?? ''}`)).text()).toContain(
+      'sandbox="allow-popups allow-popups-to-escape-sandbox"',
+    );
   });
 });
 
 it('a Message-ID has the form of RFC 5322, in the domain the mail comes from', () => {
-  expect(messageIdFor('digest:2026-W49', 'Ohmstead <stores@ohmstead.example>')).toMatch(/^<[0-9a-f]{40}@ohmstead\.example>$/);
-  expect(messageIdFor('digest:2026-W49', 'stores@ohmstead.example')).toBe(messageIdFor('digest:2026-W49', 'Ohmstead <stores@ohmstead.example>'));
+  expect(messageIdFor('digest:2026-W49', 'Ohmstead <stores@ohmstead.example>')).toMatch(
+    /^<[0-9a-f]{40}@ohmstead\.example>$/,
+  );
+  expect(messageIdFor('digest:2026-W49', 'stores@ohmstead.example')).toBe(
+    messageIdFor('digest:2026-W49', 'Ohmstead <stores@ohmstead.example>'),
+  );
 });

@@ -23,7 +23,11 @@ export type Fakes = {
 };
 
 /** `appPort` is where events and callbacks go; `extra` overrides variables of the child process. */
-export async function startFakes(appPort: number, extra: Record<string, string> = {}, ports?: { http: number; smtp: number }): Promise<Fakes> {
+export async function startFakes(
+  appPort: number,
+  extra: Record<string, string> = {},
+  ports?: { http: number; smtp: number },
+): Promise<Fakes> {
   const http = ports?.http ?? (await freePort());
   const smtp = ports?.smtp ?? (await freePort());
   const origin = `http://localhost:${http}`;
@@ -82,7 +86,9 @@ export async function failedStart(variables: Record<string, string>): Promise<{ 
 }
 
 /** The application's side: answers what `answer` says, on a free port of this machine. */
-export async function startApp(answer: (request: IncomingMessage, response: ServerResponse) => Promise<void>): Promise<{ port: number; stop(): Promise<void> }> {
+export async function startApp(
+  answer: (request: IncomingMessage, response: ServerResponse) => Promise<void>,
+): Promise<{ port: number; stop(): Promise<void> }> {
   const server: Server = createServer((request, response) => {
     answer(request, response).catch((error: unknown) => {
       response.statusCode = 500;
@@ -121,7 +127,10 @@ const portOf = (server: Server): number => (server.address() as AddressInfo).por
 
 function launch(variables: Record<string, string>): { child: ChildProcess; errors: () => string } {
   // Nothing of the caller's environment but what a process needs to run: a stray variable would decide a test.
-  const child = spawn(process.execPath, ['--import', 'tsx', MAIN], { env: { PATH: process.env.PATH ?? '', HOME: process.env.HOME ?? '', ...variables }, stdio: ['ignore', 'pipe', 'pipe'] });
+  const child = spawn(process.execPath, ['--import', 'tsx', MAIN], {
+    env: { PATH: process.env.PATH ?? '', HOME: process.env.HOME ?? '', ...variables },
+    stdio: ['ignore', 'pipe', 'pipe'],
+  });
   let errors = '';
   child.stderr?.on('data', (chunk: Buffer) => {
     errors += chunk.toString('utf8');

@@ -29,9 +29,17 @@ beforeAll(async () => {
       complete: (file) => complete(file),
       failed: (error, key) => failures.push({ message: error instanceof Error ? error.message : String(error), key }),
     });
-    const headers = new Headers(Object.entries(request.headers).flatMap(([name, value]) => (typeof value === 'string' ? [[name, value] as [string, string]] : [])));
+    const headers = new Headers(
+      Object.entries(request.headers).flatMap(([name, value]) =>
+        typeof value === 'string' ? [[name, value] as [string, string]] : [],
+      ),
+    );
     const body = request.method === 'POST' ? await bodyOf(request) : undefined;
-    const web = new NextRequest(`http://localhost:${app.port}${request.url ?? ''}`, { method: request.method ?? 'GET', headers, ...(body === undefined ? {} : { body }) });
+    const web = new NextRequest(`http://localhost:${app.port}${request.url ?? ''}`, {
+      method: request.method ?? 'GET',
+      headers,
+      ...(body === undefined ? {} : { body }),
+    });
     const answer = await (request.method === 'POST' ? handlers.POST(web) : handlers.GET(web));
     response.writeHead(answer.status, { 'content-type': 'application/json' });
     response.end(await answer.text());
@@ -55,10 +63,17 @@ beforeEach(async () => {
   };
 });
 
-function ask(files: { name: string; size: number; type: string }[], input: unknown = { circuitId: CIRCUIT }): Promise<Response> {
+function ask(
+  files: { name: string; size: number; type: string }[],
+  input: unknown = { circuitId: CIRCUIT },
+): Promise<Response> {
   return fetch(`http://localhost:${app.port}/api/uploadthing?actionType=upload&slug=partsList`, {
     method: 'POST',
-    headers: { 'content-type': 'application/json', 'x-uploadthing-version': '7.7.4', 'x-uploadthing-package': '@uploadthing/react' },
+    headers: {
+      'content-type': 'application/json',
+      'x-uploadthing-version': '7.7.4',
+      'x-uploadthing-package': '@uploadthing/react',
+    },
     body: JSON.stringify({ input, files: files.map((file) => ({ ...file, lastModified: 1_700_000_000_000 })) }),
   });
 }
@@ -91,11 +106,18 @@ describe('a parts list sent to the store', () => {
   it('arrives whole, is noted for the person who sent it, and reads back byte for byte', async () => {
     const address = await presigned();
     const start = await head(address.url);
-    expect([start.status, start.headers.get('x-ut-range-start'), start.headers.get('access-control-expose-headers')]).toEqual([200, '0', 'x-ut-range-start']);
+    expect([
+      start.status,
+      start.headers.get('x-ut-range-start'),
+      start.headers.get('access-control-expose-headers'),
+    ]).toEqual([200, '0', 'x-ut-range-start']);
     const answer = await put(address.url, LIST);
     expect(answer.status).toBe(200);
     expect(answer.headers.get('access-control-allow-origin')).toBe(`http://localhost:${app.port}`);
-    expect(await answer.json()).toMatchObject({ serverData: { ok: true, uploadId: `noted-${address.key}` }, fileHash: createHash('md5').update(LIST).digest('hex') });
+    expect(await answer.json()).toMatchObject({
+      serverData: { ok: true, uploadId: `noted-${address.key}` },
+      fileHash: createHash('md5').update(LIST).digest('hex'),
+    });
     expect(completed).toEqual([
       {
         key: address.key,
@@ -114,7 +136,14 @@ describe('a parts list sent to the store', () => {
 
   it('is asked for beforehand by the browser, and the store allows it', async () => {
     const { url } = await presigned();
-    const answer = await fetch(url, { method: 'OPTIONS', headers: { origin: browser().origin, 'access-control-request-method': 'PUT', 'access-control-request-headers': 'b3,range,traceparent,x-uploadthing-version' } });
+    const answer = await fetch(url, {
+      method: 'OPTIONS',
+      headers: {
+        origin: browser().origin,
+        'access-control-request-method': 'PUT',
+        'access-control-request-headers': 'b3,range,traceparent,x-uploadthing-version',
+      },
+    });
     expect(answer.status).toBe(204);
     const allowed = answer.headers.get('access-control-allow-headers') ?? '';
     for (const name of ['range', 'x-uploadthing-version', 'b3', 'traceparent']) expect(allowed).toContain(name);
@@ -126,9 +155,16 @@ describe('a parts list sent to the store', () => {
     const address = await presigned(bytes.length);
     await sendPartOf(address.url, bytes, 150_000);
     // The store hears of the break a moment later than this side.
-    await expect.poll(async () => Number((await head(address.url)).headers.get('x-ut-range-start')), { timeout: 5_000, interval: 20 }).toBeGreaterThan(100_000);
+    await expect
+      .poll(async () => Number((await head(address.url)).headers.get('x-ut-range-start')), {
+        timeout: 5_000,
+        interval: 20,
+      })
+      .toBeGreaterThan(100_000);
     const from = Number((await head(address.url)).headers.get('x-ut-range-start'));
-    expect(await (await put(address.url, bytes.subarray(from), from)).json()).toMatchObject({ serverData: { ok: true } });
+    expect(await (await put(address.url, bytes.subarray(from), from)).json()).toMatchObject({
+      serverData: { ok: true },
+    });
     const fetched = await fetchUpload(address.key);
     expect(fetched.ok && Buffer.from(fetched.bytes).equals(Buffer.from(bytes))).toBe(true);
   });
@@ -166,7 +202,9 @@ describe('an address of the store', () => {
     const { key } = await uploaded();
     const plain = `${fakes.origin}/a/${UPLOAD_APP}/${key}`;
     expect((await fetch(plain)).status).toBe(403);
-    expect((await fetch(`${plain}?expires=${Date.now() + 60_000}&signature=hmac-sha256%3D${'0'.repeat(64)}`)).status).toBe(403);
+    expect(
+      (await fetch(`${plain}?expires=${Date.now() + 60_000}&signature=hmac-sha256%3D${'0'.repeat(64)}`)).status,
+    ).toBe(403);
   });
 });
 
@@ -186,8 +224,21 @@ describe('what the store does not take', () => {
     ['an empty file', [{ name: 'a.csv', size: 0, type: 'text/csv' }], 400, 'The file is empty.'],
     ['an impossible size', [{ name: 'a.csv', size: -5, type: 'text/csv' }], 400, 'The file is empty.'],
     ['no file at all', [], 400, 'Send one file at a time.'],
-    ['two files', [{ name: 'a.csv', size: 1, type: '' }, { name: 'b.csv', size: 1, type: '' }], 400, 'Send one file at a time.'],
-    ['more than 64 MB', [{ name: 'a.csv', size: 64 * 1024 * 1024 + 1, type: 'text/csv' }], 400, 'The file is larger than 64 MB.'],
+    [
+      'two files',
+      [
+        { name: 'a.csv', size: 1, type: '' },
+        { name: 'b.csv', size: 1, type: '' },
+      ],
+      400,
+      'Send one file at a time.',
+    ],
+    [
+      'more than 64 MB',
+      [{ name: 'a.csv', size: 64 * 1024 * 1024 + 1, type: 'text/csv' }],
+      400,
+      'The file is larger than 64 MB.',
+    ],
   ])('%s is refused with a sentence for the person', async (_, files, status, message) => {
     const answer = await ask(files);
     expect([answer.status, await answer.json()]).toEqual([status, { message }]);
@@ -204,7 +255,10 @@ describe('what the store does not take', () => {
       throw new Error('relation "person" does not exist');
     };
     const answer = await ask([{ name: 'a.csv', size: 1, type: 'text/csv' }]);
-    expect([answer.status, await answer.json()]).toEqual([500, { message: 'The upload could not be started. Try again.' }]);
+    expect([answer.status, await answer.json()]).toEqual([
+      500,
+      { message: 'The upload could not be started. Try again.' },
+    ]);
     expect(failures).toEqual([{ message: 'relation "person" does not exist', key: null }]);
   });
 });
@@ -227,7 +281,10 @@ describe('the store calling back', () => {
     await fakes.control('uploads/lose-callback');
     const { url, key } = await presigned();
     const answer = await put(url, LIST);
-    expect([answer.status, await answer.json()]).toEqual([200, { error: 'The application could not be told of the file.' }]);
+    expect([answer.status, await answer.json()]).toEqual([
+      200,
+      { error: 'The application could not be told of the file.' },
+    ]);
     expect(completed).toEqual([]);
     expect(await fakes.control('uploads/call-again', { key })).toEqual({ status: 200 });
     expect(completed.map((file) => file.key)).toEqual([key]);
@@ -277,7 +334,9 @@ function sendPartOf(address: string, bytes: Uint8Array, count: number): Promise<
   const length = opening.length + bytes.length + closing.length;
   return new Promise((resolve, reject) => {
     const socket = connect(Number(url.port), '127.0.0.1', () => {
-      socket.write(`PUT ${url.pathname}${url.search} HTTP/1.1\r\nhost: ${url.host}\r\nrange: bytes=0-\r\ncontent-type: multipart/form-data; boundary=${boundary}\r\ncontent-length: ${length}\r\n\r\n${opening}`);
+      socket.write(
+        `PUT ${url.pathname}${url.search} HTTP/1.1\r\nhost: ${url.host}\r\nrange: bytes=0-\r\ncontent-type: multipart/form-data; boundary=${boundary}\r\ncontent-length: ${length}\r\n\r\n${opening}`,
+      );
       // Half-closed rather than reset, so that the bytes written are not thrown away on their way.
       socket.end(Buffer.from(bytes.subarray(0, count)));
     });
