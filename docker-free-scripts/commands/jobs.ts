@@ -6,7 +6,7 @@ import { jobHandlers } from '@/lib/jobs';
 import { environment } from '@/lib/services/environment';
 import { startJobs } from '@/lib/services/jobs';
 
-const jobs = await startJobs(environment().DATABASE_URL, jobHandlers);
+const jobs = await startJobs(environment().databaseUrl, jobHandlers);
 log.info('the job process runs');
 
 let stopping = false;
