@@ -4,12 +4,14 @@ import { type Check, effect, fail, measure, pass, remark, spanOf, type StandInCo
 import { comparePins, nameOf } from './pin-comparison';
 import { checkSupply, supplyRange } from './supply-check';
 
-/** Full swing at the top of the audio band; slew = 2π·f·peak. */
+/** Slew for full swing is 2π·f·peak. Below 10 kHz at full swing audio suffers plainly; above 20 kHz nobody hears it. */
+const AUDIO_FLOOR_HERTZ = 10_000;
 const AUDIO_TOP_HERTZ = 20_000;
 
 export function assessOpAmp(wanted: OpAmpFamily, offered: OpAmpFamily, context: StandInContext): Check[] {
   return [
     channels(wanted, offered),
+    ...familyStep(wanted, offered),
     comparePins(wanted, offered),
     supply(wanted, offered, context),
     outputSwing(wanted, offered, context),
@@ -23,6 +25,15 @@ export function assessOpAmp(wanted: OpAmpFamily, offered: OpAmpFamily, context: 
     ...phaseReversal(wanted, offered),
     ...offered.cautions.filter(() => wanted.id !== offered.id).map((caution) => remark('caution', nameOf(wanted), nameOf(offered), caution.value)),
   ];
+}
+
+/** TL06x, TL07x and TL08x are one design in three grades: low power, low noise, general. */
+function familyStep(wanted: OpAmpFamily, offered: OpAmpFamily): Check[] {
+  const [a, b] = [/^tl0([678])[124]$/.exec(wanted.id), /^tl0([678])[124]$/.exec(offered.id)];
+  if (a === null || b === null || a[1] === b[1]) return [];
+  const grades: Readonly<Record<string, string>> = { '6': 'the low-power grade', '7': 'the low-noise grade', '8': 'the general grade' };
+  const words = [grades[a[1] ?? ''] ?? '', grades[b[1] ?? ''] ?? ''] as const;
+  return [remark('family-step', ...words, `The ${nameOf(offered)} is ${words[1]} of the same design; the ${nameOf(wanted)} is ${words[0]}.`)];
 }
 
 function channels(wanted: OpAmpFamily, offered: OpAmpFamily): Check {
@@ -75,7 +86,7 @@ function inputRange(wanted: OpAmpFamily, offered: OpAmpFamily, { rails }: StandI
   if (a === null || b === null || c === null || d === null) return unknown('input-range', margins(a, b), margins(c, d), 'How near its inputs may come to the rails is not in the tables.');
   const words = [margins(a, b), margins(c, d)] as const;
   const loss = lost(a, b, c, d);
-  if (loss <= 0.5) return pass('input-range', ...words, 'Its inputs take as much of the supply.');
+  if (loss <= 0.7) return pass('input-range', ...words, 'Its inputs take as much of the supply.');
   const span = spanOf(rails);
   const need = `Its inputs must stay ${measure(c.value, 'V')} above the lower rail and ${measure(d.value, 'V')} below the upper one`;
   if (span === null) return unknown('input-range', ...words, `${need}; whether signals keep to that depends on the rails.`);
@@ -103,9 +114,12 @@ function slew(wanted: OpAmpFamily, offered: OpAmpFamily, { rails, use }: StandIn
   if (b.value >= 0.7 * a.value) return pass('slew-rate', ...words, 'It is as fast.');
   const span = spanOf(rails);
   const peak = span === null ? null : Math.max(0, span / 2 - (offered.outputBelowPositiveVolts?.value ?? 0));
-  const needed = peak === null ? null : (2 * Math.PI * AUDIO_TOP_HERTZ * peak) / 1e6;
-  if (use === 'audio' && needed !== null && b.value < needed && a.value >= needed) {
-    return weighed(fail('slew-rate', ...words, `Full swing at 20 kHz needs ${measure(needed, 'V/µs')}; it makes triangles of loud treble.`), b);
+  const fullSwingHertz = peak === null || peak === 0 ? null : (b.value * 1e6) / (2 * Math.PI * peak);
+  if (use === 'audio' && peak !== null && fullSwingHertz !== null) {
+    const reach = `It makes full swing of ${measure(peak, 'V')} up to ${measure(fullSwingHertz / 1000, 'kHz')} only`;
+    if (fullSwingHertz < AUDIO_FLOOR_HERTZ) return weighed(fail('slew-rate', ...words, `${reach}: loud treble turns into triangles.`), b);
+    if (fullSwingHertz >= AUDIO_TOP_HERTZ) return remark('slew-rate', ...words, 'It is slower, but fast enough for full swing over the whole audio band.');
+    return effect('slew-rate', ...words, `${reach}: the loudest treble loses its edge.`);
   }
   return effect('slew-rate', ...words, 'It is slower: steep edges lean, and loud treble loses swing.');
 }

@@ -72,7 +72,7 @@ export function unknown(...[check, wanted, offered, why]: Words): Check {
 export function weighed(check: Check, ...facts: readonly (Fact<unknown> | null)[]): Check {
   const bases: readonly Basis[] = facts.flatMap((fact) => (fact === null ? [] : [fact.basis]));
   if (!bases.includes('memory')) return check;
-  const why = `${check.why.replace(/\.$/, '')}; that figure is from memory, so look it up in the datasheet.`;
+  const why = `${check.why.replace(/\.$/, '')}; this is from memory, so look it up in the datasheet.`;
   if (check.outcome === 'fail') return { ...check, outcome: 'unknown', why };
   if (check.outcome === 'pass') return { ...check, outcome: 'note', changes: true, why };
   return { ...check, why };

@@ -54,7 +54,7 @@ export function comparePins(wanted: Family, offered: Family): Check {
   const why =
     a.value.pins.length === b.value.pins.length
       ? `Same number of pins, other functions on them: the ${nameOf(offered)} does not work in the place of a ${nameOf(wanted)} without rewiring.`
-      : `A ${b.value.pins.length}-pin part does not fit a ${a.value.pins.length}-pin place.`;
+      : `A part with ${b.value.pins.length} pins does not fit where ${a.value.pins.length} are wanted.`;
   return weighed(fail('pin-out', describe(a), describe(b), why), a, b);
 }
 
@@ -69,9 +69,12 @@ export function compareLeads(wanted: Family, offered: Family, crossingAllowed: b
   }
   const left = a.value.pins.join(' ');
   const right = b.value.pins.join(' ');
-  if (left === right) return weighed(pass('lead-order', describe(a), describe(b), 'Same lead order.'), a, b);
+  // Sheets of one TO-92 number have been seen with the leads reversed (facts, section 6.1): never fit by table alone.
+  const look = b.value.package === 'TO-92' ? ' Check the maker’s drawing before soldering.' : '';
+  if (left === right) return weighed(pass('lead-order', describe(a), describe(b), `Same lead order.${look}`), a, b);
   if ([...a.value.pins].reverse().join(' ') === right) {
-    return weighed(effect('lead-order', describe(a), describe(b), `Mirrored leads: turn the ${nameOf(offered)} round, flat side where the outline has its curve.`), a, b);
+    const how = a.value.package === b.value.package ? 'turn it round, flat or marked side where the outline has its back.' : 'turn it round, and see that its other case fits.';
+    return weighed(effect('lead-order', describe(a), describe(b), `The ${nameOf(offered)} has mirrored leads: ${how}${look}`), a, b);
   }
   if (a.value.pins.length !== b.value.pins.length) return weighed(fail('lead-order', describe(a), describe(b), 'It has another number of leads.'), a, b);
   const check = crossingAllowed

@@ -18,7 +18,7 @@ const MOST_RAILS = 8;
 
 /**
  * @returns signed volts, positive rails first, each from the highest down
- * @throws RailsError with the reason: empty, no number, wrong way round (`-12,+12` as a pair is written +12,-12), zero,
+ * @throws RailsError with the reason: empty, no number, wrong way round (`-12,+12`, where `+12,-12` is meant), zero,
  *   beyond ±60 V, the same rail twice, more than eight
  */
 export function readRails(text: string): number[] {
@@ -31,8 +31,8 @@ export function readRails(text: string): number[] {
     .flatMap((piece) => readOne(piece.trim(), text));
   if (rails.length > MOST_RAILS) throw new RailsError('too-many', `A module has at most ${MOST_RAILS} rails; "${text}" has ${rails.length}.`);
   if (new Set(rails).size !== rails.length) throw new RailsError('twice', `"${text}" names one rail twice.`);
-  const firstNegative = rails.findIndex((rail) => rail < 0);
-  if (firstNegative >= 0 && rails.slice(firstNegative).some((rail) => rail > 0)) {
+  // Later negatives are usual (+12,-12,+5); a list that starts below ground has its ends swapped.
+  if ((rails[0] ?? 0) < 0 && rails.some((rail) => rail > 0)) {
     throw new RailsError('wrong-way-round', `"${text}" has the rails the wrong way round: the positive one comes first, like "+12,-12".`);
   }
   return [...rails].sort((a, b) => b - a);
