@@ -101,20 +101,20 @@ function readVoltageInNumber(compact: string): FamilyName | null {
   return null;
 }
 
-/** `-3.3`, `V33`, `CIM3-10.0`, `-3302E` and `-ADJ`; the text after the last hyphen wins, since packages carry digits too. */
+/** `-3.3`, `V33`, `CIM3-10.0`, `-3302E`, `-120` and `-ADJ`; digits that belong to the package are passed over. */
 function voltsWritten(rest: string, offered: readonly string[]): string | null {
-  if (/ADJ/.test(rest) && offered.includes('adj')) return 'adj';
-  for (const part of rest.split('-').reverse()) {
-    for (const digits of part.match(/\d+(?:\.\d+)?/g) ?? []) {
-      const plain = digits.includes('.') ? String(Number(digits)) : digits;
-      if (offered.includes(plain)) return plain;
-      if (!digits.includes('.') && digits.length >= 2) {
-        const tenths = String(Number(digits.slice(0, 2)) / 10);
-        if (offered.includes(tenths)) return tenths;
-      }
-    }
-  }
-  return rest === '' && offered.includes('adj') ? 'adj' : null;
+  if (offered.includes('adj') && (rest === '' || /ADJ/.test(rest))) return 'adj';
+  const decimal = /(\d{1,2}\.\d{1,2})(?!.*\d\.\d)/.exec(rest)?.[1];
+  if (decimal !== undefined) return oneOf(String(Number(decimal)), offered);
+  const digits = /(?:-|V)(\d{1,4})(?=[^0-9]|$)/.exec(rest)?.[1];
+  if (digits === undefined) return /^\d+(?:V|$)/.test(rest) ? oneOf(rest.replace(/V.*$/, ''), offered) : null;
+  // "-12" is 12 V on some 1117s and 1.2 V on others: no guess, a person reads the part.
+  if (digits === '12' && !offered.includes('12')) return null;
+  return oneOf(digits, offered) ?? (digits.length >= 2 ? oneOf(String(Number(digits.slice(0, 2)) / 10), offered) : null);
+}
+
+function oneOf(volts: string, offered: readonly string[]): string | null {
+  return offered.includes(volts) ? volts : null;
 }
 
 const ZENER_1N_FORM = /^1N(47[2-6]\d|52[2-5]\d)([^0-9].*)?$/;

@@ -46,7 +46,3 @@ export function crossGroup(wantedTitle: string, offeredTitle: string, wantedGrou
   }
   return fail('unit-function', wantedTitle, offeredTitle, `A ${offeredTitle} is no ${wantedTitle}.`);
 }
-
-export function sameResult(title: string): Check {
-  return pass('part', title, title, 'The same type.');
-}

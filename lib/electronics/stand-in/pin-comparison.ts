@@ -26,6 +26,8 @@ export function samePins(a: PinOut, b: PinOut): boolean {
 
 /** `1,2>3 5,6>4`, sorted; empty where the part is not made of gates. */
 export function gateUnits(layout: PinOut): string {
+  // Switches and counters use some of the same letters: only a part whose every pin is a gate's, a supply or free counts.
+  if (!layout.pins.every((pin) => /^(?:[A-HY]\d|NC|VDD|VCC|VSS|GND)$/.test(pin))) return '';
   const units = new Map<string, { inputs: number[]; output: number }>();
   layout.pins.forEach((pin, index) => {
     const form = /^([A-HY])(\d)$/.exec(pin);
