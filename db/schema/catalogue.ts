@@ -1,6 +1,6 @@
 /** Parts as the workshop keeps them: the same facts that the reader understands in a line, as columns to match by. */
 import { sql } from 'drizzle-orm';
-import { boolean, check, index, integer, numeric, pgTable, primaryKey, text, uniqueIndex } from 'drizzle-orm/pg-core';
+import { boolean, check, doublePrecision, index, integer, numeric, pgTable, primaryKey, text, uniqueIndex } from 'drizzle-orm/pg-core';
 import { at, createdAt, ownWorkshopOnly, rowId, workshopId } from './columns';
 
 export const part = pgTable(
@@ -36,6 +36,11 @@ export const part = pgTable(
     reorderQuantity: integer('reorder_quantity'),
     /** Upper-case letters and digits of the part number; what spellings are compared by. */
     partKey: text('part_key').generatedAlwaysAs(sql`upper(regexp_replace(part_number, '[^A-Za-z0-9]', '', 'g'))`),
+    /**
+     * The value as a double: the index is on it because comparing `numeric` is not leakproof in PostgreSQL, so that under
+     * row-level security an index on `value` itself is never used. Equal values are compared by `value` besides.
+     */
+    valueKey: doublePrecision('value_key').generatedAlwaysAs(sql`value::double precision`),
     version: integer('version').notNull().default(1),
     retiredAt: at('retired_at'),
     createdAt: createdAt(),
@@ -50,7 +55,7 @@ export const part = pgTable(
     // The three ways a line finds its part: by spelling, by family, by kind and exact value.
     index('part_by_key').on(t.workshopId, t.partKey),
     index('part_by_family').on(t.workshopId, t.family),
-    index('part_by_value').on(t.workshopId, t.kind, t.value),
+    index('part_by_value').on(t.workshopId, t.kind, t.valueKey),
     // The one field and the parts page search by any piece of the name or description.
     index('part_search').using('gin', sql`(name || ' ' || coalesce(part_number, '') || ' ' || description) gin_trgm_ops`),
     ownWorkshopOnly(),
