@@ -66,7 +66,7 @@ const config: Config = {
       small: ['0.875rem', '1.4'],
       body: ['0.9375rem', '1.42'],
       lead: ['1.0625rem', '1.4'],
-      sheet: ['1.1875rem', '1.3'],
+      heading: ['1.1875rem', '1.3'],
       title: ['1.625rem', '1.2'],
       figure: ['2.125rem', '1.1'],
       stop: ['2.5rem', '1.05'],

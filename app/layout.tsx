@@ -8,7 +8,7 @@ import './globals.css';
 export const metadata: Metadata = {
   title: { default: 'Ohmstead', template: '%s · Ohmstead' },
   description: 'Parts list in, kit on the bench, bins restocked.',
-  icons: { icon: '/mark.svg' },
+  icons: { icon: '/icon.svg' },
 };
 
 export const viewport: Viewport = {

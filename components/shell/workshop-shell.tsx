@@ -24,9 +24,9 @@ export function WorkshopShell({ banner, children, ...bar }: TopBarProps & { read
 /** A line under the bar that holds for all pages: "Local stand-ins: no money moves". */
 export function Banner({ children }: { readonly children: ReactNode }) {
   return (
-    <p role="note" className="border-b border-rule bg-amber-wash px-6.5 py-1 text-small text-amber max-sm:px-4 print:hidden">
+    <aside aria-label="About this installation" className="border-b border-rule bg-amber-wash px-6.5 py-1 text-small text-amber max-sm:px-4 print:hidden">
       {children}
-    </p>
+    </aside>
   );
 }
 

@@ -39,7 +39,7 @@ export function Dialog({ title, description, trigger, open, onOpenChange, place 
         >
           <div className="flex items-start justify-between gap-4 border-b border-rule py-3 pr-3 pl-5">
             <div className="min-w-0 pt-1">
-              <Parts.Title className="text-sheet font-bold">{title}</Parts.Title>
+              <Parts.Title className="text-heading font-bold">{title}</Parts.Title>
               {description === undefined ? null : <Parts.Description className="mt-0.5 text-soft">{description}</Parts.Description>}
             </div>
             <Parts.Close aria-label="Close" className="inline-flex size-9 shrink-0 items-center justify-center text-soft hover:bg-hair hover:text-ink max-sm:size-11">

@@ -189,7 +189,7 @@ export function CheckboxField({
   const controlId = id ?? made;
   const described = [hint !== undefined ? `${controlId}-hint` : null, error ? `${controlId}-error` : null].filter(Boolean).join(' ');
   return (
-    <div className="grid grid-cols-[auto_1fr] gap-x-2.5">
+    <div className="grid grid-cols-[auto_1fr] content-start gap-x-2.5">
       <input
         {...rest}
         id={controlId}

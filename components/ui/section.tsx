@@ -49,7 +49,7 @@ export function Sheet({
     <section aria-labelledby={title === undefined ? undefined : id} className={`min-w-0 border bg-sheet p-5 max-sm:p-4 ${border}`}>
       {title !== undefined ? (
         <div className="mb-3 flex items-baseline justify-between gap-4">
-          <h2 id={id} className="text-sheet font-bold">
+          <h2 id={id} className="text-heading font-bold">
             {title}
           </h2>
           {aside !== undefined ? <div className="text-soft">{aside}</div> : null}

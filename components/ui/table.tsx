@@ -62,8 +62,11 @@ export function HeadCell({
   number = false,
   width,
   sorted,
+  hideLabel = false,
 }: {
-  readonly children?: ReactNode;
+  readonly children: ReactNode;
+  /** A column whose cells say enough to the eye still needs a name for the ear. */
+  readonly hideLabel?: boolean;
   readonly number?: boolean;
   readonly width?: string;
   readonly sorted?: 'ascending' | 'descending';
@@ -76,7 +79,7 @@ export function HeadCell({
       style={width === undefined ? undefined : { width }}
       className={`border-b border-ink px-2.5 py-2 text-small font-semibold whitespace-nowrap text-soft ${number ? 'text-right' : 'text-left'}`}
     >
-      {children}
+      {hideLabel ? <span className="sr-only">{children}</span> : children}
     </th>
   );
 }

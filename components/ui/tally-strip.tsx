@@ -34,9 +34,9 @@ export function TallyStrip({ label, segments }: { readonly label: string; readon
   return (
     <nav aria-label={label} className="mb-3.5">
       <ul className="flex flex-wrap gap-0.5">
-        {shown.map((segment) => (
+        {shown.map(({ key, ...segment }) => (
           // The basis is the words' own width, so a small share is never cut short; what is left over goes by share.
-          <li key={segment.key} className="min-w-max basis-auto" style={{ flexGrow: Math.max(segment.count, 0.01) }}>
+          <li key={key} className="min-w-max basis-auto" style={{ flexGrow: Math.max(segment.count, 0.01) }}>
             <Segment {...segment} />
           </li>
         ))}
@@ -45,7 +45,7 @@ export function TallyStrip({ label, segments }: { readonly label: string; readon
   );
 }
 
-function Segment({ count, word, tone, glyph, href, onPress, current = false }: TallySegment) {
+function Segment({ count, word, tone, glyph, href, onPress, current = false }: Omit<TallySegment, 'key'>) {
   const { look, glyph: own } = TONES[tone];
   const className = `flex min-h-[30px] w-full items-center gap-2 border px-2.5 text-left text-small max-sm:min-h-11 ${look} ${current ? '!border-solid !border-current font-semibold' : ''} ${href !== undefined || onPress !== undefined ? 'hover:!border-current' : ''}`;
   const inside = (

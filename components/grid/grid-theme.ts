@@ -1,0 +1,52 @@
+/** The grid in the look's own tokens: it follows paper and lamp by itself, because every colour is a variable. */
+import { themeQuartz } from 'ag-grid-community';
+
+export const ROW_HEIGHT_PX = 38;
+export const DENSE_ROW_HEIGHT_PX = 32;
+export const PHONE_ROW_HEIGHT_PX = 48;
+
+export const gridTheme = themeQuartz.withParams({
+  accentColor: 'rgb(var(--copper-rgb))',
+  backgroundColor: 'rgb(var(--sheet-rgb))',
+  foregroundColor: 'rgb(var(--ink-rgb))',
+  cellTextColor: 'rgb(var(--ink-rgb))',
+  subtleTextColor: 'rgb(var(--soft-rgb))',
+  chromeBackgroundColor: 'rgb(var(--sheet-rgb))',
+  browserColorScheme: 'inherit',
+  borderColor: 'rgb(var(--rule-rgb))',
+  borderRadius: 0,
+  wrapperBorderRadius: 0,
+  wrapperBorder: { style: 'solid', width: 1, color: 'rgb(var(--rule-rgb))' },
+  rowBorder: { style: 'solid', width: 1, color: 'rgb(var(--hair-rgb))' },
+  headerRowBorder: { style: 'solid', width: 1, color: 'rgb(var(--ink-rgb))' },
+  headerBackgroundColor: 'rgb(var(--sheet-rgb))',
+  headerTextColor: 'rgb(var(--soft-rgb))',
+  headerFontWeight: 600,
+  headerFontSize: 14,
+  headerHeight: 34,
+  headerColumnResizeHandleColor: 'rgb(var(--rule-rgb))',
+  fontFamily: 'var(--font-text)',
+  fontSize: 15,
+  spacing: 6,
+  cellHorizontalPadding: 10,
+  rowHoverColor: 'rgb(var(--hair-rgb) / 0.6)',
+  selectedRowBackgroundColor: 'rgb(var(--copper-wash-rgb))',
+  inputBackgroundColor: 'rgb(var(--sheet-rgb))',
+  inputBorder: { style: 'solid', width: 1, color: 'rgb(var(--edge-rgb))' },
+  inputBorderRadius: 0,
+  inputFocusBorder: { style: 'solid', width: 1, color: 'rgb(var(--ink-rgb))' },
+  buttonBorderRadius: 0,
+  checkboxBorderRadius: 0,
+  checkboxUncheckedBorderColor: 'rgb(var(--edge-rgb))',
+  checkboxCheckedBackgroundColor: 'rgb(var(--copper-rgb))',
+  checkboxCheckedBorderColor: 'rgb(var(--copper-rgb))',
+  checkboxCheckedShapeColor: 'rgb(var(--sheet-rgb))',
+  popupShadow: 'none',
+  menuBorder: { style: 'solid', width: 1, color: 'rgb(var(--ink-rgb))' },
+  menuBackgroundColor: 'rgb(var(--sheet-rgb))',
+  menuTextColor: 'rgb(var(--ink-rgb))',
+  dropdownShadow: 'none',
+  tooltipBackgroundColor: 'rgb(var(--ink-rgb))',
+  tooltipTextColor: 'rgb(var(--paper-rgb))',
+  modalOverlayBackgroundColor: 'rgb(var(--sheet-rgb) / 0.8)',
+});
