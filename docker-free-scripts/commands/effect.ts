@@ -4,14 +4,24 @@
  */
 import { parseArgs } from 'node:util';
 import { computeFigure } from '@/lib/electronics/effects/compute-figure';
-import { FORMULA_IDS, FORMULAS, isFormulaId, type FormulaInput, type InputUnit } from '@/lib/electronics/effects/formulas';
+import {
+  FORMULA_IDS,
+  FORMULAS,
+  isFormulaId,
+  type FormulaInput,
+  type InputUnit,
+} from '@/lib/electronics/effects/formulas';
 import { toleranceSpread } from '@/lib/electronics/effects/tolerance-spread';
 import type { PartKind } from '@/lib/electronics/part-spec';
 import { toNumber } from '@/lib/electronics/quantity';
 import { readQuantity } from '@/lib/electronics/read-quantity';
 
 const TOLERANCE = '-tolerance';
-const KIND_OF_UNIT: Readonly<Partial<Record<InputUnit, PartKind>>> = { ohm: 'resistor', farad: 'capacitor', henry: 'inductor' };
+const KIND_OF_UNIT: Readonly<Partial<Record<InputUnit, PartKind>>> = {
+  ohm: 'resistor',
+  farad: 'capacitor',
+  henry: 'inductor',
+};
 
 function main(): void {
   const given = options();
@@ -24,13 +34,26 @@ function main(): void {
     if (name === 'formula' || name === 'seed') continue;
     const plain = name.endsWith(TOLERANCE) ? name.slice(0, -TOLERANCE.length) : name;
     const input = formula.inputs.find((one) => one.name === plain);
-    if (input === undefined) throw new Error(`the ${formula.title} has no input --${name}; it takes ${formula.inputs.map((one) => `--${one.name}`).join(', ')}`);
+    if (input === undefined)
+      throw new Error(
+        `the ${formula.title} has no input --${name}; it takes ${formula.inputs.map((one) => `--${one.name}`).join(', ')}`,
+      );
     if (plain === name) values[name] = readInput(input, text);
     else tolerances[plain] = plainNumber(name, text.replace('%', ''));
   }
   const figure = computeFigure(formulaId, values);
   const seed = given.get('seed');
-  const spread = Object.keys(tolerances).length === 0 ? {} : { spread: toleranceSpread(formulaId, values, tolerances, seed === undefined ? {} : { seed: plainNumber('seed', seed) }) };
+  const spread =
+    Object.keys(tolerances).length === 0
+      ? {}
+      : {
+          spread: toleranceSpread(
+            formulaId,
+            values,
+            tolerances,
+            seed === undefined ? {} : { seed: plainNumber('seed', seed) },
+          ),
+        };
   console.log(JSON.stringify({ ...figure, inputs: values, ...spread }));
 }
 
@@ -64,7 +87,10 @@ function readInput(input: FormulaInput, text: string): number {
   // Zero and negative values go on to the formula, whose sentence says what is wrong with them.
   if (/^-?\d+(?:\.\d+)?(?:e[+-]?\d+)?$/i.test(text)) return Number(text);
   const read = readQuantity(text, kind);
-  if (read === null || read.doubts.length > 0) throw new Error(`--${input.name} "${text}" cannot be read as a value in ${input.unit}${read?.doubts[0] === undefined ? '' : `: ${read.doubts[0].ask}`}`);
+  if (read === null || read.doubts.length > 0)
+    throw new Error(
+      `--${input.name} "${text}" cannot be read as a value in ${input.unit}${read?.doubts[0] === undefined ? '' : `: ${read.doubts[0].ask}`}`,
+    );
   return toNumber(read.quantity);
 }
 

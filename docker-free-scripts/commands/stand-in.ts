@@ -34,11 +34,13 @@ function main(): void {
     lineTolerancePercent: percent(values.tolerance),
   };
   if (values.matrix !== undefined) {
-    if (!isMatrixGroup(values.matrix)) throw new Error(`--matrix is one of ${MATRIX_GROUPS.join(', ')}, not "${values.matrix}"`);
+    if (!isMatrixGroup(values.matrix))
+      throw new Error(`--matrix is one of ${MATRIX_GROUPS.join(', ')}, not "${values.matrix}"`);
     print(matrixOf(values.matrix, context));
     return;
   }
-  if (values.wanted === undefined || values.offered === undefined) throw new Error('say both: --wanted TEXT --offered TEXT');
+  if (values.wanted === undefined || values.offered === undefined)
+    throw new Error('say both: --wanted TEXT --offered TEXT');
   const kind = oneOf(PART_KINDS, values.kind, '--kind');
   print(assess(read(values.wanted, kind, '--wanted'), read(values.offered, kind, '--offered'), context));
 }

@@ -101,14 +101,15 @@ S2 vdd y 0 cap lifts
 }
 
 describe('RC oscillator with a Schmitt gate', () => {
-  it.each([...THRESHOLDS_4093, ...THRESHOLDS_40106].map((row) => [row.maker, row.supplyVolts, row.upVolts, row.downVolts] as const))(
-    '%s at %d V switching at %d V and %d V, 100 kΩ and 10 nF',
-    (_, vdd, up, down) => {
-      const parts = { r: 100_000, c: 10e-9 };
-      const { value } = computeFigure('schmitt-rc', { vdd, 'vt-up': up, 'vt-down': down, ...parts });
-      expectWithin(value, schmittFrequency(vdd, up, down, parts.r, parts.c, value));
-    },
-  );
+  it.each(
+    [...THRESHOLDS_4093, ...THRESHOLDS_40106].map(
+      (row) => [row.maker, row.supplyVolts, row.upVolts, row.downVolts] as const,
+    ),
+  )('%s at %d V switching at %d V and %d V, 100 kΩ and 10 nF', (_, vdd, up, down) => {
+    const parts = { r: 100_000, c: 10e-9 };
+    const { value } = computeFigure('schmitt-rc', { vdd, 'vt-up': up, 'vt-down': down, ...parts });
+    expectWithin(value, schmittFrequency(vdd, up, down, parts.r, parts.c, value));
+  });
 
   it('22 kΩ and 100 pF at 5 V: 559.6 kHz', () => {
     const { value } = computeFigure('schmitt-rc', { vdd: 5, 'vt-up': 2.9, 'vt-down': 1.9, r: 22_000, c: 100e-12 });
@@ -160,20 +161,29 @@ describe('gains and dividers', () => {
     [10_000, 47_000],
     [100_000, 22_000],
   ])('inverting gain of %d Ω in and %d Ω back', (rin, rf) => {
-    expectWithin(computeFigure('inverting-gain', { rin, rf }).value, operatingPoint(`V1 in 0 1\nR1 in inv ${rin}\nR2 inv out ${rf}\nE1 out 0 0 inv 1e7`));
+    expectWithin(
+      computeFigure('inverting-gain', { rin, rf }).value,
+      operatingPoint(`V1 in 0 1\nR1 in inv ${rin}\nR2 inv out ${rf}\nE1 out 0 0 inv 1e7`),
+    );
   });
 
   it.each([
     [10_000, 47_000],
     [1000, 1000],
   ])('non-inverting gain of %d Ω to ground and %d Ω back', (rg, rf) => {
-    expectWithin(computeFigure('non-inverting-gain', { rg, rf }).value, operatingPoint(`V1 in 0 1\nR1 inv 0 ${rg}\nR2 inv out ${rf}\nE1 out 0 in inv 1e7`));
+    expectWithin(
+      computeFigure('non-inverting-gain', { rg, rf }).value,
+      operatingPoint(`V1 in 0 1\nR1 inv 0 ${rg}\nR2 inv out ${rf}\nE1 out 0 in inv 1e7`),
+    );
   });
 
   it('a divider, free and loaded', () => {
     const divider = { vin: 12, r1: 33_000, r2: 10_000 };
     expectWithin(computeFigure('divider', divider).value, operatingPoint('V1 in 0 12\nR1 in out 33k\nR2 out 0 10k'));
-    expectWithin(computeFigure('divider', { ...divider, rl: 100_000 }).value, operatingPoint('V1 in 0 12\nR1 in out 33k\nR2 out 0 10k\nR3 out 0 100k'));
+    expectWithin(
+      computeFigure('divider', { ...divider, rl: 100_000 }).value,
+      operatingPoint('V1 in 0 12\nR1 in out 33k\nR2 out 0 10k\nR3 out 0 100k'),
+    );
   });
 });
 

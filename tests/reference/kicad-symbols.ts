@@ -37,7 +37,8 @@ function parse(text: string): Node {
 }
 
 const isList = (node: Node | undefined): node is readonly Node[] => Array.isArray(node);
-const named = (node: Node, name: string): readonly (readonly Node[])[] => (isList(node) ? node.filter((child): child is readonly Node[] => isList(child) && child[0] === name) : []);
+const named = (node: Node, name: string): readonly (readonly Node[])[] =>
+  isList(node) ? node.filter((child): child is readonly Node[] => isList(child) && child[0] === name) : [];
 const word = (node: Node | undefined): string => (typeof node === 'string' ? node : '');
 
 /**
@@ -45,14 +46,22 @@ const word = (node: Node | undefined): string => (typeof node === 'string' ? nod
  */
 export function readLibrary(library: string): DatasetSymbol[] {
   const path = `${DIRECTORY}/${library}.kicad_sym`;
-  if (!existsSync(path)) throw new Error(`${path} is missing: install Debian's kicad-symbols (apt-get install --no-install-recommends kicad-symbols)`);
+  if (!existsSync(path))
+    throw new Error(
+      `${path} is missing: install Debian's kicad-symbols (apt-get install --no-install-recommends kicad-symbols)`,
+    );
   const symbols = named(parse(readFileSync(path, 'utf8')), 'symbol');
   const byName = new Map(symbols.map((symbol) => [word(symbol[1]), symbol]));
   return symbols.map((symbol) => {
     // One level of `extends` in this release: the child carries properties, the parent the pins.
     const parent = word(named(symbol, 'extends')[0]?.[1]);
     const footprint = named(symbol, 'property').find((property) => property[1] === 'Footprint');
-    return { library, name: word(symbol[1]), footprint: word(footprint?.[2]), pins: pinsOf(byName.get(parent) ?? symbol) };
+    return {
+      library,
+      name: word(symbol[1]),
+      footprint: word(footprint?.[2]),
+      pins: pinsOf(byName.get(parent) ?? symbol),
+    };
   });
 }
 
@@ -61,6 +70,11 @@ function pinsOf(symbol: readonly Node[]): DatasetPin[] {
     const [, unit = '0', style = '1'] = /_(\d+)_(\d+)$/.exec(word(drawing[1])) ?? [];
     // Style 2 is the De Morgan drawing of the same pins.
     if (style === '2') return [];
-    return named(drawing, 'pin').map((pin) => ({ type: word(pin[1]), name: word(named(pin, 'name')[0]?.[1]), number: word(named(pin, 'number')[0]?.[1]), unit: Number(unit) }));
+    return named(drawing, 'pin').map((pin) => ({
+      type: word(pin[1]),
+      name: word(named(pin, 'name')[0]?.[1]),
+      number: word(named(pin, 'number')[0]?.[1]),
+      unit: Number(unit),
+    }));
   });
 }

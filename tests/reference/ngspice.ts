@@ -20,7 +20,10 @@ export function simulate(circuit: string): ReadonlyMap<string, number> {
     const run = spawnSync(NGSPICE, ['-b', file], { cwd: directory, encoding: 'utf8', timeout: LONGEST_RUN_MS });
     if (run.error !== undefined) throw run.error;
     const results = new Map<string, number>();
-    for (const [, name = '', value = ''] of run.stdout.matchAll(/^\s*(\w+)\s*=\s*([-+]?\d+(?:\.\d+)?(?:e[-+]?\d+)?)/gim)) results.set(name.toLowerCase(), Number(value));
+    for (const [, name = '', value = ''] of run.stdout.matchAll(
+      /^\s*(\w+)\s*=\s*([-+]?\d+(?:\.\d+)?(?:e[-+]?\d+)?)/gim,
+    ))
+      results.set(name.toLowerCase(), Number(value));
     if (results.size === 0) throw new Error(`ngspice measured nothing:\n${run.stdout}\n${run.stderr}`);
     return results;
   } finally {
@@ -30,6 +33,7 @@ export function simulate(circuit: string): ReadonlyMap<string, number> {
 
 export function measured(results: ReadonlyMap<string, number>, name: string): number {
   const value = results.get(name);
-  if (value === undefined) throw new Error(`ngspice did not measure ${name}; it measured ${[...results.keys()].join(', ')}`);
+  if (value === undefined)
+    throw new Error(`ngspice did not measure ${name}; it measured ${[...results.keys()].join(', ')}`);
   return value;
 }

@@ -9,6 +9,7 @@ import type { Family, PinOut } from '@/lib/electronics/families/family';
 import { findFamily } from '@/lib/electronics/families/find-family';
 import { gateUnits } from '@/lib/electronics/stand-in/pin-comparison';
 import { type DatasetPin, type DatasetSymbol, readLibrary } from './kicad-symbols';
+import { WORDS } from './kicad-words';
 
 const LIBRARIES = [
   '4xxx',
@@ -56,90 +57,6 @@ const OTHER_CASE: Readonly<Record<string, string>> = {
   'Analog_Switch/DG419LEUA_Maxim': 'this maker’s low-voltage version has no logic supply pin',
 };
 
-/** The dataset's words in ours: `family@library`, the dataset's name, our name; the first that fits is taken. */
-const WORDS: readonly (readonly [RegExp, RegExp, string])[] = [
-  // Multiplexers: channels X0 …, common X, address A B C D.
-  [/^4052@/, /^A0$/, 'A'],
-  [/^4052@/, /^A1$/, 'B'],
-  [/^74hct?4051@/, /^A$/, 'X'],
-  [/^74hct?4051@/, /^A(\d)$/, 'X$1'],
-  [/^74hct?40(?:51|67)@/, /^S0$/, 'A'],
-  [/^74hct?40(?:51|67)@/, /^S1$/, 'B'],
-  [/^74hct?40(?:51|67)@/, /^S2$/, 'C'],
-  [/^74hct?4067@/, /^S3$/, 'D'],
-  [/^74hct?4067@/, /^COM$/, 'X'],
-  [/^74hct?4067@/, /^I(\d+)$/, 'X$1'],
-  // Switches of the dataset's CD4053B: A, B, C with their select inputs S1, S2, S3; ours X, Y, Z selected by A, B, C.
-  [/^4053@Analog_Switch/, /^A(\d?)$/, 'X$1'],
-  [/^4053@Analog_Switch/, /^B(\d?)$/, 'Y$1'],
-  [/^4053@Analog_Switch/, /^C(\d?)$/, 'Z$1'],
-  [/^4053@Analog_Switch/, /^S1$/, 'A'],
-  [/^4053@Analog_Switch/, /^S2$/, 'B'],
-  [/^4053@Analog_Switch/, /^S3$/, 'C'],
-  // Decoders and counters whose outputs or presets have another letter.
-  [/^4028@/, /^S(\d)$/, 'Q$1'],
-  [/^4021@/, /^P(\d)$/, 'D$1'],
-  [/^4029@/, /^P(\d)$/, 'J$1'],
-  [/^4510@/, /^A(\d)$/, 'P$1'],
-  [/^74.*138@/, /^O(\d)$/, 'Y$1'],
-  [/^74.*138@/, /^A0$/, 'A'],
-  [/^74.*138@/, /^A1$/, 'B'],
-  [/^74.*138@/, /^A2$/, 'C'],
-  [/^45(?:11|43)@/, /^D([A-D])$/, '$1'],
-  [/^4511@/, /^EL$/, 'LE'],
-  [/^4543@/, /^D0$/, 'A'],
-  [/^4543@/, /^D1$/, 'B'],
-  [/^4543@/, /^D2$/, 'C'],
-  [/^4543@/, /^D3$/, 'D'],
-  [/^4543@/, /^LD$/, 'LE'],
-  [/^4543@/, /^BI$/, 'BL'],
-  [/^4068@/, /^J$/, 'Y1'],
-  [/^4068@/, /^K$/, 'K1'],
-  [/^4504@/, /^(?:SELECT|EN)$/, 'SEL'],
-  ...[...'ABCDEF'].flatMap((letter, index): (readonly [RegExp, RegExp, string])[] => [
-    [/^4504@/, new RegExp(`^${letter}IN$`), `A${index + 1}`],
-    [/^4504@/, new RegExp(`^${letter}OUT$`), `Y${index + 1}`],
-  ]),
-  [/^4046@/, /^SFOUT$/, 'SF'],
-  [/^4046@/, /^ZOUT$/, 'ZENER'],
-  [/^4046@/, /^REFIN$/, 'COMPIN'],
-  [/^4046@/, /^FOUT$/, 'VCOOUT'],
-  [/^4046@/, /^C1$/, 'C1A'],
-  [/^4046@/, /^C2$/, 'C1B'],
-  [/^4047@/, /^OSCOUT$/, 'OSC'],
-  [/^4047@/, /^RCCOMMON$/, 'RC'],
-  [/^4047@/, /^([+-])TRIGGER$/, '$1T'],
-  [/^4047@/, /^EXTRESET$/, 'RESET'],
-  [/^4541@/, /^OUTPUTQ$/, 'Q'],
-  [/^4541@/, /^QQSELECT$/, 'SEL'],
-  [/^74.*164@/, /^DS([AB])$/, '$1'],
-  [/^74.*595@/, /^QH'$/, 'QHS'],
-  // Sound chips and the rest.
-  [/^ssm2018@/, /^([+-])IN$/, 'IN$1'],
-  [/^that218/, /^-$/, 'IN'],
-  [/^ad654@/, /^[+]VIN$/, 'VIN'],
-  [/^lf398@/, /^I$/, 'IN'],
-  [/^lf398@/, /^T$/, 'REF'],
-  [/^lf398@/, /^HOLD$/, 'LOGIC'],
-  [/^pt2399@/, /^([A-Z]+\d)-(IN|OUT)$/, '$1$2'],
-  [/^sad1024@/, /^OUTA'$/, 'OUT1X'],
-  [/^sad1024@/, /^OUTB'$/, 'OUT2X'],
-  [/^sad1024@/, /^(IN|OUT)A$/, '$11'],
-  [/^sad1024@/, /^(IN|OUT)B$/, '$12'],
-  [/^sad1024@/, /^0(\d[AB])$/, 'CLK$1'],
-  [/^ssi2144@/, /^SIGIN([+-])$/, 'SIG$1'],
-  [/^ssi2144@/, /^(Q|FREQ)CTRL$/, '$1'],
-  [/^tda1022@/, /^OUTPUT(\d+)$/, 'OUT$1'],
-  [/^tda1022@/, /^INPUT$/, 'IN'],
-  [/^tda1022@/, /^V13-16$/, 'V13'],
-  [/^6n137@/, /^C$/, 'K'],
-  [/^mn310[12]@/, /^VGGOUT$/, 'VGG'],
-  [/^ne567@/, /^OFLTC$/, 'OUTCAP'],
-  [/^ne567@/, /^LPFLTC$/, 'LOOPCAP'],
-  [/^ne567@/, /^INPUT$/, 'IN'],
-  [/^ne567@/, /^OUTPUT$/, 'OUT'],
-];
-
 const plain = (name: string): string =>
   name
     .toUpperCase()
@@ -160,7 +77,8 @@ function formsOf(own: string): Set<string> {
   const name = plain(own);
   const bare = [name, name.replace(/^(Q\d)[12]$/, '$1'), name.replace(/[12]$/, ''), name.replace(/[AB]$/, '')];
   const forms = new Set(bare);
-  for (const [words, ours] of SYNONYMS) if (bare.some((form) => form === ours)) for (const word of words.split(' ')) forms.add(word);
+  for (const [words, ours] of SYNONYMS)
+    if (bare.some((form) => form === ours)) for (const word of words.split(' ')) forms.add(word);
   if (POSITIVE.has(name)) for (const word of POSITIVE) forms.add(word);
   if (NEGATIVE.has(name)) for (const word of NEGATIVE) forms.add(word);
   return forms;
@@ -195,7 +113,12 @@ function compareGates(ours: PinOut, symbol: DatasetSymbol): string | null {
   const isOutput = (pin: DatasetPin): boolean => ['output', 'open_collector', 'tri_state'].includes(pin.type);
   const theirs = units
     .map((pins) => {
-      const numbers = (output: boolean): string => pins.filter((pin) => isOutput(pin) === output).map((pin) => Number(pin.number)).sort((a, b) => a - b).join(',');
+      const numbers = (output: boolean): string =>
+        pins
+          .filter((pin) => isOutput(pin) === output)
+          .map((pin) => Number(pin.number))
+          .sort((a, b) => a - b)
+          .join(',');
       return `${numbers(false)}>${numbers(true)}`;
     })
     .sort()
@@ -222,7 +145,15 @@ function compareSupplies(ours: PinOut, symbol: DatasetSymbol): string | null {
 /** Amplifiers, comparators, OTAs: + and − inputs and the output of each unit, and the supplies. */
 function compareAmplifiers(ours: PinOut, symbol: DatasetSymbol): string | null {
   const theirs = byUnit(symbol.pins)
-    .map((pins) => pins.flatMap((pin) => (pin.name === '+' || pin.name === '-' ? [`${pin.name}${pin.number}`] : pin.type === 'output' || pin.type === 'open_collector' ? [`=${pin.number}`] : [])))
+    .map((pins) =>
+      pins.flatMap((pin) =>
+        pin.name === '+' || pin.name === '-'
+          ? [`${pin.name}${pin.number}`]
+          : pin.type === 'output' || pin.type === 'open_collector'
+            ? [`=${pin.number}`]
+            : [],
+      ),
+    )
     .filter((unit) => unit.length > 0);
   const own = new Map<string, string[]>();
   ours.pins.forEach((name, index) => {
@@ -231,7 +162,11 @@ function compareAmplifiers(ours: PinOut, symbol: DatasetSymbol): string | null {
     const unit = form[1] === 'BUFOUT' ? `buffer ${form[2] ?? ''}` : (form[2] ?? '');
     own.set(unit, [...(own.get(unit) ?? []), `${form[1] === 'IN' ? (form[3] ?? '') : '='}${index + 1}`]);
   });
-  const say = (units: readonly (readonly string[])[]): string => units.map((unit) => [...unit].sort().join(' ')).sort().join(' | ');
+  const say = (units: readonly (readonly string[])[]): string =>
+    units
+      .map((unit) => [...unit].sort().join(' '))
+      .sort()
+      .join(' | ');
   if (say(theirs) !== say([...own.values()])) return `${say(theirs)} in the dataset, ${say([...own.values()])} here`;
   return compareSupplies(ours, symbol);
 }
@@ -244,7 +179,8 @@ function compareSwitches(ours: PinOut, symbol: DatasetSymbol): string | null {
     const unit = own[0]?.slice(1) ?? '';
     if (own.join(' ') !== `C${unit} Y${unit} Z${unit}`) return `one switch of the dataset joins ${own.join(' ')} here`;
     const control = pins.find((pin) => pin.type === 'input');
-    if (control !== undefined && ours.pins[Number(control.number) - 1] !== `C${unit}`) return `pin ${control.number} closes the switch in the dataset`;
+    if (control !== undefined && ours.pins[Number(control.number) - 1] !== `C${unit}`)
+      return `pin ${control.number} closes the switch in the dataset`;
   }
   return compareSupplies(ours, symbol);
 }
@@ -259,7 +195,10 @@ function compareNames(family: Family, ours: PinOut, symbol: DatasetSymbol): stri
       // Amplifier outputs and optocoupler leads go unnamed in the dataset; pins of logic never do in this comparison.
       if (pin.name === '~' && (family.group !== 'logic' || own === 'NC')) return [];
       if ((own === 'NC' && pin.type === 'no_connect') || /^(?:PAD|EP)$/.test(pin.name)) return [];
-      const theirs = translated(family, symbol, pin.name).replace(COUNTS_FROM_ZERO, (_, letter: string, number: string) => `${letter}${Number(number) + shift}`);
+      const theirs = translated(family, symbol, pin.name).replace(
+        COUNTS_FROM_ZERO,
+        (_, letter: string, number: string) => `${letter}${Number(number) + shift}`,
+      );
       return formsOf(own).has(theirs) ? [] : [`${pin.number}: ${pin.name} ≠ ${own}`];
     });
   const differ = [0, 1].map(differing).sort((a, b) => a.length - b.length)[0] ?? [];
@@ -269,7 +208,17 @@ function compareNames(family: Family, ours: PinOut, symbol: DatasetSymbol): stri
 /** In dual parts all pins of our first unit must lie in one unit of the dataset. */
 function unitsApart(ours: PinOut, symbol: DatasetSymbol): string | null {
   for (const suffix of ['1', '2']) {
-    const units = new Set(symbol.pins.filter((pin) => pin.unit > 0 && new RegExp(`^/?(?:CLK|D|S|R|J|K|EN|CX|RXCX|[+]T|-T)${suffix}$`).test(ours.pins[Number(pin.number) - 1] ?? '')).map((pin) => pin.unit));
+    const units = new Set(
+      symbol.pins
+        .filter(
+          (pin) =>
+            pin.unit > 0 &&
+            new RegExp(`^/?(?:CLK|D|S|R|J|K|EN|CX|RXCX|[+]T|-T)${suffix}$`).test(
+              ours.pins[Number(pin.number) - 1] ?? '',
+            ),
+        )
+        .map((pin) => pin.unit),
+    );
     const drawnInUnits = new Set(symbol.pins.map((pin) => pin.unit)).size > 2;
     if (drawnInUnits && units.size > 1) return `pins of unit ${suffix} lie in several units of the dataset`;
   }
@@ -280,7 +229,8 @@ function compare(family: Family, symbol: DatasetSymbol): string | null {
   const ours = family.pinOut?.value;
   if (ours === undefined) return 'no pins here';
   if (gateUnits(ours) !== '') return compareGates(ours, symbol);
-  if (family.group === 'op-amp' || family.group === 'comparator' || family.group === 'ota') return compareAmplifiers(ours, symbol);
+  if (family.group === 'op-amp' || family.group === 'comparator' || family.group === 'ota')
+    return compareAmplifiers(ours, symbol);
   if (ours.pins.includes('Z2') && ours.pins.includes('C2')) return compareSwitches(ours, symbol);
   return compareNames(family, ours, symbol);
 }
@@ -335,12 +285,32 @@ describe('pin-outs agree with the open dataset', () => {
     expect(covered.size).toBeGreaterThanOrEqual(FAMILIES_COVERED);
   });
 
-  it.each(['4093', '4011', '74hc00', '74hc14', '4066', '4051', 'tl072', 'tl074', 'lm324', 'lm13700', 'lm311', 'ne555', 'bc547', '2n3904', '2sc1815', 'bf245a', '7805', '7905', '78l05', 'lm317', '1n4148', 'as3340'])(
-    'the %s among them',
-    (id) => {
-      expect(compared.some(({ familyId, difference }) => familyId === id && difference === null)).toBe(true);
-    },
-  );
+  it.each([
+    '4093',
+    '4011',
+    '74hc00',
+    '74hc14',
+    '4066',
+    '4051',
+    'tl072',
+    'tl074',
+    'lm324',
+    'lm13700',
+    'lm311',
+    'ne555',
+    'bc547',
+    '2n3904',
+    '2sc1815',
+    'bf245a',
+    '7805',
+    '7905',
+    '78l05',
+    'lm317',
+    '1n4148',
+    'as3340',
+  ])('the %s among them', (id) => {
+    expect(compared.some(({ familyId, difference }) => familyId === id && difference === null)).toBe(true);
+  });
 
   it.each<readonly [string, string, readonly [number, string]]>([
     ['2n3904', 'Transistor_BJT/2N3904', [1, 'C']],
@@ -352,8 +322,11 @@ describe('pin-outs agree with the open dataset', () => {
   ])('and a slip in the table of the %s would be seen', (id, where, [pin, wrongName]) => {
     const family = findFamily(id);
     const symbol = readLibrary(where.split('/')[0] ?? '').find(({ name }) => where.endsWith(`/${name}`));
-    if (family?.pinOut === null || family === null || symbol === undefined) throw new Error(`${where} is not to be found`);
+    if (family?.pinOut === null || family === null || symbol === undefined)
+      throw new Error(`${where} is not to be found`);
     const pins = family.pinOut.value.pins.map((name, index) => (index === pin - 1 ? wrongName : name));
-    expect(compare({ ...family, pinOut: { ...family.pinOut, value: { ...family.pinOut.value, pins } } }, symbol)).not.toBeNull();
+    expect(
+      compare({ ...family, pinOut: { ...family.pinOut, value: { ...family.pinOut.value, pins } } }, symbol),
+    ).not.toBeNull();
   });
 });

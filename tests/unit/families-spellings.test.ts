@@ -8,7 +8,8 @@ import { findFamily, listFamilies } from '@/lib/electronics/families/find-family
 import { SPELLINGS } from '@/lib/electronics/families/spellings';
 
 const READS: Readonly<Record<string, string>> = {
-  '4093': 'CD4093BE|HEF4093BP|HCF4093|MC14093BCP|4093|CD4093BCN|HCF4093BEY|HEF4093BT,653|CD4093BM96|TC4093BP|HEF4093BT|MC14093BDR2G|CD4093|cd4093be|CD 4093 BE|HCF4093BM1|NLV14093BDG|4093B',
+  '4093':
+    'CD4093BE|HEF4093BP|HCF4093|MC14093BCP|4093|CD4093BCN|HCF4093BEY|HEF4093BT,653|CD4093BM96|TC4093BP|HEF4093BT|MC14093BDR2G|CD4093|cd4093be|CD 4093 BE|HCF4093BM1|NLV14093BDG|4093B',
   '4011': 'CD4011BE|HEF4011BP|MC14011BCP|4011|CD4011UBE|HCF4011BE|4011B',
   '4001': 'CD4001BE|MC14001BCP|4001',
   '4069': 'CD4069UBE|MC14069UBCP|HEF4069UBP|4069UB|CD4069UBM',
@@ -161,12 +162,33 @@ describe('a part number of any maker’s usual spelling, grade and package reads
 });
 
 describe('a value is no part number', () => {
-  const values = '4700 100n 510 1k 4k7 47k 2n2 104 470n 1000 2200 3300 4u7 10k 4.7k 330p 4700p 4016k 1M5 4R7 R47 .1 0.1uF 100 324 317 393 339 311 10 220R 22p 1N4 2N2 1N5 47 82 33 4N7 6N8 100V 15V 1% 4,7k 22µ 10uF 1H 600Ω 16MHz'.split(' ');
+  const values =
+    '4700 100n 510 1k 4k7 47k 2n2 104 470n 1000 2200 3300 4u7 10k 4.7k 330p 4700p 4016k 1M5 4R7 R47 .1 0.1uF 100 324 317 393 339 311 10 220R 22p 1N4 2N2 1N5 47 82 33 4N7 6N8 100V 15V 1% 4,7k 22µ 10uF 1H 600Ω 16MHz'.split(
+      ' ',
+    );
   it.each(values)('%s', (text) => {
     expect(familyOf(text)).toBeNull();
   });
 
-  it.each(['', '   ', '…', 'resistor', 'DNP', 'n/a', 'A'.repeat(5_000), '💡', 'LM', 'TL07', 'TL0720', '74HC', 'CD4999BE', 'BC', '1N', '2N390', '1N41480'])('nor is %j', (text) => {
+  it.each([
+    '',
+    '   ',
+    '…',
+    'resistor',
+    'DNP',
+    'n/a',
+    'A'.repeat(5_000),
+    '💡',
+    'LM',
+    'TL07',
+    'TL0720',
+    '74HC',
+    'CD4999BE',
+    'BC',
+    '1N',
+    '2N390',
+    '1N41480',
+  ])('nor is %j', (text) => {
     expect(familyOf(text)).toBeNull();
   });
 });

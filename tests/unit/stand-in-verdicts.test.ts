@@ -8,17 +8,50 @@ import { listFamilies } from '@/lib/electronics/families/find-family';
 import type { PartKind } from '@/lib/electronics/part-spec';
 import { readPartText } from '@/lib/electronics/read-part-text';
 import { assess } from '@/lib/electronics/stand-in/assess';
-import { type Assessment, type Outcome, type StandInContext, USES, type Use, type Verdict, verdictOf, effect, fail, pass, remark, unknown } from '@/lib/electronics/stand-in/check';
+import {
+  type Assessment,
+  type Outcome,
+  type StandInContext,
+  USES,
+  type Use,
+  type Verdict,
+  verdictOf,
+  effect,
+  fail,
+  pass,
+  remark,
+  unknown,
+} from '@/lib/electronics/stand-in/check';
 import { matrixOf, specOfFamily } from '@/lib/electronics/stand-in/matrix';
 import { readRails } from '@/lib/electronics/stand-in/read-rails';
 
-function judge(wanted: string, offered: string, rails: string, use: Use | null, kind: PartKind | null = null, more: Partial<StandInContext> = {}): Assessment {
-  return assess(readPartText(wanted, { kind }), readPartText(offered, { kind }), { rails: rails === '' ? [] : readRails(rails), use, ...more });
+function judge(
+  wanted: string,
+  offered: string,
+  rails: string,
+  use: Use | null,
+  kind: PartKind | null = null,
+  more: Partial<StandInContext> = {},
+): Assessment {
+  return assess(readPartText(wanted, { kind }), readPartText(offered, { kind }), {
+    rails: rails === '' ? [] : readRails(rails),
+    use,
+    ...more,
+  });
 }
 
-const outcome = (assessment: Assessment, check: string): Outcome | null => assessment.checks.find((one) => one.check === check)?.outcome ?? null;
+const outcome = (assessment: Assessment, check: string): Outcome | null =>
+  assessment.checks.find((one) => one.check === check)?.outcome ?? null;
 
-type Case = readonly [wanted: string, offered: string, rails: string, use: Use | null, verdict: Verdict, check: string, outcome: Outcome];
+type Case = readonly [
+  wanted: string,
+  offered: string,
+  rails: string,
+  use: Use | null,
+  verdict: Verdict,
+  check: string,
+  outcome: Outcome,
+];
 
 describe('logic', () => {
   it.each<Case>([
@@ -58,7 +91,9 @@ describe('logic', () => {
 
   it('says by how much other Schmitt thresholds shift an oscillator (ST 4093 and Philips 40106 sheets, 395 cents)', () => {
     // Units differ, so only the sentence is looked at.
-    const why = judge('CD4093BE', 'CD40106BE', '+5', 'timing').checks.find(({ check }) => check === 'schmitt-inputs')?.why;
+    const why = judge('CD4093BE', 'CD40106BE', '+5', 'timing').checks.find(
+      ({ check }) => check === 'schmitt-inputs',
+    )?.why;
     expect(why).toContain('395 cents higher');
   });
 });
@@ -180,7 +215,16 @@ describe('transistors and diodes', () => {
   });
 });
 
-type PassiveCase = readonly [wanted: string, offered: string, rails: string, use: Use | null, kind: PartKind, verdict: Verdict, check: string, outcome: Outcome];
+type PassiveCase = readonly [
+  wanted: string,
+  offered: string,
+  rails: string,
+  use: Use | null,
+  kind: PartKind,
+  verdict: Verdict,
+  check: string,
+  outcome: Outcome,
+];
 
 describe('resistors, capacitors, potentiometers', () => {
   it.each<PassiveCase>([
@@ -256,10 +300,28 @@ describe('what holds of every assessment', () => {
   });
   const family = fc.constantFrom(...families.map((one) => one.id));
   const specs = new Map(families.map((one) => [one.id, specOfFamily(one)]));
-  const texts = ['10k', '10k 1%', '100n X7R 50V', '22p C0G 5%', '10u 25V', 'A100K', 'TL072CP', 'nonsense', 'CD4093BE', 'F1A', ''];
+  const texts = [
+    '10k',
+    '10k 1%',
+    '100n X7R 50V',
+    '22p C0G 5%',
+    '10u 25V',
+    'A100K',
+    'TL072CP',
+    'nonsense',
+    'CD4093BE',
+    'F1A',
+    '',
+  ];
 
   it.each(texts)('%j stands in for itself as the same part', (text) => {
-    fc.assert(fc.property(context, (given) => assess(readPartText(text, { kind: null }), readPartText(text, { kind: null }), given).verdict === 'same'));
+    fc.assert(
+      fc.property(
+        context,
+        (given) =>
+          assess(readPartText(text, { kind: null }), readPartText(text, { kind: null }), given).verdict === 'same',
+      ),
+    );
   });
 
   it('a family stands in for itself as the same part, in any circuit', () => {
@@ -277,7 +339,11 @@ describe('what holds of every assessment', () => {
         const [wanted, offered] = [specs.get(a), specs.get(b)];
         if (wanted === undefined || offered === undefined || a === b) return true;
         const { verdict, checks } = assess(wanted, offered, given);
-        return checks.length > 0 && verdict === verdictOf(checks) && checks.every(({ why }) => /^[A-ZÄÖÜ“0-9−+±].*[.?]$/.test(why) && !/undefined|NaN|null/.test(why));
+        return (
+          checks.length > 0 &&
+          verdict === verdictOf(checks) &&
+          checks.every(({ why }) => /^[A-ZÄÖÜ“0-9−+±].*[.?]$/.test(why) && !/undefined|NaN|null/.test(why))
+        );
       }),
       { numRuns: 3_000 },
     );
@@ -292,7 +358,17 @@ describe('what holds of every assessment', () => {
       ['100n', '100n C0G'],
       ['100n X7R', '100n X7R 100V'],
     ];
-    const offers = ['10k', '12k', '10k 5%', '10k 1/4W', '10u 16V electrolytic', '10u 6.3V', '100n Y5V', '100n X7R 50V', '100n C0G'];
+    const offers = [
+      '10k',
+      '12k',
+      '10k 5%',
+      '10k 1/4W',
+      '10u 16V electrolytic',
+      '10u 6.3V',
+      '100n Y5V',
+      '100n X7R 50V',
+      '100n C0G',
+    ];
     for (const [loose, strict] of stricter) {
       const kind: PartKind = loose.includes('k') ? 'resistor' : 'capacitor';
       for (const offered of offers) {

@@ -43,18 +43,30 @@ export function inputsOf(formula: Formula, values: FigureValues): Inputs {
   const known = new Map<string, number>();
   for (const { name, unit, says, fallback } of formula.inputs) {
     const value = values[name] ?? fallback;
-    if (value === undefined) throw new FigureError('missing-input', name, `The ${formula.title} needs ${says} (${name}).`);
-    if (!Number.isFinite(value)) throw new FigureError('not-a-number', name, `The value of ${says} (${name}) is no number.`);
+    if (value === undefined)
+      throw new FigureError('missing-input', name, `The ${formula.title} needs ${says} (${name}).`);
+    if (!Number.isFinite(value))
+      throw new FigureError('not-a-number', name, `The value of ${says} (${name}) is no number.`);
     const lowest = unit === 'celsius' ? ABSOLUTE_ZERO_CELSIUS : 0;
-    if (value <= lowest) throw new FigureError('not-positive', name, `The value of ${says} (${name}) must be more than ${lowest}; it is ${value}.`);
+    if (value <= lowest)
+      throw new FigureError(
+        'not-positive',
+        name,
+        `The value of ${says} (${name}) must be more than ${lowest}; it is ${value}.`,
+      );
     known.set(name, value);
   }
   const stray = Object.keys(values).find((name) => !known.has(name));
   if (stray !== undefined) {
-    throw new FigureError('unknown-input', stray, `The ${formula.title} has no input "${stray}"; it takes ${formula.inputs.map(({ name }) => name).join(', ')}.`);
+    throw new FigureError(
+      'unknown-input',
+      stray,
+      `The ${formula.title} has no input "${stray}"; it takes ${formula.inputs.map(({ name }) => name).join(', ')}.`,
+    );
   }
   const input: Inputs = (name) => known.get(name) ?? Number.NaN;
   const contradiction = formula.refuse?.(input) ?? null;
-  if (contradiction !== null) throw new FigureError('contradiction', null, `The ${formula.title} cannot be computed: ${contradiction}.`);
+  if (contradiction !== null)
+    throw new FigureError('contradiction', null, `The ${formula.title} cannot be computed: ${contradiction}.`);
   return input;
 }

@@ -17,5 +17,10 @@ export function effectOf(before: Figure, after: Figure): Effect {
     throw new FigureError('contradiction', null, `A ${before.kind} cannot be compared with a ${after.kind}.`);
   }
   const ratio = after.value / before.value;
-  return { before: before.value, after: after.value, percent: (ratio - 1) * 100, cents: before.kind === 'frequency' ? 1200 * Math.log2(ratio) : null };
+  return {
+    before: before.value,
+    after: after.value,
+    percent: (ratio - 1) * 100,
+    cents: before.kind === 'frequency' ? 1200 * Math.log2(ratio) : null,
+  };
 }

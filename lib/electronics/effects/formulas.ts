@@ -61,8 +61,24 @@ const VOLTS_PER_KELVIN = 1.380649e-23 / 1.602176634e-19;
 const NO_LOAD_OHMS = 1e18;
 
 export const FORMULAS: Readonly<Record<FormulaId, Formula>> = {
-  'rc-low-pass': { id: 'rc-low-pass', title: 'RC low-pass corner', kind: 'frequency', unit: 'hertz', written: 'f = 1 / (2π·R·C)', inputs: [R, C], compute: corner },
-  'rc-high-pass': { id: 'rc-high-pass', title: 'RC high-pass corner', kind: 'frequency', unit: 'hertz', written: 'f = 1 / (2π·R·C)', inputs: [R, C], compute: corner },
+  'rc-low-pass': {
+    id: 'rc-low-pass',
+    title: 'RC low-pass corner',
+    kind: 'frequency',
+    unit: 'hertz',
+    written: 'f = 1 / (2π·R·C)',
+    inputs: [R, C],
+    compute: corner,
+  },
+  'rc-high-pass': {
+    id: 'rc-high-pass',
+    title: 'RC high-pass corner',
+    kind: 'frequency',
+    unit: 'hertz',
+    written: 'f = 1 / (2π·R·C)',
+    inputs: [R, C],
+    compute: corner,
+  },
   'lc-resonance': {
     id: 'lc-resonance',
     title: 'LC resonance',
@@ -79,7 +95,8 @@ export const FORMULAS: Readonly<Record<FormulaId, Formula>> = {
     unit: 'hertz',
     written: 'f = 1 / (2π·√(L·C1·C2/(C1+C2)))',
     inputs: [L, farads('c1', 'the first capacitor'), farads('c2', 'the second capacitor')],
-    compute: (input) => 1 / (2 * Math.PI * Math.sqrt((input('l') * input('c1') * input('c2')) / (input('c1') + input('c2')))),
+    compute: (input) =>
+      1 / (2 * Math.PI * Math.sqrt((input('l') * input('c1') * input('c2')) / (input('c1') + input('c2')))),
   },
   'schmitt-rc': {
     id: 'schmitt-rc',
@@ -147,14 +164,27 @@ export const FORMULAS: Readonly<Record<FormulaId, Formula>> = {
       return (input('vin') * lower) / (input('r1') + lower);
     },
   },
-  'time-constant': { id: 'time-constant', title: 'RC time constant', kind: 'time', unit: 'second', written: 'τ = R·C', inputs: [R, C], compute: (input) => input('r') * input('c') },
+  'time-constant': {
+    id: 'time-constant',
+    title: 'RC time constant',
+    kind: 'time',
+    unit: 'second',
+    written: 'τ = R·C',
+    inputs: [R, C],
+    compute: (input) => input('r') * input('c'),
+  },
   'state-variable-centre': {
     id: 'state-variable-centre',
     title: 'state-variable filter centre',
     kind: 'frequency',
     unit: 'hertz',
     written: 'f = 1 / (2π·√(R1·C1·R2·C2)), equal integrators: 1 / (2π·R·C)',
-    inputs: [ohms('r1', 'the first integrator’s resistor'), farads('c1', 'the first integrator’s capacitor'), ohms('r2', 'the second integrator’s resistor'), farads('c2', 'the second integrator’s capacitor')],
+    inputs: [
+      ohms('r1', 'the first integrator’s resistor'),
+      farads('c1', 'the first integrator’s capacitor'),
+      ohms('r2', 'the second integrator’s resistor'),
+      farads('c2', 'the second integrator’s capacitor'),
+    ],
     compute: (input) => 1 / (2 * Math.PI * Math.sqrt(input('r1') * input('c1') * input('r2') * input('c2'))),
   },
   'volt-per-octave': {
@@ -163,8 +193,13 @@ export const FORMULAS: Readonly<Record<FormulaId, Formula>> = {
     kind: 'voltage',
     unit: 'volt-per-octave',
     written: 'V/octave = (kT/q)·ln 2·(RIN + RB) / RB',
-    inputs: [ohms('rin', 'the input resistor'), ohms('rb', 'the resistor from base to ground'), { name: 'temperature', unit: 'celsius', says: 'the transistor pair’s temperature', fallback: 25 }],
-    compute: (input) => VOLTS_PER_KELVIN * (input('temperature') + 273.15) * Math.LN2 * ((input('rin') + input('rb')) / input('rb')),
+    inputs: [
+      ohms('rin', 'the input resistor'),
+      ohms('rb', 'the resistor from base to ground'),
+      { name: 'temperature', unit: 'celsius', says: 'the transistor pair’s temperature', fallback: 25 },
+    ],
+    compute: (input) =>
+      VOLTS_PER_KELVIN * (input('temperature') + 273.15) * Math.LN2 * ((input('rin') + input('rb')) / input('rb')),
   },
 };
 

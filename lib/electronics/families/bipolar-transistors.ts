@@ -113,8 +113,14 @@ bcv62 | PNP | C2 C1 E1 E2 p | SOT-143 | 30m | 0.1m | 110-800m | P | A=125-250 B=
 `;
 
 const K = 'KiCad 6 symbol or a read datasheet, with makers’ sheets recalled';
-const DRAWING = practice('Check the maker’s drawing or measure: sheets of one number have been seen with the leads reversed.', 'two contradicting datasheets of the BC547');
-const HOUSE_PREFIX = practice('The P2N2222A has collector and emitter the other way round from the PN2222A.', 'onsemi P2N2222A datasheet');
+const DRAWING = practice(
+  'Check the maker’s drawing or measure: sheets of one number have been seen with the leads reversed.',
+  'two contradicting datasheets of the BC547',
+);
+const HOUSE_PREFIX = practice(
+  'The P2N2222A has collector and emitter the other way round from the PN2222A.',
+  'onsemi P2N2222A datasheet',
+);
 
 function range(text: string): readonly [number, number] {
   const [low = '', high = ''] = text.split('-');
@@ -122,11 +128,24 @@ function range(text: string): readonly [number, number] {
 }
 
 function readRow(line: string): BipolarFamily {
-  const [id = '', polarity = '', leads = '', packageName = '', volts = '-', amperes = '-', gain = '', flags = '', groups = ''] = line.split('|').map((cell) => cell.trim());
-  if (polarity !== 'NPN' && polarity !== 'PNP') throw new RangeError(`The transistor table holds the polarity "${polarity}".`);
+  const [
+    id = '',
+    polarity = '',
+    leads = '',
+    packageName = '',
+    volts = '-',
+    amperes = '-',
+    gain = '',
+    flags = '',
+    groups = '',
+  ] = line.split('|').map((cell) => cell.trim());
+  if (polarity !== 'NPN' && polarity !== 'PNP')
+    throw new RangeError(`The transistor table holds the polarity "${polarity}".`);
   const basis = leads.slice(-1);
   const order = pinOut(leads.slice(0, -2), packageName);
-  const gainFact: Fact<readonly [number, number]> = gain.endsWith('m') ? recalled(range(gain.slice(0, -1))) : practice(range(gain.slice(0, -1)), K);
+  const gainFact: Fact<readonly [number, number]> = gain.endsWith('m')
+    ? recalled(range(gain.slice(0, -1)))
+    : practice(range(gain.slice(0, -1)), K);
   const [darlington, pair, lowNoise] = [flags.includes('D'), flags.includes('P'), flags.includes('L')];
   return {
     id,

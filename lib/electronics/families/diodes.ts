@@ -64,7 +64,14 @@ bav45 | low-leakage p | 20m | 0.05m | 2 | TO-18
 `;
 
 const K = 'KiCad 6 description, read, with datasheets recalled';
-const TYPES: readonly DiodeType[] = ['switching', 'rectifier', 'schottky-small', 'schottky-power', 'germanium', 'low-leakage'];
+const TYPES: readonly DiodeType[] = [
+  'switching',
+  'rectifier',
+  'schottky-small',
+  'schottky-power',
+  'germanium',
+  'low-leakage',
+];
 const TITLES: Readonly<Record<DiodeType, string>> = {
   switching: 'switching diode',
   rectifier: 'rectifier',
@@ -74,10 +81,14 @@ const TITLES: Readonly<Record<DiodeType, string>> = {
   'low-leakage': 'low-leakage diode',
 };
 const ORDERS: Readonly<Record<string, string>> = { '2': 'K A', sot: 'A NC K', bav99: 'K A KA', bav70: 'A1 A2 K' };
-const CONTINUOUS: Readonly<Record<string, readonly Fact<string>[]>> = { '1n4148': [recalled('100 V is the repetitive peak; continuous reverse voltage is 75 V.')] };
+const CONTINUOUS: Readonly<Record<string, readonly Fact<string>[]>> = {
+  '1n4148': [recalled('100 V is the repetitive peak; continuous reverse voltage is 75 V.')],
+};
 
 function readRow(line: string): DiodeFamily {
-  const [id = '', typeCell = '', reverse = '-', forward = '-', leads = '-', packageName = ''] = line.split('|').map((cell) => cell.trim());
+  const [id = '', typeCell = '', reverse = '-', forward = '-', leads = '-', packageName = ''] = line
+    .split('|')
+    .map((cell) => cell.trim());
   const diodeType = TYPES.find((type) => typeCell === `${type} p`);
   if (diodeType === undefined) throw new RangeError(`The diode table holds the type "${typeCell}".`);
   const order = ORDERS[leads];

@@ -23,14 +23,19 @@ export function noted(text: string, source: string): Fact<number> | null {
   if (text === '-') return null;
   const basis = BASIS_LETTERS[text.slice(-1)];
   const value = Number(text.slice(0, -1));
-  if (basis === undefined || !Number.isFinite(value)) throw new RangeError(`A table holds "${text}" where a number with its basis belongs.`);
+  if (basis === undefined || !Number.isFinite(value))
+    throw new RangeError(`A table holds "${text}" where a number with its basis belongs.`);
   return { value, basis, source: basis === 'memory' ? 'from memory, to be confirmed in a datasheet' : source };
 }
 
 /** Reads `3p 18d 20d`: minimum, maximum, absolute maximum in volts. */
 export function supplyOf(text: string, source: string): Supply {
   const [minimum = '-', maximum = '-', absolute = '-'] = text.split(' ');
-  return { minimumVolts: noted(minimum, source), maximumVolts: noted(maximum, source), absoluteVolts: noted(absolute, source) };
+  return {
+    minimumVolts: noted(minimum, source),
+    maximumVolts: noted(maximum, source),
+    absoluteVolts: noted(absolute, source),
+  };
 }
 
 /** Pin names in order, parted by spaces. */
@@ -43,7 +48,12 @@ const INPUT_NAMES = 'ABCDEFGH';
 /**
  * Reads `1,2>3 5,6>4` as gates (inputs > output, pin numbers) into a pin-out of `total` pins.
  */
-export function gatePins(total: number, gates: string, positive: readonly [string, number], negative: readonly [string, number]): PinOut {
+export function gatePins(
+  total: number,
+  gates: string,
+  positive: readonly [string, number],
+  negative: readonly [string, number],
+): PinOut {
   const pins = Array.from({ length: total }, () => 'NC');
   gates.split(' ').forEach((gate, index) => {
     const [inputs = '', output = ''] = gate.split('>');

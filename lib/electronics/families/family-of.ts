@@ -4,7 +4,17 @@
  * because callers ask about texts they already take for part numbers.
  */
 import type { PartKind } from '../part-spec';
-import { LADDER_78, LDO_VOLTS, LOGIC_4000, LOGIC_74, SPELLINGS, ZENER_1N47, ZENER_1N52, ZENER_EUROPEAN, ZENER_SERIES } from './spellings';
+import {
+  LADDER_78,
+  LDO_VOLTS,
+  LOGIC_4000,
+  LOGIC_74,
+  SPELLINGS,
+  ZENER_1N47,
+  ZENER_1N52,
+  ZENER_EUROPEAN,
+  ZENER_SERIES,
+} from './spellings';
 
 export interface FamilyName {
   readonly familyId: string;
@@ -28,7 +38,9 @@ function candidatesIn(text: string): string[] {
   if (plain === '' || plain.length > 80 || LOOKS_LIKE_VALUE.test(plain)) return [];
   const tokens = plain.split(/[\s;()[\]"']+/).filter((token) => token !== '');
   const [first = '', second = '', third = ''] = tokens;
-  return [...new Set([tokens.length <= 3 ? first + second + third : '', first + second, first])].filter((token) => token !== '');
+  return [...new Set([tokens.length <= 3 ? first + second + third : '', first + second, first])].filter(
+    (token) => token !== '',
+  );
 }
 
 /** Values as people write them: a plain number passes through to the number tables, everything with a unit stops here. */
@@ -37,12 +49,18 @@ const BARE_NUMBERS = new Set(['555', '556', '741']);
 
 function readCompact(compact: string): FamilyName | null {
   return (
-    readLogic4000(compact) ?? readLogic74(compact) ?? readFixedRegulator(compact) ?? readVoltageInNumber(compact) ?? readZener(compact) ?? readHead(compact)
+    readLogic4000(compact) ??
+    readLogic74(compact) ??
+    readFixedRegulator(compact) ??
+    readVoltageInNumber(compact) ??
+    readZener(compact) ??
+    readHead(compact)
   );
 }
 
 // Makers' prefixes of 4000-series logic. MC1 and NLV1 go before four digits (MC14093); 40106 is MC14106 there.
-const LOGIC_4000_FORM = /^(CD|HEF|HCF|HCC|HBF|MC1|NLV1|HD1|TC|BU|GD|KK|MSM|UPD|M|F|SCL|CM|V|XD|NTE|MMC|CA|SN)?(40[1-9]\d{2}|4\d{3})(.*)$/;
+const LOGIC_4000_FORM =
+  /^(CD|HEF|HCF|HCC|HBF|MC1|NLV1|HD1|TC|BU|GD|KK|MSM|UPD|M|F|SCL|CM|V|XD|NTE|MMC|CA|SN)?(40[1-9]\d{2}|4\d{3})(.*)$/;
 const LOGIC_SUFFIX = /^(?:-?(?:U?B|A)[A-Z]{0,4}(?:\d{1,3}[A-Z0-9]{0,3})?|[NEDPT]|)(?:[-,/].*)?$/;
 const BARE_SUFFIX = /^(?:U?B[A-Z]{0,3}|[NED]|)$/;
 
@@ -52,11 +70,13 @@ function readLogic4000(compact: string): FamilyName | null {
   if (form === null) return null;
   const [, prefix, number = '', suffix = ''] = form;
   if (!LOGIC_4000.includes(number)) return null;
-  const suffixReads = prefix === undefined ? BARE_SUFFIX.test(suffix) : LOGIC_SUFFIX.test(suffix) || /^[-,/]/.test(suffix);
+  const suffixReads =
+    prefix === undefined ? BARE_SUFFIX.test(suffix) : LOGIC_SUFFIX.test(suffix) || /^[-,/]/.test(suffix);
   return suffixReads ? { familyId: number, kind: 'ic' } : null;
 }
 
-const LOGIC_74_FORM = /^(?:SN|MC|CD|MM|DM|M|TC|HD|N|U|KK|GD|IN|MSM|PC|XD|HN|T)?(?:74|54)(LS|HCT|HCU|HC)?(\d{2,4})([^0-9].*)?$/;
+const LOGIC_74_FORM =
+  /^(?:SN|MC|CD|MM|DM|M|TC|HD|N|U|KK|GD|IN|MSM|PC|XD|HN|T)?(?:74|54)(LS|HCT|HCU|HC)?(\d{2,4})([^0-9].*)?$/;
 
 function readLogic74(compact: string): FamilyName | null {
   const form = LOGIC_74_FORM.exec(compact);
@@ -68,7 +88,8 @@ function readLogic74(compact: string): FamilyName | null {
   return { familyId: `74${code === 'ttl' ? '' : code}${number}`, kind: 'ic' };
 }
 
-const FIXED_FORM = /^(?:LM|L|UA|MC|NCV|KA|NJM|JRC|BA|TA|UPC|AN|GL|KIA|HA|CJ|TS|UTC|WS|XD|MAX|SGS)?(7[89])(L|M)?(\d{2})([^0-9].*)?$/;
+const FIXED_FORM =
+  /^(?:LM|L|UA|MC|NCV|KA|NJM|JRC|BA|TA|UPC|AN|GL|KIA|HA|CJ|TS|UTC|WS|XD|MAX|SGS)?(7[89])(L|M)?(\d{2})([^0-9].*)?$/;
 const OLD_FIXED_FORM = /^LM(340|320)(?:[A-Z]{0,3}-?)(\d{1,2})(?:\.0)?(?:[^0-9].*)?$/;
 
 function readFixedRegulator(compact: string): FamilyName | null {
@@ -80,7 +101,11 @@ function readFixedRegulator(compact: string): FamilyName | null {
 }
 
 const VOLTAGE_HEADS: readonly (readonly [RegExp, string, PartKind])[] = [
-  [/^(?:LM1117|AMS1117|LD1117|NCP1117|AZ1117|AP1117|TLV1117|LT1117|SPX1117|REG1117|UZ1117|XC1117)/, 'lm1117', 'regulator'],
+  [
+    /^(?:LM1117|AMS1117|LD1117|NCP1117|AZ1117|AP1117|TLV1117|LT1117|SPX1117|REG1117|UZ1117|XC1117)/,
+    'lm1117',
+    'regulator',
+  ],
   [/^LM2940/, 'lm2940', 'regulator'],
   [/^LM2931/, 'lm2931', 'regulator'],
   [/^LP2950/, 'lp2950', 'regulator'],
@@ -110,7 +135,9 @@ function voltsWritten(rest: string, offered: readonly string[]): string | null {
   if (digits === undefined) return /^\d+(?:V|$)/.test(rest) ? oneOf(rest.replace(/V.*$/, ''), offered) : null;
   // "-12" is 12 V on some 1117s and 1.2 V on others: no guess, a person reads the part.
   if (digits === '12' && !offered.includes('12')) return null;
-  return oneOf(digits, offered) ?? (digits.length >= 2 ? oneOf(String(Number(digits.slice(0, 2)) / 10), offered) : null);
+  return (
+    oneOf(digits, offered) ?? (digits.length >= 2 ? oneOf(String(Number(digits.slice(0, 2)) / 10), offered) : null)
+  );
 }
 
 function oneOf(volts: string, offered: readonly string[]): string | null {
@@ -131,7 +158,9 @@ function readZener(compact: string): FamilyName | null {
   const series = european?.[1]?.toLowerCase() ?? '';
   const code = european?.[2] ?? '';
   const volts = /^\d$/.test(code) ? `${code}V0` : code;
-  return ZENER_SERIES.includes(series) && ZENER_EUROPEAN.includes(volts) ? { familyId: `${series}-${volts.toLowerCase()}`, kind: 'diode' } : null;
+  return ZENER_SERIES.includes(series) && ZENER_EUROPEAN.includes(volts)
+    ? { familyId: `${series}-${volts.toLowerCase()}`, kind: 'diode' }
+    : null;
 }
 
 interface Head {
@@ -140,9 +169,9 @@ interface Head {
 }
 
 // Longest first, so that LM317L is not read as LM317 with grade L, nor BAT54S as BAT54.
-const HEADS: readonly Head[] = SPELLINGS.flatMap((spelling) => spelling.heads.map((head) => ({ head, name: { familyId: spelling.id, kind: spelling.kind } }))).sort(
-  (a, b) => b.head.length - a.head.length,
-);
+const HEADS: readonly Head[] = SPELLINGS.flatMap((spelling) =>
+  spelling.heads.map((head) => ({ head, name: { familyId: spelling.id, kind: spelling.kind } })),
+).sort((a, b) => b.head.length - a.head.length);
 
 function readHead(compact: string): FamilyName | null {
   for (const { head, name } of HEADS) {
@@ -158,5 +187,8 @@ function readHead(compact: string): FamilyName | null {
 /** A number without a maker's letters: four digits and 555 stand alone; three digits such as 324 need a suffix that is no unit. */
 function bareNumberReads(head: string, suffix: string): boolean {
   if (suffix === '') return head.length >= 4 || BARE_NUMBERS.has(head);
-  return /^(?:C|AC|I|E|N|CN|CP|D|DD|CD|P|DIP|G|L|UC)?(?:N|P|D|E|DR|-.*)?$/.test(suffix) && !(head.length < 4 && /^[PRKMGUF]$/.test(suffix));
+  return (
+    /^(?:C|AC|I|E|N|CN|CP|D|DD|CD|P|DIP|G|L|UC)?(?:N|P|D|E|DR|-.*)?$/.test(suffix) &&
+    !(head.length < 4 && /^[PRKMGUF]$/.test(suffix))
+  );
 }

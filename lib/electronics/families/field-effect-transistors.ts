@@ -53,8 +53,14 @@ irlz44 | mosfet | N | G D S p | TO-220 | 55p | 47p | - | -
 `;
 
 const K = 'KiCad 6 symbol or a read datasheet, with makers’ sheets recalled';
-const SELECT = practice('Saturation current and cut-off spread five to one within one type: measure and choose.', 'every JFET datasheet’s minimum and maximum columns');
-const BF245_ORDER = practice('Makers disagree on its lead order (G S D and D S G are both in print): measure before fitting.', 'KiCad 6 symbol against another maker’s sheet recalled');
+const SELECT = practice(
+  'Saturation current and cut-off spread five to one within one type: measure and choose.',
+  'every JFET datasheet’s minimum and maximum columns',
+);
+const BF245_ORDER = practice(
+  'Makers disagree on its lead order (G S D and D S G are both in print): measure before fitting.',
+  'KiCad 6 symbol against another maker’s sheet recalled',
+);
 
 function span(text: string): Fact<readonly [number, number]> | null {
   if (text === '-') return null;
@@ -64,8 +70,19 @@ function span(text: string): Fact<readonly [number, number]> | null {
 }
 
 function readRow(line: string): FetFamily {
-  const [id = '', group = '', channel = '', leads = '-', packageName = '', volts = '-', amperes = '-', saturation = '-', cutOff = '-'] = line.split('|').map((cell) => cell.trim());
-  if ((group !== 'jfet' && group !== 'mosfet') || (channel !== 'N' && channel !== 'P')) throw new RangeError(`The field-effect table cannot be read at ${id}.`);
+  const [
+    id = '',
+    group = '',
+    channel = '',
+    leads = '-',
+    packageName = '',
+    volts = '-',
+    amperes = '-',
+    saturation = '-',
+    cutOff = '-',
+  ] = line.split('|').map((cell) => cell.trim());
+  if ((group !== 'jfet' && group !== 'mosfet') || (channel !== 'N' && channel !== 'P'))
+    throw new RangeError(`The field-effect table cannot be read at ${id}.`);
   const order = pinOut(leads.slice(0, -2), packageName);
   return {
     id,
@@ -73,7 +90,12 @@ function readRow(line: string): FetFamily {
     group,
     title: `${group === 'jfet' ? 'JFET' : 'MOSFET'}, ${channel}-channel, ${packageName}`,
     units: 1,
-    pinOut: leads === '-' ? null : leads.endsWith('m') ? recalled(order, 'datasets and makers disagree or from memory') : practice(order, K),
+    pinOut:
+      leads === '-'
+        ? null
+        : leads.endsWith('m')
+          ? recalled(order, 'datasets and makers disagree or from memory')
+          : practice(order, K),
     channel,
     drainSourceVolts: noted(volts, K),
     drainAmperes: noted(amperes, K),

@@ -139,22 +139,42 @@ l272 | - | bipolar | 4m 28m 28m | 1m 1m | 0m 1.5m | 0.35m | 1m | - | 300m | 8m |
 const NAMES: Readonly<Record<string, string>> = { JFET: 'JFET input', CMOS: 'CMOS', bipolar: 'bipolar' };
 const PIN_SOURCE = 'KiCad 6 symbol or the pin order common to the type';
 const CAUTIONS: Readonly<Record<string, readonly Fact<string>[]>> = {
-  ne5532: [practice('Diodes across the inputs conduct beyond about ±0.6 V: no comparator, no large differential voltage.', 'NE5532 schematic in every datasheet')],
+  ne5532: [
+    practice(
+      'Diodes across the inputs conduct beyond about ±0.6 V: no comparator, no large differential voltage.',
+      'NE5532 schematic in every datasheet',
+    ),
+  ],
   ne5534: [practice('Not stable below a gain of 3 without an external capacitor of about 22 pF.', 'NE5534 datasheets')],
   op27: [practice('Diodes across the inputs conduct beyond about ±0.6 V.', 'OP27 datasheet')],
-  lt1013: [practice('The SO-8 version of one maker has another pin order (1 IN1+, 2 V-, 3 IN2+ …).', 'TI LT1013 datasheet')],
+  lt1013: [
+    practice('The SO-8 version of one maker has another pin order (1 IN1+, 2 V-, 3 IN2+ …).', 'TI LT1013 datasheet'),
+  ],
   tl072: [recalled('Newer silicon with suffix H works from 4.5 V and is faster.')],
   lm358: [recalled('Crossover distortion in audio; sinks only some tens of microamperes near ground.')],
 };
 
 function input(text: string): Fact<'JFET' | 'CMOS' | 'bipolar'> {
-  if (text !== 'JFET' && text !== 'CMOS' && text !== 'bipolar') throw new RangeError(`The op-amp table holds the input kind "${text}".`);
+  if (text !== 'JFET' && text !== 'CMOS' && text !== 'bipolar')
+    throw new RangeError(`The op-amp table holds the input kind "${text}".`);
   return practice(text, 'the type’s input stage, on the first page of its datasheet');
 }
 
 function readRow(line: string): OpAmpFamily {
   const cells = line.split('|').map((cell) => cell.trim());
-  const [id = '', layout = '', kind = '', supply = '', out = '', common = '', gbw = '-', slew = '-', noise = '-', bias = '-', current = '-'] = cells;
+  const [
+    id = '',
+    layout = '',
+    kind = '',
+    supply = '',
+    out = '',
+    common = '',
+    gbw = '-',
+    slew = '-',
+    noise = '-',
+    bias = '-',
+    current = '-',
+  ] = cells;
   const [stable, reversal, source = ''] = cells.slice(11);
   const layoutRow = LAYOUTS[layout];
   const [outLow = '-', outHigh = '-'] = out.split(' ');
@@ -168,7 +188,12 @@ function readRow(line: string): OpAmpFamily {
     units,
     pinOut: pins === null ? null : practice(pins, PIN_SOURCE),
     input: input(kind),
-    supply: supplyOf(supply, source === '-' || supply.includes('p') ? 'run on ±12 to ±15 V throughout the trade; exact limit to be read in the datasheet' : source),
+    supply: supplyOf(
+      supply,
+      source === '-' || supply.includes('p')
+        ? 'run on ±12 to ±15 V throughout the trade; exact limit to be read in the datasheet'
+        : source,
+    ),
     outputAboveNegativeVolts: noted(outLow, source),
     outputBelowPositiveVolts: noted(outHigh, source),
     inputAboveNegativeVolts: noted(inLow, source),

@@ -4,7 +4,13 @@ import type { OptocouplerFamily } from './family';
 
 const K = 'KiCad 6 symbol, read';
 
-function opto(id: string, title: string, output: OptocouplerFamily['output'], pins: string | null, units = 1): OptocouplerFamily {
+function opto(
+  id: string,
+  title: string,
+  output: OptocouplerFamily['output'],
+  pins: string | null,
+  units = 1,
+): OptocouplerFamily {
   const resistor = output === 'resistor';
   return {
     id,
@@ -12,16 +18,21 @@ function opto(id: string, title: string, output: OptocouplerFamily['output'], pi
     group: 'optocoupler',
     title,
     units,
-    pinOut: pins === null ? null : practice(pinOut(pins, `${resistor ? 'vactrol' : 'DIP'}-${pins.split(' ').length}`), K),
+    pinOut:
+      pins === null ? null : practice(pinOut(pins, `${resistor ? 'vactrol' : 'DIP'}-${pins.split(' ').length}`), K),
     output,
-    cautions: resistor ? [recalled('On-resistance and fall time spread widely between pieces: choose by ear or measure.')] : [],
+    cautions: resistor
+      ? [recalled('On-resistance and fall time spread widely between pieces: choose by ear or measure.')]
+      : [],
   };
 }
 
 const SIX = 'A K NC E C B';
 
 export const OPTOCOUPLER_FAMILIES: readonly OptocouplerFamily[] = [
-  ...['4n25', '4n26', '4n27', '4n28', '4n35', '4n36', '4n37', 'til111', 'cny17', 'h11d1'].map((id) => opto(id, 'optocoupler, transistor', 'transistor', SIX)),
+  ...['4n25', '4n26', '4n27', '4n28', '4n35', '4n36', '4n37', 'til111', 'cny17', 'h11d1'].map((id) =>
+    opto(id, 'optocoupler, transistor', 'transistor', SIX),
+  ),
   opto('6n135', 'optocoupler, fast transistor', 'transistor', null),
   opto('6n136', 'optocoupler, fast transistor', 'transistor', null),
   opto('6n137', 'optocoupler, logic', 'logic', 'NC A K NC GND VO EN VCC'),

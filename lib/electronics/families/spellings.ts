@@ -96,7 +96,10 @@ const OTA_COMPARATOR_TIMER = group(
    icm7555=ICM7555,7555 icm7556=ICM7556,7556 tlc555 lmc555 tlc556 ne567=SE567,LM567,NJM567`,
 );
 
-const SWITCHES = group('ic', 'dg201 dg202 dg211 dg212 dg403 dg411=DG411,MAX312 dg412=DG412,MAX313 dg413=DG413,MAX314 dg419=DG419,ADG419 dg441 dg442 dg308 dg309 adg1414 max333');
+const SWITCHES = group(
+  'ic',
+  'dg201 dg202 dg211 dg212 dg403 dg411=DG411,MAX312 dg412=DG412,MAX313 dg413=DG413,MAX314 dg419=DG419,ADG419 dg441 dg442 dg308 dg309 adg1414 max333',
+);
 
 const SOUND = group(
   'ic',
@@ -133,7 +136,10 @@ export const LDO_VOLTS: Readonly<Record<string, readonly string[]>> = {
   lm385: ['1.2', '2.5', 'adj'],
 };
 
-const REGULATORS = group('regulator', 'lm317=LM317,NJM317,KA317,UC317,LM117,LM217,XD317 lm317l lm337=LM337,NJM337,KA337,LM137,LM237 lm337l lm338 lm350 lm723=UA723,LM723,723 l200 icl7660=ICL7660,TC7660,MAX1044,LMC7660 lt1054');
+const REGULATORS = group(
+  'regulator',
+  'lm317=LM317,NJM317,KA317,UC317,LM117,LM217,XD317 lm317l lm337=LM337,NJM337,KA337,LM137,LM237 lm337l lm338 lm350 lm723=UA723,LM723,723 l200 icl7660=ICL7660,TC7660,MAX1044,LMC7660 lt1054',
+);
 
 const BIPOLAR = group(
   'transistor',
@@ -168,11 +174,17 @@ const OPTO = group(
 
 /** E24 ladders of Zener diodes: 1N4728A … 1N4764A in order, and the voltage codes of the European series. */
 export const ZENER_1N47: readonly string[] =
-  '3V3 3V6 3V9 4V3 4V7 5V1 5V6 6V2 6V8 7V5 8V2 9V1 10 11 12 13 15 16 18 20 22 24 27 30 33 36 39 43 47 51 56 62 68 75 82 91 100'.split(' ');
+  '3V3 3V6 3V9 4V3 4V7 5V1 5V6 6V2 6V8 7V5 8V2 9V1 10 11 12 13 15 16 18 20 22 24 27 30 33 36 39 43 47 51 56 62 68 75 82 91 100'.split(
+    ' ',
+  );
 export const ZENER_1N52: readonly string[] =
-  '2V4 2V5 2V7 2V8 3V0 3V3 3V6 3V9 4V3 4V7 5V1 5V6 6V0 6V2 6V8 7V5 8V2 8V7 9V1 10 11 12 13 14 15 16 17 18 19 20 22 24 25 27 28 30 33'.split(' ');
+  '2V4 2V5 2V7 2V8 3V0 3V3 3V6 3V9 4V3 4V7 5V1 5V6 6V0 6V2 6V8 7V5 8V2 8V7 9V1 10 11 12 13 14 15 16 17 18 19 20 22 24 25 27 28 30 33'.split(
+    ' ',
+  );
 export const ZENER_EUROPEAN: readonly string[] =
-  '2V4 2V7 3V0 3V3 3V6 3V9 4V3 4V7 5V1 5V6 6V2 6V8 7V5 8V2 9V1 10 11 12 13 15 16 18 20 22 24 27 30 33 36 39 43 47 51 56 62 68 75'.split(' ');
+  '2V4 2V7 3V0 3V3 3V6 3V9 4V3 4V7 5V1 5V6 6V2 6V8 7V5 8V2 9V1 10 11 12 13 15 16 18 20 22 24 27 30 33 36 39 43 47 51 56 62 68 75'.split(
+    ' ',
+  );
 export const ZENER_SERIES: readonly string[] = ['bzx55', 'bzx79', 'bzx84', 'bzx85', 'bzv55', 'bzt52', 'bzv85'];
 
 export const SPELLINGS: readonly Spelling[] = [

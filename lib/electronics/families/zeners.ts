@@ -26,7 +26,10 @@ function zener(id: string, volts: number, watts: number, packageName: string): Z
     group: 'zener',
     title: `Zener ${volts} V, ${watts} W`,
     units: 1,
-    pinOut: practice(pinOut(packageName === 'SOT-23' ? 'A NC K' : 'K A', packageName), 'KiCad 6 symbol, read; the ring is the cathode'),
+    pinOut: practice(
+      pinOut(packageName === 'SOT-23' ? 'A NC K' : 'K A', packageName),
+      'KiCad 6 symbol, read; the ring is the cathode',
+    ),
     zenerVolts: practice(volts, LADDER),
     watts: practice(watts, 'the series’ rating in every maker’s sheet'),
     cautions: [],

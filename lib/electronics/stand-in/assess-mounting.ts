@@ -20,14 +20,20 @@ function isDiscrete(family: Family | null): boolean {
   return family !== null && ['bipolar', 'jfet', 'mosfet', 'diode', 'zener'].includes(family.group);
 }
 
-export function checkMounting(wanted: PartSpec, offered: PartSpec, families: readonly [Family | null, Family | null], context: StandInContext): Check[] {
+export function checkMounting(
+  wanted: PartSpec,
+  offered: PartSpec,
+  families: readonly [Family | null, Family | null],
+  context: StandInContext,
+): Check[] {
   const a = context.mounting ?? mountingOf(wanted, families[0]);
   const b = mountingOf(offered, families[1]);
   if (a === null || b === null) return [];
   const words = [a, b] as const;
   if (a === b) return [pass('mounting', ...words, 'It mounts the same way.')];
   const circuit = wanted.kind === 'ic' || wanted.kind === 'optocoupler';
-  if (circuit && a === 'through-hole' && b === 'surface') return [effect('mounting', ...words, 'A surface part in a through-hole place needs an adapter board.')];
+  if (circuit && a === 'through-hole' && b === 'surface')
+    return [effect('mounting', ...words, 'A surface part in a through-hole place needs an adapter board.')];
   return [fail('mounting', ...words, `A ${b} part does not go into a ${a} place.`)];
 }
 
@@ -35,6 +41,7 @@ export function checkPackage(wanted: PartSpec, offered: PartSpec): Check[] {
   const [a, b] = [wanted.package, offered.package];
   if (a === null || b === null) return [];
   if (a.toUpperCase() === b.toUpperCase()) return [pass('package', a, b, 'Same case.')];
-  if (/^\d{4}$/.test(a) && /^\d{4}$/.test(b)) return [effect('package', a, b, 'Another chip size: see whether it sits on the pads.')];
+  if (/^\d{4}$/.test(a) && /^\d{4}$/.test(b))
+    return [effect('package', a, b, 'Another chip size: see whether it sits on the pads.')];
   return [remark('package', a, b, 'Another case: see whether it fits the board.')];
 }

@@ -20,9 +20,12 @@ const SAFETY_WORDS: readonly (readonly [RegExp, string])[] = [
 /** What safety part the text or kind names, or null. Signal transformers say so (audio, line level, 600 Ω). */
 export function safetyPart(spec: PartSpec): string | null {
   if (spec.kind === 'fuse') return 'a fuse';
-  if (spec.kind === 'transformer' && !/\b(?:audio|signal|pulse|600\s*(?:Ω|ohm|R)|microphone|driver)\b/i.test(spec.text)) return 'a mains transformer';
+  if (spec.kind === 'transformer' && !/\b(?:audio|signal|pulse|600\s*(?:Ω|ohm|R)|microphone|driver)\b/i.test(spec.text))
+    return 'a mains transformer';
   // X1 and Y2 are designators and model numbers elsewhere; only capacitors carry them as classes.
-  const named = SAFETY_WORDS.find(([form, name]) => form.test(spec.text) && (name !== 'a class X or Y capacitor' || spec.kind === 'capacitor'));
+  const named = SAFETY_WORDS.find(
+    ([form, name]) => form.test(spec.text) && (name !== 'a class X or Y capacitor' || spec.kind === 'capacitor'),
+  );
   return named?.[1] ?? null;
 }
 
@@ -39,5 +42,14 @@ export function safetyRemarks(wanted: PartSpec, offered: PartSpec, { use }: Stan
     return [unknown('safety', wanted.text, offered.text, `Does it bridge a mains barrier? ${SAFETY_CAUTION}`)];
   }
   const offeredAs = wanted.kind === 'capacitor' ? safetyPart(offered) : null;
-  return offeredAs === null ? [] : [remark('safety', wanted.text, offered.text, 'A safety capacitor serves as a plain film one, but it is kept better for the mains.')];
+  return offeredAs === null
+    ? []
+    : [
+        remark(
+          'safety',
+          wanted.text,
+          offered.text,
+          'A safety capacitor serves as a plain film one, but it is kept better for the mains.',
+        ),
+      ];
 }

@@ -38,14 +38,45 @@ export function assess(wanted: PartSpec, offered: PartSpec, context: StandInCont
 function identical(a: PartSpec, b: PartSpec): boolean {
   if (tidy(a.text) === tidy(b.text) && a.kind === b.kind) return true;
   const says = a.partNumber !== null || a.value !== null;
-  return says && a.doubts.length === 0 && b.doubts.length === 0 && fingerprint(a) === fingerprint(b) && leftover(a) === leftover(b);
+  return (
+    says &&
+    a.doubts.length === 0 &&
+    b.doubts.length === 0 &&
+    fingerprint(a) === fingerprint(b) &&
+    leftover(a) === leftover(b)
+  );
 }
 
 const tidy = (text: string): string => text.trim().replace(/\s+/g, ' ').toUpperCase();
 
 function fingerprint(spec: PartSpec): string {
-  const { kind, value, tolerancePercent, ratedVolts, ratedWatts, ratedAmperes, dielectric, technology, taper, mounting, partNumber } = spec;
-  return JSON.stringify([kind, value, tolerancePercent, ratedVolts, ratedWatts, ratedAmperes, dielectric, technology, taper, mounting, spec.package, partNumber?.toUpperCase() ?? null]);
+  const {
+    kind,
+    value,
+    tolerancePercent,
+    ratedVolts,
+    ratedWatts,
+    ratedAmperes,
+    dielectric,
+    technology,
+    taper,
+    mounting,
+    partNumber,
+  } = spec;
+  return JSON.stringify([
+    kind,
+    value,
+    tolerancePercent,
+    ratedVolts,
+    ratedWatts,
+    ratedAmperes,
+    dielectric,
+    technology,
+    taper,
+    mounting,
+    spec.package,
+    partNumber?.toUpperCase() ?? null,
+  ]);
 }
 
 /** Words in the text that the fields do not hold, such as X2, dual or a colour: they tell parts apart. */
@@ -64,14 +95,23 @@ function gather(wanted: PartSpec, offered: PartSpec, context: StandInContext): C
   if (safety !== null) return safety;
   const families = [familyFor(wanted), familyFor(offered)] as const;
   const body = byFamily(families, [wanted, offered], context) ?? byKind(wanted, offered, context);
-  return [...body, ...checkMounting(wanted, offered, families, context), ...checkPackage(wanted, offered), ...safetyRemarks(wanted, offered, context)];
+  return [
+    ...body,
+    ...checkMounting(wanted, offered, families, context),
+    ...checkPackage(wanted, offered),
+    ...safetyRemarks(wanted, offered, context),
+  ];
 }
 
 function familyFor(spec: PartSpec): Family | null {
   return spec.family === null ? null : findFamily(spec.family);
 }
 
-function byFamily([a, b]: readonly [Family | null, Family | null], specs: readonly [PartSpec, PartSpec], context: StandInContext): Check[] | null {
+function byFamily(
+  [a, b]: readonly [Family | null, Family | null],
+  specs: readonly [PartSpec, PartSpec],
+  context: StandInContext,
+): Check[] | null {
   if (a === null && b === null) return null;
   if (a === null || b === null) {
     const [wanted, offered] = specs;
@@ -102,7 +142,8 @@ function isExact(family: Family): family is Exact {
 
 function byKind(wanted: PartSpec, offered: PartSpec, context: StandInContext): Check[] {
   const [a, b] = [wanted.kind, offered.kind];
-  if (a === null || b === null) return [unknown('kind', a ?? 'not known', b ?? 'not known', 'What kind of part is it?')];
+  if (a === null || b === null)
+    return [unknown('kind', a ?? 'not known', b ?? 'not known', 'What kind of part is it?')];
   if (a !== b) return [fail('kind', a, b, `A ${b} is no ${a}.`)];
   switch (a) {
     case 'resistor':
@@ -117,6 +158,13 @@ function byKind(wanted: PartSpec, offered: PartSpec, context: StandInContext): C
     case 'crystal':
       return assessCrystal(wanted, offered, context);
     default:
-      return [unknown('part', wanted.text, offered.text, 'The tables hold no facts for this kind of part: a person must compare the two.')];
+      return [
+        unknown(
+          'part',
+          wanted.text,
+          offered.text,
+          'The tables hold no facts for this kind of part: a person must compare the two.',
+        ),
+      ];
   }
 }

@@ -39,7 +39,8 @@ export interface Assessment {
  * `same` is given before any check, to the identical part only.
  */
 export function verdictOf(checks: readonly Check[]): Verdict {
-  if (checks.length === 0 || checks.some((check) => check.outcome === 'fail')) return checks.length === 0 ? 'ask' : 'refused';
+  if (checks.length === 0 || checks.some((check) => check.outcome === 'fail'))
+    return checks.length === 0 ? 'ask' : 'refused';
   if (checks.some((check) => check.outcome === 'unknown')) return 'ask';
   return checks.some((check) => check.outcome === 'note' && check.changes) ? 'with-effect' : 'drop-in';
 }

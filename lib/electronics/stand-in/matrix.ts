@@ -5,7 +5,16 @@ import type { PartSpec } from '../part-spec';
 import { assess } from './assess';
 import type { StandInContext, Verdict } from './check';
 
-export const MATRIX_GROUPS = ['op-amp', 'logic', 'switch', 'timer', 'comparator', 'regulator', 'bipolar', 'diode'] as const satisfies readonly FamilyGroup[];
+export const MATRIX_GROUPS = [
+  'op-amp',
+  'logic',
+  'switch',
+  'timer',
+  'comparator',
+  'regulator',
+  'bipolar',
+  'diode',
+] as const satisfies readonly FamilyGroup[];
 export type MatrixGroup = (typeof MATRIX_GROUPS)[number];
 
 export interface Matrix {

@@ -50,9 +50,15 @@ export function gateUnits(layout: PinOut): string {
 export function comparePins(wanted: Family, offered: Family): Check {
   const [a, b] = [wanted.pinOut, offered.pinOut];
   if (a === null || b === null) {
-    return unknown('pin-out', describe(a), describe(b), `The pins of the ${nameOf(a === null ? wanted : offered)} are not in the tables: compare the datasheets before it goes in.`);
+    return unknown(
+      'pin-out',
+      describe(a),
+      describe(b),
+      `The pins of the ${nameOf(a === null ? wanted : offered)} are not in the tables: compare the datasheets before it goes in.`,
+    );
   }
-  if (samePins(a.value, b.value)) return weighed(pass('pin-out', describe(a), describe(b), 'Same pins: it goes into the same holes.'), a, b);
+  if (samePins(a.value, b.value))
+    return weighed(pass('pin-out', describe(a), describe(b), 'Same pins: it goes into the same holes.'), a, b);
   const why =
     a.value.pins.length === b.value.pins.length
       ? `Same number of pins, other functions on them: the ${nameOf(offered)} does not work in the place of a ${nameOf(wanted)} without rewiring.`
@@ -67,7 +73,12 @@ export function comparePins(wanted: Family, offered: Family): Check {
 export function compareLeads(wanted: Family, offered: Family, crossingAllowed: boolean): Check {
   const [a, b] = [wanted.pinOut, offered.pinOut];
   if (a === null || b === null) {
-    return unknown('lead-order', describe(a), describe(b), `The lead order of the ${nameOf(a === null ? wanted : offered)} is not in the tables: measure it or read the maker’s drawing.`);
+    return unknown(
+      'lead-order',
+      describe(a),
+      describe(b),
+      `The lead order of the ${nameOf(a === null ? wanted : offered)} is not in the tables: measure it or read the maker’s drawing.`,
+    );
   }
   const left = a.value.pins.join(' ');
   const right = b.value.pins.join(' ');
@@ -75,13 +86,31 @@ export function compareLeads(wanted: Family, offered: Family, crossingAllowed: b
   const look = b.value.package === 'TO-92' ? ' Check the maker’s drawing before soldering.' : '';
   if (left === right) return weighed(pass('lead-order', describe(a), describe(b), `Same lead order.${look}`), a, b);
   if ([...a.value.pins].reverse().join(' ') === right) {
-    const how = a.value.package === b.value.package ? 'turn it round, flat or marked side where the outline has its back.' : 'turn it round, and see that its other case fits.';
-    return weighed(effect('lead-order', describe(a), describe(b), `The ${nameOf(offered)} has mirrored leads: ${how}${look}`), a, b);
+    const how =
+      a.value.package === b.value.package
+        ? 'turn it round, flat or marked side where the outline has its back.'
+        : 'turn it round, and see that its other case fits.';
+    return weighed(
+      effect('lead-order', describe(a), describe(b), `The ${nameOf(offered)} has mirrored leads: ${how}${look}`),
+      a,
+      b,
+    );
   }
-  if (a.value.pins.length !== b.value.pins.length) return weighed(fail('lead-order', describe(a), describe(b), 'It has another number of leads.'), a, b);
+  if (a.value.pins.length !== b.value.pins.length)
+    return weighed(fail('lead-order', describe(a), describe(b), 'It has another number of leads.'), a, b);
   const check = crossingAllowed
-    ? effect('lead-order', describe(a), describe(b), `Other lead order (${left} wanted, ${right} offered): the legs must be crossed and sleeved.`)
-    : fail('lead-order', describe(a), describe(b), `Other lead order (${left} wanted, ${right} offered): fitted as drawn it would be destroyed.`);
+    ? effect(
+        'lead-order',
+        describe(a),
+        describe(b),
+        `Other lead order (${left} wanted, ${right} offered): the legs must be crossed and sleeved.`,
+      )
+    : fail(
+        'lead-order',
+        describe(a),
+        describe(b),
+        `Other lead order (${left} wanted, ${right} offered): fitted as drawn it would be destroyed.`,
+      );
   return weighed(check, a, b);
 }
 

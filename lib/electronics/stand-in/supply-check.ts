@@ -17,31 +17,92 @@ export function checkSupply(wanted: Supply, offered: Supply, volts: number | nul
   const { minimumVolts, maximumVolts, absoluteVolts } = offered;
   if (volts === null) {
     const covers =
-      minimumVolts !== null && maximumVolts !== null && wanted.minimumVolts !== null && wanted.maximumVolts !== null && minimumVolts.value <= wanted.minimumVolts.value && maximumVolts.value >= wanted.maximumVolts.value;
+      minimumVolts !== null &&
+      maximumVolts !== null &&
+      wanted.minimumVolts !== null &&
+      wanted.maximumVolts !== null &&
+      minimumVolts.value <= wanted.minimumVolts.value &&
+      maximumVolts.value >= wanted.maximumVolts.value;
     return covers
-      ? weighed(pass('supply', ...words, 'Its supply range covers that of the wanted part.'), minimumVolts, maximumVolts)
-      : unknown('supply', ...words, `Which rails feed it? The ${name} has not the whole supply range of the wanted part.`);
+      ? weighed(
+          pass('supply', ...words, 'Its supply range covers that of the wanted part.'),
+          minimumVolts,
+          maximumVolts,
+        )
+      : unknown(
+          'supply',
+          ...words,
+          `Which rails feed it? The ${name} has not the whole supply range of the wanted part.`,
+        );
   }
-  if (maximumVolts === null && absoluteVolts === null) return unknown('supply', measure(volts, 'V'), words[1], `The supply limits of the ${name} are not in the tables.`);
-  if (absoluteVolts !== null && volts > absoluteVolts.value && (absoluteVolts.basis !== 'memory' || maximumVolts === null)) {
-    return weighed(fail('supply', measure(volts, 'V'), words[1], `${measure(volts, 'V')} is past the absolute maximum of ${measure(absoluteVolts.value, 'V')}: the ${name} dies.`), absoluteVolts);
+  if (maximumVolts === null && absoluteVolts === null)
+    return unknown('supply', measure(volts, 'V'), words[1], `The supply limits of the ${name} are not in the tables.`);
+  if (
+    absoluteVolts !== null &&
+    volts > absoluteVolts.value &&
+    (absoluteVolts.basis !== 'memory' || maximumVolts === null)
+  ) {
+    return weighed(
+      fail(
+        'supply',
+        measure(volts, 'V'),
+        words[1],
+        `${measure(volts, 'V')} is past the absolute maximum of ${measure(absoluteVolts.value, 'V')}: the ${name} dies.`,
+      ),
+      absoluteVolts,
+    );
   }
   if (maximumVolts !== null && volts > maximumVolts.value) {
-    return weighed(fail('supply', measure(volts, 'V'), words[1], `${measure(volts, 'V')} is more than the ${measure(maximumVolts.value, 'V')} that the ${name} may have.`), maximumVolts);
+    return weighed(
+      fail(
+        'supply',
+        measure(volts, 'V'),
+        words[1],
+        `${measure(volts, 'V')} is more than the ${measure(maximumVolts.value, 'V')} that the ${name} may have.`,
+      ),
+      maximumVolts,
+    );
   }
   if (minimumVolts !== null && volts < minimumVolts.value) {
-    return weighed(fail('supply', measure(volts, 'V'), words[1], `${measure(volts, 'V')} is too little: the ${name} wants ${measure(minimumVolts.value, 'V')} at least.`), minimumVolts);
+    return weighed(
+      fail(
+        'supply',
+        measure(volts, 'V'),
+        words[1],
+        `${measure(volts, 'V')} is too little: the ${name} wants ${measure(minimumVolts.value, 'V')} at least.`,
+      ),
+      minimumVolts,
+    );
   }
-  return weighed(pass('supply', measure(volts, 'V'), words[1], `${measure(volts, 'V')} is inside what the ${name} may have.`), maximumVolts);
+  return weighed(
+    pass('supply', measure(volts, 'V'), words[1], `${measure(volts, 'V')} is inside what the ${name} may have.`),
+    maximumVolts,
+  );
 }
 
 /** 4000-series parts end at 18 V from some makers and at 15 V from others. */
 export function checkSupply4000(check: Check, volts: number | null): Check {
   if (check.outcome !== 'pass' || volts === null || volts <= 15) return check;
-  return effect(check.check, check.wanted, check.offered, 'Above 15 V only some makers’ 4000-series parts are allowed: read the maker’s sheet.');
+  return effect(
+    check.check,
+    check.wanted,
+    check.offered,
+    'Above 15 V only some makers’ 4000-series parts are allowed: read the maker’s sheet.',
+  );
 }
 
-export function splitSupplyRemark(rails: readonly number[], volts: number | null, span: number | null, limit: number | null): Check | null {
-  if (volts === null || span === null || limit === null || span <= limit || !rails.some((rail) => rail < 0)) return null;
-  return remark('supply-connection', measure(span, 'V'), measure(limit, 'V'), 'It must sit between ground and one rail, not between both rails.');
+export function splitSupplyRemark(
+  rails: readonly number[],
+  volts: number | null,
+  span: number | null,
+  limit: number | null,
+): Check | null {
+  if (volts === null || span === null || limit === null || span <= limit || !rails.some((rail) => rail < 0))
+    return null;
+  return remark(
+    'supply-connection',
+    measure(span, 'V'),
+    measure(limit, 'V'),
+    'It must sit between ground and one rail, not between both rails.',
+  );
 }
