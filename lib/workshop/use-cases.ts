@@ -7,9 +7,11 @@ import { acceptInvitation, invitePerson, lookAtInvitation, withdrawInvitation } 
 import { listPeople } from './list-people';
 import { setPassword } from './set-password';
 import { changeSettings, getSettings } from './settings';
+import { whatWaits } from './what-waits';
 import { endMySessions, whoAmI } from './who-am-i';
 
 export const workshopUseCases: readonly UseCase[] = [
+  whatWaits,
   whoAmI,
   endMySessions,
   listPeople,

@@ -1,0 +1,4 @@
+import { route } from '@/lib/api/route';
+import { receiptProposal } from '@/lib/stores/read-receipts';
+
+export const GET = route(receiptProposal);
