@@ -82,7 +82,7 @@ export function compareLeads(wanted: Family, offered: Family, crossingAllowed: b
   }
   const left = a.value.pins.join(' ');
   const right = b.value.pins.join(' ');
-  // Sheets of one TO-92 number have been seen with the leads reversed (facts, section 6.1): never fit by table alone.
+  // Sheets of one TO-92 number have been seen with the leads reversed (the BC547’s, from two makers): never fit by table alone.
   const look = b.value.package === 'TO-92' ? ' Check the maker’s drawing before soldering.' : '';
   if (left === right) return weighed(pass('lead-order', describe(a), describe(b), `Same lead order.${look}`), a, b);
   if ([...a.value.pins].reverse().join(' ') === right) {
