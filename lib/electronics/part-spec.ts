@@ -66,7 +66,14 @@ export type Dielectric =
 /** The letter or word as written; what it means depends on the convention (see facts on tapers). */
 export type Taper = 'linear' | 'log' | 'reverse-log' | 'letter-A' | 'letter-B' | 'letter-C' | 'other';
 
-export type ResistorTechnology = 'carbon-film' | 'carbon-composition' | 'metal-film' | 'metal-oxide' | 'wirewound' | 'thick-film' | 'thin-film';
+export type ResistorTechnology =
+  | 'carbon-film'
+  | 'carbon-composition'
+  | 'metal-film'
+  | 'metal-oxide'
+  | 'wirewound'
+  | 'thick-film'
+  | 'thin-film';
 
 export type Mounting = 'through-hole' | 'surface' | 'panel';
 

@@ -14,16 +14,28 @@ export const DIELECTRIC_WORDS: Words<Dielectric> = [
   [/\bY5U\b/i, 'Y5U'],
   [/\bZ5U\b/i, 'Z5U'],
   [/\b(?:polystyrene|styroflex|styrol|KS\d*)\b/i, 'polystyrene'],
-  [/\b(?:polypropylene|polypropyleen|polypropylène|polipropileno|polipropilene|MKP\d*|FKP\d*|KP|PP)\b/i, 'polypropylene'],
+  [
+    /\b(?:polypropylene|polypropyleen|polypropylène|polipropileno|polipropilene|MKP\d*|FKP\d*|KP|PP)\b/i,
+    'polypropylene',
+  ],
   [/\b(?:polycarbonate|MKC|FKC)\b/i, 'polycarbonate'],
   [/\b(?:polyester|mylar|poliéster|poliestere|MKT\d*|MKS\d*|FKS\d*|KT|PET|greencap)\b/i, 'polyester'],
   [/\b(?:film|folie\w*|foil|película|pellicola|box)\b/i, 'film'],
   [/\b(?:silver[- ]mica|mica|glimmer)\b/i, 'mica'],
   [/\b(?:tantalum|tantal\w*|tantale|tántalo|tantalio|tant)\b/i, 'tantalum'],
-  [/\b(?:bipolar\s+(?:electro\w*|elko|cap\w*)|non[- ]?polar\w*|bi[- ]?polar|NP electro\w*|BP electro\w*)\b/i, 'aluminium-bipolar'],
+  [
+    /\b(?:bipolar\s+(?:electro\w*|elko|cap\w*)|non[- ]?polar\w*|bi[- ]?polar|NP electro\w*|BP electro\w*)\b/i,
+    'aluminium-bipolar',
+  ],
   [/\b(?:polymer)\b/i, 'polymer'],
-  [/\b(?:electro\w*|elektrolyt\w*|elko|elco|él?ectrolytique|chimique|electrol[ií]tico|elettrolitico|alu(?:mini?um)?|el\.|lytic)(?=$|\W)/i, 'aluminium'],
-  [/\b(?:ceramic|ceram|keramik\w*|keramisch\w*|céramique|cer[aá]mico|ceramico|cer|kerko|disc|MLCC|mono(?:lithic)?)\b/i, 'ceramic'],
+  [
+    /\b(?:electro\w*|elektrolyt\w*|elko|elco|él?ectrolytique|chimique|electrol[ií]tico|elettrolitico|alu(?:mini?um)?|el\.|lytic)(?=$|\W)/i,
+    'aluminium',
+  ],
+  [
+    /\b(?:ceramic|ceram|keramik\w*|keramisch\w*|céramique|cer[aá]mico|ceramico|cer|kerko|disc|MLCC|mono(?:lithic)?)\b/i,
+    'ceramic',
+  ],
 ];
 
 export const TECHNOLOGY_WORDS: Words<ResistorTechnology> = [
@@ -39,10 +51,18 @@ export const TECHNOLOGY_WORDS: Words<ResistorTechnology> = [
 /** Cases as the trade writes them, brought to one spelling. */
 export const PACKAGE_PATTERNS: readonly (readonly [RegExp, (match: RegExpExecArray) => string, Mounting | null])[] = [
   [/\b(?:C?P?DIP|DIL|PDIP)[-_ ]?(4|6|8|14|16|18|20|24|28|40)\b/i, (m) => `DIP-${m[1]}`, 'through-hole'],
-  [/\b(SOIC|SO|SOP|SOT|TSSOP|SSOP|MSOP|VSSOP|QFN|DFN|LQFP|TQFP|QFP)[-_ ]?(\d{1,3}(?:-\d{1,2})?)\b/i, (m) => `${(m[1] ?? '').toUpperCase().replace('SOIC', 'SO')}-${m[2]}`, 'surface'],
+  [
+    /\b(SOIC|SO|SOP|SOT|TSSOP|SSOP|MSOP|VSSOP|QFN|DFN|LQFP|TQFP|QFP)[-_ ]?(\d{1,3}(?:-\d{1,2})?)\b/i,
+    (m) => `${(m[1] ?? '').toUpperCase().replace('SOIC', 'SO')}-${m[2]}`,
+    'surface',
+  ],
   [/\bTO[-_ ]?(92|220|126|18|39|3|5|247|264)\b/i, (m) => `TO-${m[1]}`, 'through-hole'],
   [/\b(?:DO[-_ ]?(35|41|15|201|7|204))\b/i, (m) => `DO-${m[1]}`, 'through-hole'],
-  [/\b(SOD|SMA|SMB|SMC|MELF|MiniMELF|DPAK|D2PAK)[-_ ]?(\d{2,3}[A-Z]{0,2})?\b/, (m) => `${m[1]}${m[2] ? `-${m[2]}` : ''}`, 'surface'],
+  [
+    /\b(SOD|SMA|SMB|SMC|MELF|MiniMELF|DPAK|D2PAK)[-_ ]?(\d{2,3}[A-Z]{0,2})?\b/,
+    (m) => `${m[1]}${m[2] ? `-${m[2]}` : ''}`,
+    'surface',
+  ],
   [/(?:^|[\s_:RCLD])(0201|0402|0603|0805|1008|1206|1210|1812|2010|2512)(?=$|[\s_,;])/, (m) => m[1] ?? '', 'surface'],
   [/\b(0204|0207|0309|0411)\b/, (m) => m[1] ?? '', 'through-hole'],
 ];
@@ -63,16 +83,25 @@ export const KIND_WORDS: Words<PartKind> = [
   [/\b(?:diodes?|dioden?|diodo|diodi|zener|schottky|rectifier|gleichrichter)\b/i, 'diode'],
   [/\b(?:voltage regulator|regulator\w*|spannungsregler|LDO|régulateur)\b/i, 'regulator'],
   [/\b(?:transistor\w*|BJT|JFET|MOSFET|NPN|PNP|FET)\b/i, 'transistor'],
-  [/\b(?:op[- ]?amps?|comparator|schmitt|NAND|NOR gate|inverter|flip[- ]?flop|multiplexer|timer IC|integrated circuit|microcontroller|OTA|ICs?)\b/i, 'ic'],
+  [
+    /\b(?:op[- ]?amps?|comparator|schmitt|NAND|NOR gate|inverter|flip[- ]?flop|multiplexer|timer IC|integrated circuit|microcontroller|OTA|ICs?)\b/i,
+    'ic',
+  ],
   [/\b(?:crystal|quartz|quarz|resonator|oscillator|xtal)\b/i, 'crystal'],
   [/\b(?:fuse|sicherung|fusible|polyfuse|zekering|fusibile)\b(?!\s*holder)/i, 'fuse'],
   [/\b(?:transformer|trafo|transformator|transformateur)\b/i, 'transformer'],
   [/\b(?:capacitor\w*|kondensator\w*|condensat\w*|condensador\w*|caps?|elko|elco)\b/i, 'capacitor'],
   [/\b(?:resistor\w*|widerst\w*|weerstand\w*|résistance\w*|resisten\w*|res)\b/i, 'resistor'],
   [/\b(?:inductor\w*|coil|choke|drossel|spule|ferrite bead|ferrite|inductance|induttanza)\b/i, 'inductor'],
-  [/\b(?:jack|socket|header|connector|buchse|stecker|terminal|plug|receptacle|IDC|klemme|conn|pin strip|banana)\w*\b/i, 'connector'],
+  [
+    /\b(?:jack|socket|header|connector|buchse|stecker|terminal|plug|receptacle|IDC|klemme|conn|pin strip|banana)\w*\b/i,
+    'connector',
+  ],
   [/\b(?:switch|schalter|taster|button|toggle|SPDT|DPDT|SPST|encoder|interrupteur|schakelaar)\w*\b/i, 'switch'],
-  [/\b(?:knob|screw|nut|washer|spacer|standoff|stand-off|bolt|schraube|mutter|heat ?sink|knopf|enclosure|fuse ?holder|led ?holder|bracket)s?\b/i, 'hardware'],
+  [
+    /\b(?:knob|screw|nut|washer|spacer|standoff|stand-off|bolt|schraube|mutter|heat ?sink|knopf|enclosure|fuse ?holder|led ?holder|bracket)s?\b/i,
+    'hardware',
+  ],
 ];
 
 export const NOT_FITTED =

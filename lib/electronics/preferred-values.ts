@@ -1,10 +1,15 @@
 /** Preferred numbers of IEC 60063: E3 to E192, nearest by ratio, neighbours, and the series a value belongs to. */
+import type { Quantity } from './part-spec';
+import { quantity, ratioOf, toNumber } from './quantity';
 
 export const SERIES = ['E3', 'E6', 'E12', 'E24', 'E48', 'E96', 'E192'] as const;
 export type Series = (typeof SERIES)[number];
 
 /** E24 and below do not follow the rule below, so they are tabulated; E12, E6, E3 are every 2nd, 4th, 8th of E24. */
-const E24 = [100, 110, 120, 130, 150, 160, 180, 200, 220, 240, 270, 300, 330, 360, 390, 430, 470, 510, 560, 620, 680, 750, 820, 910] as const;
+const E24 = [
+  100, 110, 120, 130, 150, 160, 180, 200, 220, 240, 270, 300, 330, 360, 390, 430, 470, 510, 560, 620, 680, 750, 820,
+  910,
+] as const;
 /** E192 number 185 computes to 919 but the standard says 920 (IEC 60063). */
 const E192_EXCEPTION = { index: 185, value: 920 } as const;
 
@@ -25,8 +30,16 @@ const NUMBERS: Readonly<Record<Series, readonly number[]>> = {
   E192: byRule(192),
 };
 
-/** Usual tolerance of a series, ±percent; a guess only, a printed tolerance wins (IEC 60063). */
-const USUAL_TOLERANCE: Readonly<Record<Series, number>> = { E3: 40, E6: 20, E12: 10, E24: 5, E48: 2, E96: 1, E192: 0.5 };
+/** ±percent that a series is usually sold in; a guess only, a printed tolerance wins (IEC 60063). */
+const USUAL_TOLERANCE: Readonly<Record<Series, number>> = {
+  E3: 40,
+  E6: 20,
+  E12: 10,
+  E24: 5,
+  E48: 2,
+  E96: 1,
+  E192: 0.5,
+};
 export const usualTolerancePercent = (series: Series): number => USUAL_TOLERANCE[series];
 
 /** The numbers of one decade, 100 to 999. */
@@ -47,7 +60,9 @@ const at = (number: number, decade: number): number => Number(`${number}e${decad
 export function neighbours(value: number, series: Series): readonly [number, number] {
   positive(value);
   const decade = decadeOf(value);
-  const around = [decade - 1, decade, decade + 1].flatMap((power) => NUMBERS[series].map((number) => at(number, power)));
+  const around = [decade - 1, decade, decade + 1].flatMap((power) =>
+    NUMBERS[series].map((number) => at(number, power)),
+  );
   const exact = around.find((candidate) => Math.abs(candidate / value - 1) < 1e-9);
   if (exact !== undefined) return [exact, exact];
   const below = Math.max(...around.filter((candidate) => candidate < value));
@@ -61,14 +76,62 @@ export function nearestPreferred(value: number, series: Series): number {
   return value / below <= above / value ? below : above;
 }
 
+/** Exactly: 4.7 kΩ is in E24, 4.71 kΩ is not. Zero and negative values are in none. */
+export function isPreferred(value: Quantity, series: Series): boolean {
+  const digits = String(value.significand);
+  return digits.length <= 3 && NUMBERS[series].includes(Number(digits.padEnd(3, '0')));
+}
+
 /** The coarsest series that has the value; null where none has. Throws RangeError unless > 0. */
 export function seriesOf(value: number): Series | null {
   positive(value);
   return SERIES.find((series) => Math.abs(nearestPreferred(value, series) / value - 1) < 1e-6) ?? null;
 }
 
+/** The preferred quantity nearest by ratio, exactly. Throws RangeError unless > 0. */
+export function roundToSeries(value: Quantity, series: Series): Quantity {
+  const [below, above] = stepsAround(value, series);
+  return ratioOf(value, below) <= ratioOf(above, value) ? below : above;
+}
+
+/** Exact preferred quantities at or next below and at or next above. Throws RangeError unless > 0. */
+export function stepsAround(value: Quantity, series: Series): readonly [Quantity, Quantity] {
+  positive(value.significand);
+  if (isPreferred(value, series)) return [value, value];
+  const numbers = NUMBERS[series];
+  const digits = String(value.significand);
+  const exponent = value.exponent + digits.length - 3;
+  const mantissa = Number(`${digits}e${3 - digits.length}`);
+  const aboveIndex = numbers.findIndex((number) => number > mantissa);
+  const above =
+    aboveIndex === -1
+      ? quantity(1000, exponent, value.unit)
+      : quantity(numbers[aboveIndex] ?? 1000, exponent, value.unit);
+  const below = numbers[(aboveIndex === -1 ? numbers.length : aboveIndex) - 1] ?? 100;
+  return [quantity(below, exponent, value.unit), above];
+}
+
+/** The preferred quantities one step down and one step up, skipping the value itself. Throws RangeError unless > 0. */
+export function stepDownAndUp(value: Quantity, series: Series): readonly [Quantity, Quantity] {
+  const [below, above] = stepsAround(value, series);
+  if (below !== above) return [below, above];
+  const numbers = NUMBERS[series];
+  const exponent = value.exponent + String(value.significand).length - 3;
+  const index = numbers.indexOf(Number(String(value.significand).padEnd(3, '0')));
+  const down =
+    index > 0
+      ? quantity(numbers[index - 1] ?? 100, exponent, value.unit)
+      : quantity(numbers.at(-1) ?? 100, exponent - 1, value.unit);
+  const up = quantity(numbers[index + 1] ?? 1000, exponent, value.unit);
+  return [down, up];
+}
+
 /** The stocked value nearest by ratio, with its deviation in percent; null from an empty shelf. */
-export function nearestStocked<Item>(value: number, stock: readonly Item[], valueOf: (item: Item) => number): { item: Item; deviationPercent: number } | null {
+export function nearestStocked<Item>(
+  value: number,
+  stock: readonly Item[],
+  valueOf: (item: Item) => number,
+): { item: Item; deviationPercent: number } | null {
   positive(value);
   let best: { item: Item; distance: number } | null = null;
   for (const item of stock) {
@@ -78,4 +141,9 @@ export function nearestStocked<Item>(value: number, stock: readonly Item[], valu
     if (!best || distance < best.distance) best = { item, distance };
   }
   return best && { item: best.item, deviationPercent: (valueOf(best.item) / value - 1) * 100 };
+}
+
+/** Whether the value lies within ±percent of the wanted one, both bounds included; floats, so one part in 10^12 is forgiven. */
+export function withinTolerance(value: Quantity, wanted: Quantity, tolerancePercent: number): boolean {
+  return Math.abs(toNumber(value) / toNumber(wanted) - 1) * 100 <= tolerancePercent * (1 + 1e-12) + 1e-10;
 }

@@ -1,30 +1,130 @@
-/** A quantity for people: with an engineering prefix (`4.7 kΩ`) or in the form of IEC 60062 (`4k7`). Reading either gives it back. */
+/**
+ * Writes a quantity for people: `4.7 kΩ` with engineering prefixes, or `4k7` in the letter-for-point form of IEC 60062.
+ * Both are exact, and readQuantity gives the same quantity back from either without a doubt.
+ */
 import type { Quantity, Unit } from './part-spec';
 
-const SYMBOLS: Readonly<Record<Unit, string>> = { ohm: 'Ω', farad: 'F', henry: 'H', hertz: 'Hz', volt: 'V', ampere: 'A', watt: 'W' };
-const PREFIXES: Readonly<Record<number, string>> = { [-15]: 'f', [-12]: 'p', [-9]: 'n', [-6]: 'µ', [-3]: 'm', 0: '', 3: 'k', 6: 'M', 9: 'G', 12: 'T' };
+/**
+ * Millifarads are left out on purpose: on old drawings `mF` stands for microfarad, so the trade writes 4700 µF. Nothing
+ * below the first prefix or above the last has a name; it gets the nearest.
+ */
+const PREFIXES: Readonly<Record<Unit, readonly (readonly [exponent: number, prefix: string])[]>> = {
+  ohm: [
+    [-3, 'm'],
+    [0, ''],
+    [3, 'k'],
+    [6, 'M'],
+    [9, 'G'],
+    [12, 'T'],
+  ],
+  farad: [
+    [-12, 'p'],
+    [-9, 'n'],
+    [-6, 'µ'],
+    [0, ''],
+  ],
+  henry: [
+    [-9, 'n'],
+    [-6, 'µ'],
+    [-3, 'm'],
+    [0, ''],
+  ],
+  hertz: [
+    [-3, 'm'],
+    [0, ''],
+    [3, 'k'],
+    [6, 'M'],
+    [9, 'G'],
+  ],
+  volt: [
+    [-6, 'µ'],
+    [-3, 'm'],
+    [0, ''],
+    [3, 'k'],
+  ],
+  ampere: [
+    [-9, 'n'],
+    [-6, 'µ'],
+    [-3, 'm'],
+    [0, ''],
+  ],
+  watt: [
+    [-6, 'µ'],
+    [-3, 'm'],
+    [0, ''],
+    [3, 'k'],
+  ],
+};
 
-function engineering({ significand, exponent }: Quantity, highest = 12, lowest = -15): { mantissa: string; power: number } {
-  if (significand === 0) return { mantissa: '0', power: 0 };
-  const digits = String(Math.abs(significand));
-  const magnitude = digits.length - 1 + exponent;
-  const power = Math.max(lowest, Math.min(highest, Math.floor(magnitude / 3) * 3));
-  const point = digits.length + exponent - power;
-  const mantissa = point <= 0 ? `0.${'0'.repeat(-point)}${digits}` : point >= digits.length ? digits + '0'.repeat(point - digits.length) : `${digits.slice(0, point)}.${digits.slice(point)}`;
-  return { mantissa: significand < 0 ? `-${mantissa}` : mantissa, power };
+export const UNIT_SIGNS: Readonly<Record<Unit, string>> = {
+  ohm: 'Ω',
+  farad: 'F',
+  henry: 'H',
+  hertz: 'Hz',
+  volt: 'V',
+  ampere: 'A',
+  watt: 'W',
+};
+
+/** From here upwards capacitance is written in farads (`0.47 F`), as on double-layer capacitors. */
+const SMALLEST_IN_FARADS = -1;
+
+/** `4.7 kΩ`, `100 nF`, `0 Ω`, `0.5 mΩ`, `4700 µF`; every digit is shown. */
+export function printQuantity(value: Quantity): string {
+  const [exponent, prefix] = prefixFor(value);
+  return `${decimalAt(value, exponent)} ${prefix}${UNIT_SIGNS[value.unit]}`;
 }
 
-/** `4.7 kΩ`, `100 nF`, `16 MHz`. Farads stay at or below the micro, as the trade writes them (`2200 µF`). */
-export function printQuantity(given: Quantity): string {
-  const { mantissa, power } = engineering(given, given.unit === 'farad' ? -6 : 12, given.unit === 'farad' ? -12 : -15);
-  const prefix = given.significand === 0 ? '' : (PREFIXES[power] ?? '');
-  return `${mantissa} ${prefix}${SYMBOLS[given.unit]}`;
+/**
+ * `4k7`, `100n`, `R47`, `3V3` as IEC 60062 writes resistance and capacitance (and, by the same habit, inductance and
+ * volts). Frequency, current and power have no such form and are printed as `printQuantity` does, without the space.
+ */
+export function printCode(value: Quantity): string {
+  if (value.unit === 'hertz' || value.unit === 'ampere' || value.unit === 'watt') {
+    return printQuantity(value).replace(' ', '');
+  }
+  const shown = value.unit === 'ohm' && magnitude(value) < 0 ? ([0, ''] as const) : prefixFor(value);
+  const [exponent, prefix] = shown;
+  const letter = prefix === '' ? LETTERS_AT_ONE[value.unit] : prefix;
+  const [whole = '0', fraction = ''] = decimalAt(value, exponent).split('.');
+  if (fraction === '') return `${whole}${letter}`;
+  // More than three places would read as a part number (1n4148), so such values keep their point.
+  if (fraction.length > 3) return printQuantity(value).replace(' ', '');
+  // R47 and p47 stand without their zero; a lone V, F or H before digits would look like a designator or a case.
+  return whole === '0' && (value.unit === 'ohm' || prefix !== '')
+    ? `${letter}${fraction}`
+    : `${whole}${letter}${fraction}`;
 }
 
-/** IEC 60062: the prefix in the place of the decimal point, `R` for ohms: `4k7`, `470R`, `R47`, `100n`, `4µ7` as `4u7`. */
-export function printCode(given: Quantity): string {
-  const { mantissa, power } = engineering(given, given.unit === 'farad' ? -6 : 9, given.unit === 'ohm' ? 0 : -15);
-  const letter = power === 0 ? (given.unit === 'ohm' ? 'R' : given.unit === 'farad' ? 'F' : '') : power === -6 ? 'u' : (PREFIXES[power] ?? '');
-  const [whole = '0', fraction = ''] = mantissa.split('.');
-  return `${whole === '0' && fraction !== '' ? '' : whole}${letter}${fraction}`;
+const LETTERS_AT_ONE: Readonly<Record<'ohm' | 'farad' | 'henry' | 'volt', string>> = {
+  ohm: 'R',
+  farad: 'F',
+  henry: 'H',
+  volt: 'V',
+};
+
+/** Power of ten of the first digit: 3 for 4700, -1 for 0.47. */
+function magnitude(value: Quantity): number {
+  return value.significand === 0 ? 0 : value.exponent + String(Math.abs(value.significand)).length - 1;
+}
+
+function prefixFor(value: Quantity): readonly [number, string] {
+  const plain = [0, ''] as const;
+  if (value.significand === 0) return plain;
+  const size = magnitude(value);
+  if (value.unit === 'farad' && size >= SMALLEST_IN_FARADS) return plain;
+  // 0.47 Ω is what the trade says; milliohms begin below a tenth.
+  if (value.unit === 'ohm' && size === -1) return plain;
+  const named = PREFIXES[value.unit].filter(([exponent]) => !(value.unit === 'farad' && exponent === 0));
+  return named.filter(([exponent]) => exponent <= size).at(-1) ?? named[0] ?? plain;
+}
+
+/** The value divided by 10^exponent, as a plain decimal without trailing zeros. */
+function decimalAt(value: Quantity, exponent: number): string {
+  const sign = value.significand < 0 ? '-' : '';
+  const digits = String(Math.abs(value.significand));
+  const power = value.exponent - exponent;
+  if (power >= 0) return sign + digits + '0'.repeat(value.significand === 0 ? 0 : power);
+  const padded = digits.padStart(1 - power, '0');
+  return `${sign}${padded.slice(0, power)}.${padded.slice(power)}`;
 }

@@ -1,14 +1,21 @@
 /**
  * Values as people write them: 4k7, n47, 100R, 4,7 kΩ, .1uF, 104, 22.0uF, 600Ω. What a text can mean depends on the
- * kind of part; where it can mean two things, the likelier is given with a doubt that asks.
+ * kind of part; where it can mean two things, the likelier is given with a doubt that asks. Ratings, packages and words
+ * beside the value are left to readPartText.
  */
-import type { Doubt, PartKind, Quantity, Unit } from './part-spec';
+import { readBareNumber, readDigitCode, scaled } from './bare-number';
+import { doubtBetween } from './doubt-between';
+import { tolerancePercentOf } from './markings/tolerance-letters';
+import { UNITS, type Doubt, type PartKind, type Quantity, type Unit } from './part-spec';
 import { printQuantity } from './print-quantity';
-import { fromDecimal, quantity, QuantityError } from './quantity';
+import { fromDecimal, QuantityError, toNumber } from './quantity';
+import { readNumber, type ReadNumber } from './read-number';
+import { tidyValueText } from './tidy-value-text';
+import { readUnitWord, type UnitWord } from './unit-words';
 
 export interface ReadQuantity {
   readonly quantity: Quantity;
-  /** From a letter after the value (4K7J), ±percent; IEC 60062. */
+  /** From a letter after the value (4K7J), ±percent; IEC 60062. Null for lopsided letters such as Z. */
   readonly tolerancePercent: number | null;
   readonly doubts: readonly Doubt[];
 }
@@ -32,183 +39,216 @@ export function unitOfKind(kind: PartKind | null): Unit | null {
   }
 }
 
-const POWERS: Readonly<Record<string, number>> = { f: -15, p: -12, n: -9, u: -6, m: -3, R: 0, E: 0, F: 0, k: 3, K: 3, M: 6, G: 9, T: 12, '': 0 };
-const TOLERANCES: Readonly<Record<string, number>> = { B: 0.1, C: 0.25, D: 0.5, F: 1, G: 2, J: 5, K: 10, M: 20 };
-
-/** One spelling for look-alikes: full-width forms, micro signs, ohm signs, decimal commas, words for units. */
-export function tidyValueText(text: string): string {
-  return text
-    .normalize('NFKC')
-    .replace(/[\u00a0\u2007\u2009\u202f]/g, ' ')
-    .replace(/[µμ]/g, 'u')
-    .replace(/\u2126|\u03a9|\u03c9/g, 'Ω')
-    .replace(/\b(k|K|M|G|m)?\s*ohms?\b/gi, (_, prefix: string | undefined) => `${prefix ?? ''}Ω`)
-    .replace(/\bmfd\b/gi, 'uF')
-    .replace(/\bmmfd\b|\buuf\b/gi, 'pF')
-    .trim();
-}
-
-/** Thousands separators and decimal commas to a plain decimal; null where it is no number. */
-function plainNumber(text: string): string | null {
-  if (/^\d{1,3}(?:,\d{3})+(?:\.\d+)?$/.test(text)) return text.replaceAll(',', '');
-  if (/^\d{1,3}(?:\.\d{3}){2,}(?:,\d+)?$/.test(text)) return text.replaceAll('.', '').replace(',', '.');
-  const plain = text.replace(',', '.');
-  return /^(?:\d+\.?\d*|\.\d+)$/.test(plain) ? plain : null;
-}
-
-const UNIT_SYMBOLS: readonly (readonly [RegExp, Unit])[] = [
-  [/^(?:Ω|Ohm)$/i, 'ohm'],
-  [/^F$/, 'farad'],
-  [/^f$/, 'farad'],
-  [/^H$/i, 'henry'],
-  [/^Hz$/i, 'hertz'],
-];
-
-const NUMBER = String.raw`\d{1,3}(?:[.,]\d{3})+(?:[.,]\d+)?|\d+(?:[.,]\d*)?|[.,]\d+`;
-/** 4.7 kΩ, 100nF, 10 K, 0.1u, 22.0uF, 4u7F is below. Groups: number, prefix, unit, tolerance letter. */
-const PLAIN = new RegExp(`^(${NUMBER})\\s*([fpnumkKMGTRE]?)\\s*(Ω|F|f|H|h|Hz|HZ|hz)?\\s*([BCDFGJKM])?$`);
-/** 4k7, n47, R47, 1M5, 4u7F, 2n2f, 4R7, 4E7, 47K3, with a tolerance letter after (4K7J). */
-const CODED = /^(\d{0,4})([fpnumkKMGRE])(\d{1,4})\s*(Ω|F|f|H|h|Hz|HZ)?\s*([BCDFGJKM])?$/;
-const UPPER_CODED = /^(\d{0,4})([PNU])(\d{1,4})?(F)?$/;
-const DIGIT_CODE = /^(\d{2})(\d)([BCDFGJKMZ])?$/;
-const EXPONENT = /^(\d+(?:\.\d+)?)[eE]([+-]?\d{1,2})$/;
+const LONGEST_TEXT = 40;
+const UNIT_SET: ReadonlySet<string> = new Set(UNITS);
 
 /**
- * Reads a value text for a kind of part. Null where it is no value (a part number, words). Never throws.
+ * Reads one value text. Null where it is no value (a part number, words, nothing). Never throws.
+ *
  * @param text one value without ratings, such as `4k7` or `100 nF`
+ * @param hint the kind of part or the unit expected; null where only the text can tell
  */
-export function readQuantity(text: string, kind: PartKind | null): ReadQuantity | null {
+export function readQuantity(text: string, hint: PartKind | Unit | null): ReadQuantity | null {
   const tidy = tidyValueText(text);
-  if (tidy === '' || tidy.length > 40) return null;
+  if (tidy === '' || tidy.length > LONGEST_TEXT) return null;
+  const context: Context = {
+    text: tidy,
+    home: isUnit(hint) ? hint : unitOfKind(hint),
+    codesUsual: hint === 'trimmer' || hint === 'potentiometer',
+  };
   try {
-    return readTidy(tidy, kind);
+    return readExponent(context) ?? readMarkedCode(context) ?? readPlain(context) ?? readLetterForPoint(context);
   } catch (error) {
+    // Too many digits or beyond any part: no value.
     if (error instanceof QuantityError) return null;
     throw error;
   }
 }
 
-function readTidy(text: string, kind: PartKind | null): ReadQuantity | null {
-  const home = unitOfKind(kind);
-  // 33r and 4r7 in lower case, as lists of resistors have them.
-  if (home === 'ohm' && /^\d*r\d*$/.test(text)) return readTidy(text.replace('r', 'R'), kind);
-  return readPlain(text, kind, home) ?? readCoded(text, kind, home) ?? readUpperCoded(text, home) ?? readExponent(text, home);
+interface Context {
+  readonly text: string;
+  readonly home: Unit | null;
+  /** Trimmers and potentiometers are listed by the code on their body. */
+  readonly codesUsual: boolean;
 }
 
-function readPlain(text: string, kind: PartKind | null, home: Unit | null): ReadQuantity | null {
-  const form = PLAIN.exec(text);
-  if (!form) return null;
-  const [, number = '', prefix = '', symbol, letter] = form;
-  const said = symbol === undefined ? null : (UNIT_SYMBOLS.find(([pattern]) => pattern.test(symbol))?.[1] ?? null);
-  const unit = unitFor(said, prefix, home);
-  if (unit === null) return null;
-  if (prefix === '' && said === null && unit === 'farad') return readBareCapacitance(number, letter, text);
-  const decimal = plainNumber(number);
-  if (decimal === null) return null;
-  const { power, doubts } = powerOf(prefix, unit, decimal, text, kind);
-  if (power === null) return null;
-  const base = fromDecimal(decimal, unit);
-  return { quantity: quantity(base.significand, base.exponent + power, unit), tolerancePercent: toleranceOf(letter, unit), doubts };
+function isUnit(hint: PartKind | Unit | null): hint is Unit {
+  return hint !== null && UNIT_SET.has(hint);
 }
 
-/** An ohm sign wins over the kind (a ferrite bead is given in ohms); a prefix that the unit never has gives null. */
-function unitFor(said: Unit | null, prefix: string, home: Unit | null): Unit | null {
-  if (said !== null) {
-    if (said === 'farad' && home === 'ohm') return null;
-    return said;
-  }
-  if (home !== null) {
-    if ((prefix === 'R' || prefix === 'E') && home !== 'ohm') return home === 'farad' && prefix === 'R' ? 'farad' : home === 'henry' ? 'ohm' : null;
-    if ((prefix === 'p' || prefix === 'n' || prefix === 'u') && home === 'ohm') return null;
-    if ((prefix === 'k' || prefix === 'K' || prefix === 'G') && home === 'farad') return null;
-    return home;
-  }
-  if (prefix === 'R' || prefix === 'k' || prefix === 'K' || prefix === 'G') return 'ohm';
-  if (prefix === 'p' || prefix === 'n' || prefix === 'u') return 'farad';
-  if (prefix === 'M') return 'ohm';
-  return null;
+/** `1E+05` and `4.7e-06`: what spreadsheets make of numbers. Without a sign, a capital E is the decimal point of ohms. */
+function readExponent({ text, home }: Context): ReadQuantity | null {
+  const form = /^(\d+(?:[.,]\d+)?)(?:[eE]([+-]\d{1,2})|e(\d{1,2}))$/.exec(text);
+  if (form === null || home === null) return null;
+  return finished(
+    fromDecimal(`${(form[1] ?? '').replace(',', '.')}e${form[2] ?? form[3] ?? '0'}`, home),
+    undefined,
+    [],
+  );
 }
 
-function powerOf(prefix: string, unit: Unit, decimal: string, text: string, kind: PartKind | null): { power: number | null; doubts: Doubt[] } {
-  // People type m for mega on resistors; milliohms are shunts and rare in the trade (common practice).
-  if (prefix === 'm' && unit === 'ohm') {
-    const mega = scaled(decimal, 6, unit);
-    const milli = scaled(decimal, -3, unit);
-    const ask: Doubt = { code: 'mega-or-milli', ask: `“${text}” on a ${kind ?? 'resistor'}: milliohm, or mega as people often type it?`, options: [printQuantity(mega), printQuantity(milli)] };
-    return { power: 6, doubts: [ask] };
-  }
-  if (prefix === 'M' && unit === 'farad') return { power: -6, doubts: [{ code: 'micro-or-milli', ask: `“${text}” on a capacitor: microfarad?`, options: [printQuantity(scaled(decimal, -6, unit)), printQuantity(scaled(decimal, -3, unit))] }] };
-  if (prefix === 'm' && unit === 'farad' && Number(decimal) >= 1) {
-    return { power: -3, doubts: [{ code: 'micro-or-milli', ask: `“${text}” on a capacitor: millifarad as written, or microfarad?`, options: [printQuantity(scaled(decimal, -6, unit)), printQuantity(scaled(decimal, -3, unit))] }] };
-  }
-  // A body mark: R is the decimal point of picofarads (IEC 60062).
-  if (prefix === 'R' && unit === 'farad') return { power: -12, doubts: [] };
-  const power = POWERS[prefix];
-  return { power: power ?? null, doubts: [] };
+/** `104K`, `473J`, `220K` on a capacitor: the code with its tolerance letter, as printed on the part. */
+function readMarkedCode({ text, home }: Context): ReadQuantity | null {
+  const form = home === 'farad' ? /^([1-9]\d)([0-689])([BCDFGHJKMZ])$/.exec(text) : null;
+  if (form === null) return null;
+  const [, figures = '', last = '', letter = ''] = form;
+  const code = readDigitCode(figures + last, -12, 'farad');
+  if (code === null) return null;
+  if (last !== '0') return finished(code, letter, []);
+  if (letter === 'F' || letter === 'M') return null;
+  const others =
+    letter === 'K' ? [code, scaled(figures + last, -9, 'farad')] : [code, scaled(figures + last, -12, 'farad')];
+  return finished(code, letter, [
+    doubtBetween('code-or-number', text, 'The code printed on the part, or a plain number?', others),
+  ]);
 }
 
-function scaled(decimal: string, power: number, unit: Unit): Quantity {
-  const base = fromDecimal(decimal, unit);
-  return quantity(base.significand, base.exponent + power, unit);
+const PLAIN = /^([\d.,' ]*\d[.,]?)\s?([A-Za-zΩ]*)\s?([BCDFGJKMZ])?$/;
+const TOLERANCE_END = /[BCDFGJKMZ]$/;
+
+/** `4.7 kΩ`, `100nF`, `10 K`, `0.1u`, `22.0uF`, `4700`, `10kJ`, `100 nF J`. */
+function readPlain(context: Context): ReadQuantity | null {
+  const form = PLAIN.exec(context.text);
+  const number = form === null ? null : readNumber((form[1] ?? '').trim());
+  if (form === null || number === null) return null;
+  const [, , word = '', apart] = form;
+  if (word === '' && apart === undefined) return readBare(context, number, undefined);
+  const whole = readUnitWord(word === '' ? (apart ?? '') : word, context.home);
+  if (whole !== null) return withUnit(context, number, whole, word === '' ? undefined : apart);
+  if (word === '') return readKiloOnCapacitor(context, number.decimal, apart ?? '');
+  if (apart === undefined && TOLERANCE_END.test(word)) {
+    const letter = word.slice(-1);
+    const unit = word.length === 1 ? null : readUnitWord(word.slice(0, -1), context.home);
+    if (unit !== null) return withUnit(context, number, unit, letter);
+  }
+  return readKiloOnCapacitor(context, number.decimal, word);
 }
 
-/** `104`, `.1`, `100`, `1000`, `4.7` on a capacitor, with nothing beside it. */
-function readBareCapacitance(number: string, letter: string | undefined, text: string): ReadQuantity | null {
-  const code = DIGIT_CODE.exec(number);
-  if (code && Number(code[2]) !== 0 && Number(code[2]) !== 7) {
-    const exponent = Number(code[2]);
-    // EIA: 8 stands for ×0.01 and 9 for ×0.1.
-    const power = exponent === 8 ? -2 : exponent === 9 ? -1 : exponent;
-    return { quantity: quantity(Number(code[1]), power - 12, 'farad'), tolerancePercent: letter === undefined ? null : (TOLERANCES[letter] ?? null), doubts: [] };
-  }
-  const decimal = plainNumber(number);
-  if (decimal === null) return null;
-  if (Number(decimal) === 0) return null;
-  if (decimal.includes('.') || Number(decimal) < 10) {
-    const micro = scaled(decimal, -6, 'farad');
-    return { quantity: micro, tolerancePercent: null, doubts: [{ code: 'bare-capacitance', ask: `“${text}” on a capacitor has no unit: microfarad, as on a schematic?`, options: [printQuantity(micro), printQuantity(scaled(decimal, -12, 'farad'))] }] };
-  }
-  const pico = scaled(decimal, -12, 'farad');
-  return { quantity: pico, tolerancePercent: null, doubts: [{ code: 'bare-capacitance', ask: `“${text}” on a capacitor has no unit: picofarad, as on a schematic?`, options: [printQuantity(pico), printQuantity(scaled(decimal, -6, 'farad'))] }] };
+function readBare(
+  { text, home, codesUsual }: Context,
+  number: ReadNumber,
+  letter: string | undefined,
+): ReadQuantity | null {
+  if (home === null) return null;
+  const bare = readBareNumber(number, text, home === 'ohm' && codesUsual ? 'trimmer' : home);
+  return bare === null ? null : finished(bare.quantity, letter, bare.doubts);
 }
 
-function readCoded(text: string, kind: PartKind | null, home: Unit | null): ReadQuantity | null {
-  const form = CODED.exec(text);
-  if (!form) return null;
-  const [, whole = '', prefix = '', fraction = '', symbol, letter] = form;
-  const said = symbol === undefined ? null : (UNIT_SYMBOLS.find(([pattern]) => pattern.test(symbol))?.[1] ?? null);
-  const unit = unitFor(said, prefix, home);
-  if (unit === null) return null;
-  // A bare E12 is no value; 4E7 is (E informal for R).
-  if (prefix === 'E' && (whole === '' || unit !== 'ohm')) return null;
+function withUnit(
+  { text }: Context,
+  number: ReadNumber,
+  word: UnitWord,
+  letter: string | undefined,
+): ReadQuantity | null {
+  const { unit } = word;
+  if (Number(number.decimal) === 0 && unit !== 'ohm') return null;
+  const read = scaled(number.decimal, word.exponent, unit);
+  if (number.asThousands !== null && maybeThousands(word, number)) {
+    const thousands = scaled(number.asThousands, word.exponent, unit);
+    return finished(thousands, letter, [
+      doubtBetween('thousands-or-decimal', text, 'Thousands, or a decimal mark?', [thousands, read]),
+    ]);
+  }
+  if (word.otherExponent !== null) {
+    const other = scaled(number.decimal, word.otherExponent, unit);
+    return finished(read, letter, [unit === 'ohm' ? megaOrMilli(text, read, other) : microOrMilli(text, read, other)]);
+  }
+  return finished(read, letter, []);
+}
+
+/** Nobody writes 4,700 kΩ for 4.7 MΩ, nor thousands of megahertz; thousands of pF, µF and ohms are common. */
+function maybeThousands({ unit, exponent }: UnitWord, { separator }: ReadNumber): boolean {
+  if (unit === 'hertz' || exponent >= 3 || exponent === -3) return false;
+  return separator === ',' || exponent === 0 || exponent === -12;
+}
+
+function megaOrMilli(text: string, mega: Quantity, milli: Quantity): Doubt {
+  return doubtBetween('mega-or-milli', text, 'Milliohm, or mega as people often type it?', [mega, milli]);
+}
+
+function microOrMilli(text: string, read: Quantity, other: Quantity): Doubt {
+  return doubtBetween('micro-or-milli', text, 'Microfarad, as old drawings write it, or thousands of microfarads?', [
+    read,
+    other,
+  ]);
+}
+
+/** `10k` on a capacitor: kilo-picofarad on old European drawings, or a resistor in the wrong row. */
+function readKiloOnCapacitor({ text, home }: Context, decimal: string, word: string): ReadQuantity | null {
+  if (home !== 'farad' || (word !== 'k' && word !== 'K') || Number(decimal) === 0) return null;
+  const nano = scaled(decimal, -9, 'farad');
+  return finished(nano, undefined, [
+    doubtBetween('kilo-on-capacitor', text, 'Thousands of picofarads, or is this a resistor?', [
+      nano,
+      scaled(decimal, 3, 'ohm'),
+    ]),
+  ]);
+}
+
+const LETTER_FOR_POINT = /^(\d{0,4})([A-Za-zΩ])(\d{1,4})\s?(ohms?|Ω|F|f|H|h|Hz|HZ|hz|V|R)?\s?([BCDFGJKMZ])?$/;
+
+/** `4k7`, `n47`, `R47`, `1M5`, `4u7F`, `2n2f`, `4E7`, `47K3`, `5V1`, with a tolerance letter after (`4K7J`). */
+function readLetterForPoint(context: Context): ReadQuantity | null {
+  const form = LETTER_FOR_POINT.exec(context.text);
+  if (form === null) return null;
+  const [, whole = '', letter = '', fraction = '', name = '', tolerance] = form;
+  if (!plausibleLetterCode(context.home, whole, letter, fraction, name)) return null;
   const decimal = `${whole === '' ? '0' : whole}.${fraction}`;
-  const { power, doubts } = powerOf(prefix, unit, decimal, text, kind);
-  if (power === null) return null;
-  return { quantity: scaled(decimal, power, unit), tolerancePercent: toleranceOf(letter, unit), doubts };
+  const word = letterAsPoint(context.home, letter, name);
+  const read =
+    word === null
+      ? readKiloOnCapacitor(context, decimal, letter)
+      : withUnit(context, { decimal, asThousands: null, separator: null }, word, tolerance);
+  if (read === null) return null;
+  if (context.home === null && whole === '' && letter === 'R') {
+    const ask = `“${context.text}”: a value, or resistor number ${fraction}?`;
+    return {
+      ...read,
+      doubts: [...read.doubts, { code: 'value-or-designator', ask, options: [printQuantity(read.quantity)] }],
+    };
+  }
+  return read;
 }
 
-/** 100N, 10U, 47P, 4U7, 100NF from lists typed in capitals; only where nothing else is meant. */
-function readUpperCoded(text: string, home: Unit | null): ReadQuantity | null {
-  const form = UPPER_CODED.exec(text) ?? /^(\d+(?:[.,]\d+)?)([PNU])()(F)?$/.exec(text);
-  if (!form) return null;
-  const [, whole = '', prefix = '', fraction = '', farad] = form;
-  if (home !== 'farad' && home !== 'henry' && farad === undefined) return null;
-  if (whole === '' && fraction === '') return null;
-  const unit: Unit = home === 'henry' && farad === undefined ? 'henry' : 'farad';
-  const decimal = fraction === '' ? plainNumber(whole) : `${whole === '' ? '0' : whole}.${fraction}`;
-  const power = POWERS[prefix.toLowerCase()];
-  if (decimal === null || power === undefined) return null;
-  return { quantity: scaled(decimal, power, unit), tolerancePercent: null, doubts: [] };
+/** Keeps `1N4148`, `2n2222`, `K3020` and `U12` from being read as values. */
+function plausibleLetterCode(
+  home: Unit | null,
+  whole: string,
+  letter: string,
+  fraction: string,
+  name: string,
+): boolean {
+  const isPoint = letter === 'R' || letter === 'r';
+  if (fraction.length > 3 && !(isPoint && whole.length <= 1)) return false;
+  if (home !== null) return !(/[nN]/.test(letter) && fraction.length > 2 && /^[12]$/.test(whole));
+  if (name !== '') return true;
+  if (whole === '' && !/[npuR]/.test(letter)) return false;
+  // Diodes and transistors registered as 1N… and 2N…: two figures or more are their number.
+  return !(letter === 'n' && /^[12]$/.test(whole) && fraction.length > 1);
 }
 
-/** 1e5 and 4.7E-06: what spreadsheets make of numbers. */
-function readExponent(text: string, home: Unit | null): ReadQuantity | null {
-  const form = EXPONENT.exec(text);
-  if (!form || home === null) return null;
-  return { quantity: fromDecimal(text, home), tolerancePercent: null, doubts: [] };
+function letterAsPoint(home: Unit | null, letter: string, name: string): UnitWord | null {
+  const point = (unit: Unit, exponent: number): UnitWord => ({ unit, exponent, named: false, otherExponent: null });
+  if (letter === 'Ω') return point('ohm', 0);
+  if (letter === 'L' && home === 'ohm') return point('ohm', -3);
+  if (/^[Rr]$/.test(letter)) {
+    // On small capacitors and inductors R is the decimal point of pF and µH (IEC 60062 and body marks).
+    if (home === 'farad') return point('farad', -12);
+    if (home === 'henry') return point('henry', -6);
+    return home === 'ohm' || (home === null && letter === 'R') ? point('ohm', 0) : null;
+  }
+  if (letter === 'V' && (home === 'volt' || home === null)) return point('volt', 0);
+  if (letter === 'F' && home === 'farad') return point('farad', 0);
+  if (letter === 'H' && home === 'henry') return point('henry', 0);
+  if (letter === 'A' && home === 'ampere') return point('ampere', 0);
+  if (letter === 'W' && home === 'watt') return point('watt', 0);
+  const named = name === '' || name === 'R' ? null : readUnitWord(letter + name, home);
+  if (named !== null) return named;
+  return name === '' || name === 'R' || name === 'V' ? readUnitWord(letter, home) : null;
 }
 
-function toleranceOf(letter: string | undefined, unit: Unit): number | null {
-  if (letter === undefined || (unit !== 'ohm' && unit !== 'farad')) return null;
-  return TOLERANCES[letter] ?? null;
+function finished(read: Quantity, letter: string | undefined, doubts: readonly Doubt[]): ReadQuantity {
+  const picofarads = read.unit === 'farad' ? toNumber(read) * 1e12 : null;
+  const takesLetter = letter !== undefined && (read.unit === 'ohm' || read.unit === 'farad' || read.unit === 'henry');
+  return { quantity: read, tolerancePercent: takesLetter ? tolerancePercentOf(letter, picofarads) : null, doubts };
 }

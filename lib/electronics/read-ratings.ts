@@ -35,8 +35,15 @@ export function readRatings(text: string): Ratings {
   return {
     tolerancePercent: percent !== null && percent >= 0.001 && percent <= 50 ? percent : null,
     ratedVolts: volts ? toFloat(volts[2]) * (volts[3] ? 1000 : 1) : null,
-    ratedWatts: fraction ? Number(fraction[2]) / Number(fraction[3]) : watts ? toFloat(watts[2]) * (watts[3] ? 0.001 : 1) : null,
+    ratedWatts: fraction
+      ? Number(fraction[2]) / Number(fraction[3])
+      : watts
+        ? toFloat(watts[2]) * (watts[3] ? 0.001 : 1)
+        : null,
     ratedAmperes: amperes ? toFloat(amperes[2]) * (amperes[3] ? 0.001 : 1) : null,
-    rest: rest.replace(/\s+/g, ' ').replace(/^[\s/,;*]+|[\s/,;*]+$/g, '').trim(),
+    rest: rest
+      .replace(/\s+/g, ' ')
+      .replace(/^[\s/,;*]+|[\s/,;*]+$/g, '')
+      .trim(),
   };
 }

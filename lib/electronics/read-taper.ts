@@ -27,7 +27,11 @@ export function readTaper(text: string, convention: TaperConvention): ReadTaper 
   const letter = (before?.[2] ?? after?.[3])?.toUpperCase() ?? null;
   const found = before ?? after;
   const value = before?.[3] ?? after?.[2];
-  const rest = found ? `${text.slice(0, found.index)} ${value ?? ''} ${text.slice(found.index + found[0].length)}`.replace(/\s+/g, ' ').trim() : text;
+  const rest = found
+    ? `${text.slice(0, found.index)} ${value ?? ''} ${text.slice(found.index + found[0].length)}`
+        .replace(/\s+/g, ' ')
+        .trim()
+    : text;
   const word = WORDS.find(([pattern]) => pattern.test(text))?.[1] ?? null;
   if (word !== null) return { taper: word, doubt: null, rest };
   if (letter === null) return { taper: null, doubt: null, rest };
@@ -39,7 +43,11 @@ export function readTaper(text: string, convention: TaperConvention): ReadTaper 
   const old = letter === 'A' ? 'linear' : 'logarithmic';
   return {
     taper: letter === 'A' ? 'letter-A' : 'letter-B',
-    doubt: { code: 'taper-convention', ask: `Taper ${letter}: ${usual} under IEC and Asian marking, ${old} on old European parts. Which is meant?`, options: [usual, old] },
+    doubt: {
+      code: 'taper-convention',
+      ask: `Taper ${letter}: ${usual} under IEC and Asian marking, ${old} on old European parts. Which is meant?`,
+      options: [usual, old],
+    },
     rest,
   };
 }
