@@ -48,7 +48,7 @@ export function LookDrawings() {
           <ChipDrawing kind="capacitor" mark={null} name="chip without a mark" />
           <IcDrawing pins={8} mark="TL072CP" name="IC" />
           <IcDrawing pins={14} mark="CD4093BE" name="IC" />
-          <IcDrawing pins={28} mark="SSI2144" name="IC" />
+          <IcDrawing pins={24} mark="CD4067BE" name="IC" />
           <To92Drawing leads="EBC" mark="2N3904" name="TO-92, E B C" />
           <To92Drawing leads={null} mark="J112" name="TO-92, leads unknown" />
           <DiodeDrawing body="glass" name="glass diode" />

@@ -30,7 +30,7 @@ export interface DrawnBin {
 export function CabinetDrawing({ label, columns, bins }: { readonly label: string; readonly columns: number; readonly bins: readonly DrawnBin[] }) {
   const inOrder = [...bins].sort((a, b) => a.row - b.row || a.column - b.column);
   return (
-    <div role="region" aria-label={label} tabIndex={0} className="max-w-full overflow-x-auto p-0.5">
+    <div role="region" aria-label={label} tabIndex={0} className="max-w-full overflow-x-auto p-1">
       <ul className="grid gap-[3px]" style={{ gridTemplateColumns: `repeat(${columns}, minmax(74px, 84px))` }}>
         {inOrder.map((bin) => (
           <li key={bin.code} style={{ gridColumn: `${bin.column} / span ${bin.span ?? 1}`, gridRow: bin.row }}>
@@ -45,13 +45,13 @@ export function CabinetDrawing({ label, columns, bins }: { readonly label: strin
 function Drawer({ bin }: { readonly bin: DrawnBin }) {
   const lit = bin.stop !== undefined && bin.stop !== null;
   const share = bin.fill === null ? 0 : Math.min(1, Math.max(0, bin.fill));
-  const edge = bin.selected ? 'border-ink outline-1 outline-ink' : lit ? 'border-copper outline-1 outline-copper' : 'border-rule hover:border-copper';
+  const edge = bin.selected ? 'border-2 border-ink' : lit ? 'border-2 border-copper' : 'border border-rule hover:border-copper';
   return (
     <Link
       href={bin.href}
       aria-label={binName(bin)}
       title={bin.contentName ?? bin.content ?? bin.code}
-      className={`relative block h-[76px] overflow-hidden border outline-solid ${edge} ${lit ? 'bg-copper-wash' : 'bg-sheet'}`}
+      className={`relative block h-[76px] overflow-hidden ${edge} ${lit ? 'bg-copper-wash' : 'bg-sheet'}`}
     >
       {/* The level stands in the lower part only, under the words, so that its edge never strikes through them. */}
       <span aria-hidden className="absolute inset-x-0 bottom-0 flex h-10 items-end">

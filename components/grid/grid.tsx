@@ -164,7 +164,9 @@ export function Grid<Row extends object>(props: GridProps<Row>) {
 
   if (nothing || (source === undefined && (rows?.length ?? 0) === 0)) return <>{empty}</>;
 
-  const frame = height === 'auto' ? undefined : { height: height === 'fill' ? 'max(20rem, calc(100dvh - 15rem))' : height };
+  // Keeps the page from jumping when the grid arrives after the words round it.
+  const waiting = { minHeight: 36 + (rows?.length ?? 0) * ROW_HEIGHT_PX };
+  const frame = height === 'auto' ? (api === null ? waiting : undefined) : { height: height === 'fill' ? 'max(20rem, calc(100dvh - 15rem))' : height };
   return (
     <div className="grid gap-3">
       {failed ? (

@@ -16,7 +16,7 @@ export interface AreaLink {
 export function AreaLinks({ label, links }: { readonly label: string; readonly links: readonly AreaLink[] }) {
   const pathname = usePathname();
   return (
-    <nav aria-label={label} className="mb-3 print:hidden">
+    <nav aria-label={label} className="-mt-2 mb-1.5 print:hidden">
       <ul className="-ml-2 flex flex-wrap gap-x-1">
         {links.map((link) => {
           const here = link.exact ? pathname === link.href : isWithin(pathname, link.href);

@@ -18,14 +18,14 @@ export async function fetchSuggestions(query: string, signal: AbortSignal): Prom
   return readSuggestions(body);
 }
 
-/** Takes `{ items: [...] }`, leaves out what is misshapen and any address that does not stay in this application. */
+/** Takes `{ hits: [...] }`, leaves out what is misshapen and any address that does not stay in this application. */
 export function readSuggestions(body: unknown): readonly FindSuggestion[] {
-  const items = isRecord(body) ? body.items : null;
+  const items = isRecord(body) ? body.hits : null;
   if (!Array.isArray(items)) return [];
   return items.flatMap((item: unknown) => {
-    if (!isRecord(item) || typeof item.kind !== 'string' || typeof item.label !== 'string' || typeof item.href !== 'string') return [];
+    if (!isRecord(item) || typeof item.what !== 'string' || typeof item.title !== 'string' || typeof item.href !== 'string') return [];
     if (!/^\/(?![/\\])/.test(item.href)) return [];
-    return [{ kind: item.kind, label: item.label, href: item.href, detail: typeof item.detail === 'string' ? item.detail : null }];
+    return [{ kind: item.what, label: item.title, href: item.href, detail: typeof item.detail === 'string' ? item.detail : null }];
   });
 }
 

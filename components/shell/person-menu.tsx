@@ -51,7 +51,7 @@ export function PersonMenu({
   return (
     <div
       ref={frame}
-      className="relative flex"
+      className="relative flex max-md:items-center"
       onKeyDown={(event) => {
         if (event.key !== 'Escape' || !open) return;
         setOpen(false);
@@ -69,8 +69,8 @@ export function PersonMenu({
         onClick={() => setOpen((before) => !before)}
         className="flex items-center gap-3 px-4 hover:bg-copper-wash max-md:size-11 max-md:justify-center max-md:px-0"
       >
-        <span className="max-md:sr-only">
-          {first === undefined ? null : <span className="text-soft max-lg:sr-only">{capital(first)}{person.roles.length > 1 ? ` +${person.roles.length - 1}` : ''} </span>}
+        <span className="flex items-baseline gap-3 max-md:sr-only">
+          {first === undefined ? null : <span className="text-soft max-lg:sr-only">{capital(first)}{person.roles.length > 1 ? ` +${person.roles.length - 1}` : ''}</span>}
           <span className="font-mono text-small">{person.name}</span>
         </span>
         <Glyph name="down" size={12} className="text-soft max-md:hidden" />

@@ -23,6 +23,7 @@ const GLYPHS = {
     </g>
   ),
   refused: <path d="M3.4 3.4l9.2 9.2M12.6 3.4l-9.2 9.2" {...STROKE} strokeWidth={1.9} />,
+  note: <path d="M2.5 4h11M2.5 8h11M2.5 12h6" {...STROKE} />,
   look: (
     <g {...STROKE}>
       <path d="M8 1.9L15 14H1z" strokeLinejoin="round" />

@@ -8,7 +8,7 @@ const TONES: Readonly<Record<NoticeTone, { readonly box: string; readonly ink: s
   good: { box: 'border-mask bg-mask-wash', ink: 'text-mask', glyph: 'same', spoken: 'Good:' },
   look: { box: 'border-amber bg-amber-wash', ink: 'text-amber', glyph: 'look', spoken: 'Look:' },
   stop: { box: 'border-oxide bg-oxide-wash', ink: 'text-oxide', glyph: 'refused', spoken: 'Stop:' },
-  plain: { box: 'border-rule bg-sheet', ink: 'text-ink', glyph: 'ask', spoken: '' },
+  plain: { box: 'border-rule bg-sheet', ink: 'text-soft', glyph: 'note', spoken: '' },
 };
 
 /** `announce` where it appears after the page was read: a stop interrupts, the others wait for a pause. */

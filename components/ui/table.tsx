@@ -7,7 +7,7 @@ import type { ReactNode } from 'react';
 
 const BLOCKS =
   'max-sm:[&_tbody]:block max-sm:[&_tr]:block max-sm:[&_td]:block max-sm:[&_th[scope=row]]:block max-sm:[&_thead]:sr-only ' +
-  'max-sm:[&_tbody_tr]:py-2 max-sm:[&_tbody_td]:!py-0.5 max-sm:[&_tbody_th]:!py-0.5 max-sm:[&_td]:!text-left max-sm:[&_td]:!h-auto max-sm:[&_tbody_td]:!border-0 max-sm:[&_tbody_th]:!border-0 ' +
+  'max-sm:[&_tbody_tr]:py-2 max-sm:[&_tbody_td]:!py-0.5 max-sm:[&_tbody_th]:!py-0.5 max-sm:[&_td]:!text-left max-sm:[&_td]:!h-auto max-sm:[&_th]:!h-auto max-sm:[&_tbody_td]:!border-0 max-sm:[&_tbody_th]:!border-0 ' +
   'max-sm:[&_tbody_tr]:border-b max-sm:[&_tbody_tr]:border-hair ' +
   'max-sm:[&_td[data-label]]:grid max-sm:[&_td[data-label]]:grid-cols-[7rem_minmax(0,1fr)] max-sm:[&_td[data-label]]:gap-x-3 ' +
   'max-sm:[&_td[data-label]]:before:content-[attr(data-label)] max-sm:[&_td[data-label]]:before:font-sans max-sm:[&_td[data-label]]:before:text-small max-sm:[&_td[data-label]]:before:text-soft';
