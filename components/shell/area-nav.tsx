@@ -10,7 +10,7 @@ export function AreaNav() {
     <nav aria-label="Areas" className="max-md:order-last max-md:w-full max-md:border-t max-md:border-rule">
       <ul className="flex h-full max-md:justify-between">
         {AREAS.map((area) => {
-          const here = isWithin(pathname, area.href);
+          const here = area.pages.some((page) => isWithin(pathname, page));
           return (
             <li key={area.href} className="flex">
               <Link

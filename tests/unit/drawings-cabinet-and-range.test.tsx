@@ -87,12 +87,12 @@ describe('a page of rows', () => {
 
 describe('a suggestion of the one field', () => {
   it('is dropped where its address would leave the application', () => {
-    const item = { kind: 'part', label: 'TL072CP', detail: null };
+    const hit = { what: 'part', title: 'TL072CP', detail: '17 free' };
     const hrefs = ['/stores/parts/1', '//elsewhere.test', '/\\elsewhere.test', 'https://elsewhere.test', 'javascript:alert(1)'];
-    expect(readSuggestions({ items: hrefs.map((href) => ({ ...item, href })) }).map(({ href }) => href)).toEqual(['/stores/parts/1']);
+    expect(readSuggestions({ hits: hrefs.map((href) => ({ ...hit, href })) }).map(({ href }) => href)).toEqual(['/stores/parts/1']);
   });
 
-  it.each([null, [], { items: 'none' }, { items: [{ label: 1 }] }])('is nothing where the answer is misshapen: %j', (body) => {
+  it.each([null, [], { hits: 'none' }, { hits: [{ title: 1 }] }])('is nothing where the answer is misshapen: %j', (body) => {
     expect(readSuggestions(body)).toEqual([]);
   });
 });
