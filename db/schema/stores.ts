@@ -46,6 +46,8 @@ export const bin = pgTable(
     /** Set by a failed pick or the count plan; cleared by a posted count. */
     countDueSince: at('count_due_since'),
     countDueReason: text('count_due_reason'),
+    /** A pick found fewer here than the ledger says: reserving takes from it last until a posted count clears it. */
+    doubtful: boolean('doubtful').notNull().default(false),
     retiredAt: at('retired_at'),
     createdAt: createdAt(),
   },
@@ -128,6 +130,9 @@ export const movement = pgTable(
     uniqueIndex('movement_by_sequence').on(t.workshopId, t.sequence),
     index('movement_by_lot').on(t.workshopId, t.lotId, t.sequence),
     index('movement_by_part').on(t.workshopId, t.partId, t.sequence),
+    index('movement_by_bin').on(t.workshopId, t.binId, t.sequence),
+    // The ledger by dates; `at` is the transaction's start, so it nearly follows the sequence but can't replace it.
+    index('movement_by_time').on(t.workshopId, t.at),
     index('movement_by_reference').on(t.workshopId, t.referenceType, t.referenceId),
     check('movement_kind', sql`${t.kind} in ('receipt', 'pick', 'return', 'move', 'count', 'scrap', 'opening')`),
     check('movement_moves', sql`${t.quantity} <> 0`),
@@ -184,6 +189,30 @@ export const stockCount = pgTable(
     primaryKey({ columns: [t.workshopId, t.id] }),
     uniqueIndex('stock_count_number_once').on(t.workshopId, t.number),
     check('stock_count_state', sql`${t.state} in ('open', 'counted', 'recount', 'posted', 'abandoned')`),
+    ownWorkshopOnly(),
+  ],
+).enableRLS();
+
+/**
+ * The bins of a count, also those the ledger thinks empty: somebody must look into them as well. A bin is in at most one
+ * count under way (openCount holds its row lock), or one variance would be booked twice.
+ */
+export const countBin = pgTable(
+  'count_bin',
+  {
+    workshopId: workshopId(),
+    countId: uuid('count_id').notNull(),
+    binId: uuid('bin_id').notNull(),
+    /** When somebody said that nothing lies in it beside what was entered. */
+    lookedAt: at('looked_at'),
+    lookedBy: uuid('looked_by'),
+  },
+  (t) => [
+    primaryKey({ columns: [t.workshopId, t.countId, t.binId] }),
+    foreignKey({ columns: [t.workshopId, t.countId], foreignColumns: [stockCount.workshopId, stockCount.id] }),
+    foreignKey({ columns: [t.workshopId, t.binId], foreignColumns: [bin.workshopId, bin.id] }),
+    index('count_bin_by_bin').on(t.workshopId, t.binId),
+    check('count_bin_looked', sql`(${t.lookedAt} is null) = (${t.lookedBy} is null)`),
     ownWorkshopOnly(),
   ],
 ).enableRLS();
