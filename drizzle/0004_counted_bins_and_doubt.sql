@@ -17,5 +17,4 @@ CREATE INDEX "movement_by_bin" ON "movement" USING btree ("workshop_id","bin_id"
 CREATE INDEX "movement_by_time" ON "movement" USING btree ("workshop_id","at");--> statement-breakpoint
 CREATE POLICY "own_workshop" ON "count_bin" AS PERMISSIVE FOR ALL TO "ohmstead_app" USING (workshop_id = nullif(current_setting('app.workshop_id', true), '')::uuid) WITH CHECK (workshop_id = nullif(current_setting('app.workshop_id', true), '')::uuid);--> statement-breakpoint
 ALTER TABLE "count_bin" FORCE ROW LEVEL SECURITY;--> statement-breakpoint
-GRANT SELECT, INSERT, UPDATE, DELETE ON "count_bin" TO ohmstead_app;--> statement-breakpoint
-INSERT INTO "count_bin" ("workshop_id", "count_id", "bin_id") SELECT DISTINCT "workshop_id", "count_id", "bin_id" FROM "count_entry";
+GRANT SELECT, INSERT, UPDATE, DELETE ON "count_bin" TO ohmstead_app;
