@@ -55,7 +55,7 @@ function Drawer({ bin }: { readonly bin: DrawnBin }) {
     >
       {/* The level stands in the lower part only, under the words, so that its edge never strikes through them. */}
       <span aria-hidden className="absolute inset-x-0 bottom-0 flex h-10 items-end">
-        <span className={`w-full ${lit ? 'bg-copper/30' : 'bg-rule/70'}`} style={{ height: `${share * 100}%` }} />
+        <span className={`w-full ${lit ? 'bg-copper/30' : 'bg-soft/20'}`} style={{ height: `${share * 100}%` }} />
       </span>
       <span aria-hidden className="absolute inset-x-0 bottom-3.5 flex justify-center">
         <span className="h-1 w-6 bg-soft" />

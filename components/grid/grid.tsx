@@ -25,7 +25,7 @@ import {
   TextFilterModule,
 } from 'ag-grid-community';
 import { AgGridReact } from 'ag-grid-react';
-import { type ReactNode, type Ref, useEffect, useImperativeHandle, useMemo, useRef, useState, useSyncExternalStore } from 'react';
+import { type ReactNode, type Ref, useEffect, useImperativeHandle, useMemo, useState, useSyncExternalStore } from 'react';
 import { Button } from '@/components/ui/button';
 import { Notice } from '@/components/ui/notice';
 import { type GridSource, gridRequest } from './grid-request';
@@ -93,10 +93,11 @@ export function Grid<Row extends object>(props: GridProps<Row>) {
   const { rows, source } = props;
   const height = props.height ?? (source === undefined && (rows?.length ?? 0) <= 60 ? 'auto' : 'fill');
   const phone = usePhone();
+  const rowHeight = phone ? PHONE_ROW_HEIGHT_PX : dense ? DENSE_ROW_HEIGHT_PX : ROW_HEIGHT_PX;
   const [api, setApi] = useState<GridApi<Row> | null>(null);
   const [failed, setFailed] = useState(false);
-  const [nothing, setNothing] = useState(false);
-  const pending = useRef(new Set<AbortController>());
+  // The source that was found to have nothing at all; another source is asked anew.
+  const [emptySource, setEmptySource] = useState<GridSource<Row> | null>(null);
 
   useEffect(() => {
     api?.setGridAriaProperty('label', label);
@@ -119,7 +120,7 @@ export function Grid<Row extends object>(props: GridProps<Row>) {
 
   const datasource = useMemo<IDatasource | undefined>(() => {
     if (source === undefined) return undefined;
-    const controllers = pending.current;
+    const controllers = new Set<AbortController>();
     return {
       getRows(params) {
         const stop = new AbortController();
@@ -135,7 +136,7 @@ export function Grid<Row extends object>(props: GridProps<Row>) {
               setFailed(false);
               if (request.start > 0) return;
               const none = page.rows.length === 0;
-              setNothing(none && request.filters.length === 0);
+              if (none && request.filters.length === 0) setEmptySource(() => source);
               if (none) params.api.showNoRowsOverlay();
               else params.api.hideOverlay();
             },
@@ -156,16 +157,16 @@ export function Grid<Row extends object>(props: GridProps<Row>) {
   const definitions = useMemo(() => [...columns], [columns]);
   const data = useMemo(() => (rows === undefined ? undefined : [...rows]), [rows]);
   const defaults = useMemo<ColDef<Row>>(
-    () => ({ sortable: true, resizable: true, suppressMovable: true, wrapText: wrap, autoHeight: wrap, suppressHeaderMenuButton: true, filterParams: { maxNumConditions: 1 } }),
-    [wrap],
+    () => ({ sortable: true, resizable: true, suppressMovable: true, wrapText: wrap, autoHeight: wrap, suppressHeaderMenuButton: true, suppressHeaderFilterButton: phone, filterParams: { maxNumConditions: 1 } }),
+    [wrap, phone],
   );
   // A style element that the grid adds must bear the page's nonce where a Content-Security-Policy asks for one.
   const [nonce] = useState(() => (typeof document === 'undefined' ? '' : (document.querySelector<HTMLElement>('script[nonce]')?.nonce ?? '')));
 
-  if (nothing || (source === undefined && (rows?.length ?? 0) === 0)) return <>{empty}</>;
+  if ((source !== undefined && emptySource === source) || (source === undefined && (rows?.length ?? 0) === 0)) return <>{empty}</>;
 
   // Keeps the page from jumping when the grid arrives after the words round it.
-  const waiting = { minHeight: 36 + (rows?.length ?? 0) * ROW_HEIGHT_PX };
+  const waiting = { minHeight: 36 + (rows?.length ?? 0) * rowHeight };
   const frame = height === 'auto' ? (api === null ? waiting : undefined) : { height: height === 'fill' ? 'max(20rem, calc(100dvh - 15rem))' : height };
   return (
     <div className="grid gap-3">
@@ -179,7 +180,7 @@ export function Grid<Row extends object>(props: GridProps<Row>) {
           What you see is what arrived before.
         </Notice>
       ) : null}
-      <div className="grid-frame min-w-0" style={frame}>
+      <div className={`grid-frame grid-rows-of-${rowHeight} min-w-0`} style={frame}>
         <AgGridReact<Row>
           theme={gridTheme}
           {...(nonce === '' ? {} : { styleNonce: nonce })}
@@ -190,7 +191,7 @@ export function Grid<Row extends object>(props: GridProps<Row>) {
             : { rowModelType: 'infinite' as const, datasource, cacheBlockSize: BLOCK_ROWS, maxBlocksInCache: 20, infiniteInitialRowCount: 1 })}
           getRowId={({ data: row }) => rowId(row)}
           domLayout={height === 'auto' ? 'autoHeight' : 'normal'}
-          rowHeight={phone ? PHONE_ROW_HEIGHT_PX : dense ? DENSE_ROW_HEIGHT_PX : ROW_HEIGHT_PX}
+          rowHeight={rowHeight}
           // Reading order must be the order on the screen, for screen readers and for copying text.
           ensureDomOrder
           enableCellTextSelection

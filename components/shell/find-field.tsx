@@ -35,10 +35,7 @@ export function FindField({ fetcher = fetchSuggestions, initial = '' }: { readon
 
   useEffect(() => {
     const asked = query.trim();
-    if (!open || asked === '') {
-      setFound([]);
-      return undefined;
-    }
+    if (!open || asked === '') return undefined;
     const stop = new AbortController();
     const timer = setTimeout(() => {
       fetcher(asked, stop.signal).then(
@@ -57,7 +54,7 @@ export function FindField({ fetcher = fetchSuggestions, initial = '' }: { readon
     };
   }, [query, open, fetcher]);
 
-  const showing = open && found.length > 0;
+  const showing = open && query.trim() !== '' && found.length > 0;
 
   function goTo(href: string) {
     setOpen(false);
@@ -105,6 +102,7 @@ export function FindField({ fetcher = fetchSuggestions, initial = '' }: { readon
         className="peer h-[34px] w-full border border-edge bg-sheet pr-9 pl-9 text-ink max-md:h-11 max-md:pr-2.5 max-sm:text-[1rem]"
         onChange={(event) => {
           setQuery(event.target.value);
+          setActive(-1);
           setOpen(true);
         }}
         onFocus={() => setOpen(true)}
