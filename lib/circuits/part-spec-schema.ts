@@ -22,9 +22,9 @@ export const partSpecSchema = z.object({
   package: z.string().nullable(),
   partNumber: z.string().nullable(),
   family: z.string().nullable(),
-  alternatives: z.array(z.string()),
+  alternatives: z.array(z.string()).readonly(),
   fitted: z.boolean(),
-  doubts: z.array(z.object({ code: z.string(), ask: z.string(), options: z.array(z.string()) })),
+  doubts: z.array(z.object({ code: z.string(), ask: z.string(), options: z.array(z.string()).readonly() })).readonly(),
   text: z.string(),
 });
 

@@ -50,10 +50,10 @@ export interface Ranked {
   readonly outcomes: readonly string[];
 }
 
-/** Best first: what was taken before (unless refused now), verdict, enough on the shelf, anything on the shelf, fewest remarks, nearest value, id. */
+/** Best first: what was taken before (where it is on the shelf and not refused here), verdict, enough on the shelf, anything on the shelf, fewest remarks, nearest value, id. */
 export function compareRank(needed: number) {
   const key = (one: Ranked): readonly number[] => [
-    one.remembered && one.verdict !== 'refused' ? 0 : 1,
+    one.remembered && one.verdict !== 'refused' && one.free > 0 ? 0 : 1,
     ORDER[one.verdict],
     one.free >= needed && one.free > 0 ? 0 : one.free > 0 ? 1 : 2,
     Math.abs(one.deviationPercent ?? 0),

@@ -1,0 +1,4 @@
+import { route } from '@/lib/api/route';
+import { assessPart } from '@/lib/circuits/assess-part';
+
+export const POST = route(assessPart);

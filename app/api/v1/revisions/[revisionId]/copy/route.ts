@@ -1,0 +1,4 @@
+import { route } from '@/lib/api/route';
+import { copyRevision } from '@/lib/circuits/copy-revision';
+
+export const POST = route(copyRevision);

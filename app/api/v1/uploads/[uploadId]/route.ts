@@ -1,0 +1,4 @@
+import { route } from '@/lib/api/route';
+import { getUpload } from '@/lib/circuits/get-upload';
+
+export const GET = route(getUpload);
