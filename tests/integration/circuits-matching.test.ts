@@ -12,24 +12,23 @@ import { lineCandidates } from '@/lib/circuits/line-candidates';
 import { listLines } from '@/lib/circuits/list-lines';
 import { matchRevision, matchStockChanged } from '@/lib/circuits/match-revision';
 import { standIn } from '@/lib/circuits/stand-in';
-import { type Bins, makeBins, makePart, stock } from '../support/shelf';
 import { act, makeWorkshop, type TestWorkshop } from '../support/workshop';
+import { makeShelf, type Shelf } from './circuits-shelf';
 
 let shop: TestWorkshop;
 let other: TestWorkshop;
-let bins: Bins;
+let put: Shelf;
 const part: Record<string, string> = {};
 
-async function shelf(text: string, quantity: number, bin = 'A-01-1'): Promise<string> {
-  const id = await makePart(shop, text);
+async function shelf(text: string, quantity: number, bin?: string): Promise<string> {
+  const id = await put(text, quantity, bin);
   part[text] = id;
-  if (quantity > 0) await stock(shop, id, bins[bin], quantity);
   return id;
 }
 
 beforeAll(async () => {
   [shop, other] = [await makeWorkshop('Shelf'), await makeWorkshop('Elsewhere')];
-  bins = await makeBins(shop);
+  put = await makeShelf(shop);
   await shelf('CD4011BE', 24, 'A-02-1');
   await shelf('HEF4093BP', 6, 'A-02-2');
   await shelf('CD4093BE', 0);
