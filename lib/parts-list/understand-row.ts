@@ -1,0 +1,248 @@
+/** One row under known columns to a line, a row that is no part, or a line with questions. */
+import { familyOf } from '@/lib/electronics/families/family-of';
+import { PART_KINDS, type PartKind, type PartSpec } from '@/lib/electronics/part-spec';
+import { firstOf, KIND_WORDS, NOT_FITTED } from '@/lib/electronics/part-words';
+import { readPartText } from '@/lib/electronics/read-part-text';
+import type { TaperConvention } from '@/lib/electronics/read-taper';
+import { toNumber } from '@/lib/electronics/quantity';
+import type { Column, Segment } from './columns';
+import { expandDesignators, kindOfDesignator } from './designators';
+import type { Role } from './heading-words';
+import { columnLetters, ReadingStopped, type TableRow } from './table';
+
+export interface PartsListLine {
+  readonly row: number;
+  readonly sheet?: string;
+  readonly designators: readonly string[];
+  /** As the list states it; null where it states none. */
+  readonly quantity: number | null;
+  readonly fitted: boolean;
+  readonly kind: PartKind;
+  readonly value: { readonly si: number; readonly unit: string } | null;
+  readonly partNumber: string | null;
+  readonly alternatives: readonly string[];
+  readonly text: string;
+  readonly spec: PartSpec;
+  readonly package: string | null;
+  readonly notes: string;
+}
+export interface NotLine {
+  readonly row: number;
+  readonly sheet?: string;
+  readonly why: string;
+}
+export interface Question {
+  readonly row: number;
+  readonly sheet?: string;
+  readonly column?: string;
+  readonly code: string;
+  readonly ask: string;
+  readonly options: readonly string[];
+}
+export type Understood = { readonly line: PartsListLine; readonly questions: readonly Question[] } | { readonly notLine: NotLine };
+
+const TOTAL = /^(?:grand\s+)?(?:total|sum|summe|gesamt(?:summe)?|subtotal|somme|totale|totaal|zwischensumme|suma)\b/i;
+const ARTWORK = /^(?:outline|logo|artwork|fiducial|board outline|silkscreen|frame|\*{2,}.*)$/i;
+
+/** What one run over a list remembers: the section it is in, and texts it has read already. */
+export class RowReader {
+  private section: PartKind | null = null;
+  private readonly read = new Map<string, PartSpec>();
+  private readonly taperConvention: TaperConvention;
+  private readonly sheet: string | null;
+
+  constructor(sheet: string | null, taperConvention: TaperConvention) {
+    this.sheet = sheet;
+    this.taperConvention = taperConvention;
+  }
+
+  startSegment(): void {
+    this.section = null;
+  }
+
+  understand(row: TableRow, segment: Segment): Understood {
+    const place = this.sheet === null ? { row: row.row } : { row: row.row, sheet: this.sheet };
+    const notLine = (why: string): Understood => ({ notLine: { ...place, why } });
+    const { columns } = segment;
+    const filled = row.cells.filter((cell) => cell !== '');
+    const text = (role: Role) => columns.filter((column) => column.role === role).map((column) => row.cells[column.index] ?? '').filter((cell) => cell !== '').join(' ');
+    if (columns.length === 0) return notLine(filled.length === 1 ? 'title or note, no part' : 'above the heading, no part');
+    if (filled.some((cell) => TOTAL.test(cell)) && !columns.some((column) => column.role === 'designators' && expandDesignators(row.cells[column.index] ?? '').list.some((one) => kindOfDesignator(one) !== null))) return notLine('total, no part');
+    const cells = { designators: text('designators'), quantity: text('quantity'), value: text('value'), description: text('description'), kind: text('kind'), package: text('package'), notes: text('notes'), number: text('part-number') };
+    const hasDesignators = columns.some((column) => column.role === 'designators');
+    const section = this.sectionOf(filled, cells.designators, hasDesignators);
+    if (section !== null) return notLine(section);
+    const naming = cells.value || cells.description || cells.number || cells.kind || cells.package;
+    if (naming === '' && cells.designators === '') return notLine('no part: nothing names one');
+    if (hasDesignators && cells.designators === '' && cells.quantity === '' && filled.length <= 2) return notLine('note, no part');
+    if (cells.designators === '' && cells.quantity === '' && hasDesignators && columns.some((column) => column.role === 'quantity')) return notLine('note, no part: neither designator nor quantity');
+    if (ARTWORK.test(naming) && cells.quantity === '' && kindOfDesignator(cells.designators) === null) return notLine('artwork of the board, no part');
+    return this.line(row, segment, cells, place);
+  }
+
+  /** A row of one cell that names a kind opens a section; any other lone text is a title or a note. */
+  private sectionOf(filled: readonly string[], designators: string, hasDesignators: boolean): string | null {
+    const [only = ''] = filled;
+    if (filled.length !== 1) return null;
+    if (designators !== '' && expandDesignators(designators).list.every((one) => kindOfDesignator(one) !== null)) return null;
+    const kind = firstOf(KIND_WORDS, only);
+    if (kind !== null && only.length < 40 && !/\d/.test(only)) {
+      this.section = kind;
+      return 'section, no part';
+    }
+    return hasDesignators || /\s/.test(only) || only.length > 20 || !/\d/.test(only) ? 'title or note, no part' : null;
+  }
+
+  private line(row: TableRow, { columns }: Segment, cells: Record<'designators' | 'quantity' | 'value' | 'description' | 'kind' | 'package' | 'notes' | 'number', string>, place: { row: number; sheet?: string }): Understood {
+    const letterOf = (role: Role) => {
+      const column = columns.find((one) => one.role === role);
+      return column ? columnLetters(column.index) : undefined;
+    };
+    const questions: Question[] = [];
+    const ask = (code: string, said: string, options: readonly string[], role: Role) => {
+      const column = letterOf(role);
+      questions.push({ ...place, ...(column === undefined ? {} : { column }), code, ask: said, options });
+    };
+    const { list: designators } = expandDesignators(cells.designators);
+    const quantity = this.quantityIn(cells.quantity, place, letterOf('quantity') ?? 'A', columns);
+    const source = cells.value || cells.description || cells.number || cells.kind || cells.package;
+    const kind = this.kindOf(designators, source, cells);
+    const wholeText = [source, cells.value === '' ? '' : cells.notes, cells.value !== '' && cells.description !== source ? cells.description : ''].filter((piece) => piece !== '').join(' ');
+    const main = this.specOf(source, kind);
+    const around = wholeText === source ? main : this.specOf(wholeText, kind);
+    const spec = merged(main, around, cells.package, kind);
+    const fitted = spec.fitted && this.isFitted(columns, row, cells);
+    const number = cells.number !== '' && /\d/.test(cells.number) && !/^\d{1,3}$/.test(cells.number) ? cells.number : null;
+    const ownNumber = numberFor(kind, main, source) ?? (main.value === null ? number : null);
+    for (const doubt of fitted ? main.doubts : []) ask(doubt.code, doubt.ask, doubt.options, 'value');
+    const named = designators.filter((one) => kindOfDesignator(one) !== null);
+    const count = named.length === designators.length ? designators.length : 0;
+    if (quantity !== null && count > 0 && quantity !== count && fitted) {
+      ask('quantity-differs', `${count === 1 ? 'One designator' : `${count} designators`} (${shorten(designators)}), but ${quantity} asked for. Which is right?`, [String(count), String(quantity)], 'quantity');
+    }
+    const value = main.value ?? (around.value && main.partNumber === null ? around.value : null);
+    const keepsValue = value !== null && !(['ic', 'transistor', 'diode', 'connector', 'hardware', 'regulator', 'switch', 'led', 'optocoupler'] as PartKind[]).includes(kind);
+    return {
+      line: {
+        ...place,
+        designators,
+        quantity,
+        fitted,
+        kind,
+        value: keepsValue ? { si: toNumber(value), unit: value.unit } : null,
+        partNumber: ownNumber,
+        alternatives: spec.alternatives,
+        text: source,
+        spec: { ...spec, kind, value: keepsValue ? value : null, partNumber: ownNumber, fitted, family: spec.family ?? (ownNumber === null ? null : (familyOf(ownNumber)?.familyId ?? null)) },
+        package: spec.package ?? (cells.package === '' ? null : cells.package.slice(0, 60)),
+        notes: [cells.notes, cells.description === source ? '' : cells.description].filter((piece) => piece !== '').join('; ').slice(0, 300),
+      },
+      questions,
+    };
+  }
+
+  private specOf(text: string, kind: PartKind): PartSpec {
+    const key = `${kind}\u0001${text}`;
+    const known = this.read.get(key);
+    if (known) return known;
+    const spec = readPartText(text, { kind, taperConvention: this.taperConvention });
+    this.read.set(key, spec);
+    return spec;
+  }
+
+  /** Whole and positive, or nothing; a fraction or a negative number stops the reading with its place. */
+  private quantityIn(text: string, place: { row: number; sheet?: string }, column: string, columns: readonly Column[]): number | null {
+    if (text === '' || !columns.some((one) => one.role === 'quantity')) return null;
+    const cell = text.normalize('NFKC').trim();
+    const stop = (what: string) => new ReadingStopped({ code: 'bad-quantity', sentence: `The quantity “${text.slice(0, 40)}” in row ${place.row}, column ${column} is ${what}.`, ...place, column, cure: 'Write a whole number of parts, or leave the cell empty.' });
+    if (/^[-−]\s*\d/.test(cell)) throw stop('negative');
+    const number = /^(?:[x×]\s*)?(\d{1,7})(?:[.,](\d+))?\s*(?:[x×]|pcs?\.?|st(?:k|ück)?\.?|pieces?)?(?=$|\s|\()/i.exec(cell);
+    if (!number) return null;
+    if (number[2] !== undefined && !/^0+$/.test(number[2])) throw stop('a fraction');
+    return Number(number[1]);
+  }
+
+  private isFitted(columns: readonly Column[], row: TableRow, cells: { value: string; notes: string; description: string; quantity: string; package: string }): boolean {
+    for (const column of columns) {
+      if (column.role !== 'fitted') continue;
+      const cell = (row.cells[column.index] ?? '').trim();
+      if (cell === '') continue;
+      const meansNot = /^(?:dnp|dnf|dni|do not|not|no pop|omit|excluded)/i.test(cell);
+      const yes = /^(?:1|x|yes|y|true|ja|oui|sí|si|wahr)$/i.test(cell);
+      const headingSaysNot = /dn[pfi]|not/i.test(column.heading);
+      if (meansNot || (yes && headingSaysNot) || (!headingSaysNot && /^(?:0|no|n|false|nein|non)$/i.test(cell))) return false;
+    }
+    return ![cells.value, cells.notes, cells.description, cells.quantity, cells.package].some((cell) => NOT_FITTED.test(cell));
+  }
+
+  /** A part number that is known wins; then words; then the letters of the designator; then section and value. */
+  private kindOf(designators: readonly string[], source: string, cells: { kind: string; description: string; package: string; notes: string; value: string }): PartKind {
+    const letters = designators.map((one) => kindOfDesignator(one)).find((one) => one !== null) ?? null;
+    const byLetters = PART_KINDS.find((one) => one === letters) ?? null;
+    const byColumn = firstOf(KIND_WORDS, cells.kind);
+    const byWords = firstOf(KIND_WORDS, source) ?? firstOf(KIND_WORDS, cells.description) ?? firstOf(KIND_WORDS, cells.package.replaceAll('_', ' ')) ?? firstOf(KIND_WORDS, cells.notes);
+    const isValue = byLetters !== null && ['resistor', 'capacitor', 'inductor', 'potentiometer', 'trimmer'].includes(byLetters);
+    const family = isValue || byColumn === 'resistor' || byColumn === 'capacitor' ? null : familyOf(source);
+    if (family && compatible(byLetters, family.kind)) return family.kind;
+    if (byColumn !== null && compatible(byLetters, byColumn)) return refine(byColumn, byWords);
+    if (byLetters !== null) return byWords !== null && byWords !== byLetters && narrows(byLetters, byWords) ? byWords : byLetters;
+    if (byColumn !== null) return refine(byColumn, byWords);
+    if (byWords !== null) return byWords;
+    if (this.section !== null) return this.section;
+    if (family) return family.kind;
+    const guessed = readPartText(source, {}).kind;
+    return guessed ?? 'other';
+  }
+}
+
+/** Kinds that the same letters are used for, so that words or a part number may say which. */
+const SHARED: Readonly<Partial<Record<PartKind, readonly PartKind[]>>> = {
+  resistor: ['thermistor', 'potentiometer', 'trimmer'],
+  potentiometer: ['trimmer', 'connector', 'thermistor', 'resistor'],
+  trimmer: ['potentiometer', 'transistor', 'transformer'],
+  diode: ['led', 'ic', 'regulator'],
+  transistor: ['regulator', 'ic', 'transformer', 'trimmer', 'diode'],
+  ic: ['regulator', 'optocoupler', 'connector', 'other', 'pcb', 'crystal'],
+  connector: ['crystal', 'ic', 'switch', 'hardware'],
+  switch: ['connector', 'hardware'],
+  inductor: ['led'],
+  fuse: ['inductor', 'hardware'],
+  hardware: ['connector', 'pcb'],
+  other: ['connector', 'switch', 'optocoupler', 'transformer', 'crystal', 'diode', 'hardware', 'pcb', 'regulator', 'ic', 'led'],
+  crystal: ['ic'],
+  capacitor: [],
+  optocoupler: ['ic'],
+};
+
+const narrows = (letters: PartKind, words: PartKind): boolean => SHARED[letters]?.includes(words) ?? false;
+const compatible = (letters: PartKind | null, kind: PartKind): boolean => letters === null || letters === kind || narrows(letters, kind);
+const refine = (general: PartKind, words: PartKind | null): PartKind => (words !== null && narrows(general, words) ? words : general);
+
+function shorten(designators: readonly string[]): string {
+  return designators.length <= 3 ? designators.join(', ') : `${designators[0]} … ${designators.at(-1)}`;
+}
+
+/** Ratings and words may stand in other cells; the value and number come from the cell that names the part. */
+function merged(main: PartSpec, around: PartSpec, packageCell: string, kind: PartKind): PartSpec {
+  const cased = packageCell === '' ? null : readPartText(packageCell, { kind });
+  return {
+    ...main,
+    tolerancePercent: main.tolerancePercent ?? around.tolerancePercent,
+    ratedVolts: main.ratedVolts ?? around.ratedVolts,
+    ratedWatts: main.ratedWatts ?? around.ratedWatts,
+    ratedAmperes: main.ratedAmperes ?? around.ratedAmperes,
+    dielectric: main.dielectric ?? around.dielectric,
+    technology: main.technology ?? around.technology,
+    taper: main.taper ?? around.taper,
+    mounting: main.mounting ?? cased?.mounting ?? around.mounting,
+    package: main.package ?? cased?.package ?? around.package,
+    fitted: main.fitted && around.fitted,
+  };
+}
+
+/** A number only where the kind has numbers: `510` on a resistor is a value. */
+function numberFor(kind: PartKind, spec: PartSpec, source: string): string | null {
+  if (spec.partNumber !== null) return spec.partNumber;
+  if (['ic', 'transistor', 'diode', 'regulator', 'optocoupler'].includes(kind) && /\d/.test(source)) return source.split(/\s+/)[0] ?? null;
+  return null;
+}
