@@ -11,6 +11,7 @@ import { command } from '@/lib/api/use-case';
 import { applyAnswer } from './apply-answer';
 import { removeLine } from './drop-line';
 import { lockDraft, touchRevision } from './locked-revision';
+import { settleUpload } from './move-upload';
 import { matchLines } from './match-revision';
 import { lineFactsOf, partSpecSchema } from './part-spec-schema';
 
@@ -50,7 +51,9 @@ export const answerQuestion = command({
     await matchLines(tx, workshopId, draft.id, changed);
     record(asked.id, { revisionId: draft.id, code: asked.code, answer: input.answer, answered: answering.length, remember: input.remember });
     const left = await tx.execute<{ open: number }>(sql`select count(*)::int as open from question where workshop_id = ${workshopId} and revision_id = ${draft.id} and answered_at is null`);
-    return { revisionId: draft.id, version: await touchRevision(tx, draft), answered: answering.length, openQuestions: left.rows[0]?.open ?? 0 };
+    const openQuestions = left.rows[0]?.open ?? 0;
+    if (openQuestions === 0 && draft.uploadId !== null) await settleUpload(tx, workshopId, draft.uploadId, []);
+    return { revisionId: draft.id, version: await touchRevision(tx, draft), answered: answering.length, openQuestions };
   },
 });
 

@@ -44,7 +44,7 @@ export const changeColumnRole = errand({
       const earlier = await answersSoFar(tx, workshopId, draft.id);
       const decided = await decisionsSoFar(tx, workshopId, draft.id);
       await removeLines(tx, workshopId, draft.id);
-      const written = await writeRevision(tx, { workshopId, revisionId: draft.id, uploadId: before.original.id, list: read.list, freezeBy: null, earlier });
+      const written = await writeRevision(tx, { workshopId, revisionId: draft.id, uploadId: before.original.id, list: read.list, freezeBy: null, earlier, again: true });
       await bringDecisionsBack(tx, workshopId, draft.id, decided);
       record(draft.id, { lines: written.lines, openQuestions: written.openQuestions });
       return { revisionId: draft.id, version: await touchRevision(tx, draft), lines: written.lines, notLines: written.notLines, openQuestions: written.openQuestions };

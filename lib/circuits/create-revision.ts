@@ -13,6 +13,7 @@ import { id, uploadedFile, words } from '@/lib/api/fields';
 import { notFound, Refusal } from '@/lib/api/problem';
 import { errand } from '@/lib/api/use-case';
 import { listQuestions, questionFields } from './list-questions';
+import { moveUpload } from './move-upload';
 import { isLongList, readList, refusalOfList } from './read-list';
 import { bytesOf, type KeptOriginal, MOST_LIST_BYTES } from './upload-bytes';
 import { writeRevision } from './write-revision';
@@ -139,16 +140,14 @@ async function claimUpload(tx: Tx, workshopId: string, input: Sources): Promise<
     .where(and(eq(revision.workshopId, workshopId), eq(revision.uploadId, row.id)))
     .limit(1);
   if (used) throw new Refusal('state.refused', `${row.fileName} was read into revision ${used.name} already. Copy that revision, or send the file again.`);
+  await moveUpload(tx, workshopId, row.id, ['try-again']);
   await tx
     .update(upload)
-    .set({ circuitId: input.circuitId, state: 'received', problem: null })
+    .set({ circuitId: input.circuitId })
     .where(and(eq(upload.workshopId, workshopId), eq(upload.id, row.id)));
   return { id: row.id, fileName: row.fileName, storeKey: row.storeKey, content: row.content, sizeBytes: row.sizeBytes };
 }
 
 export async function rejectUpload(tx: Tx, workshopId: string, uploadId: string, refusal: Refusal): Promise<void> {
-  await tx
-    .update(upload)
-    .set({ state: 'rejected', problem: { code: refusal.code, detail: refusal.detail, errors: refusal.errors ?? [], more: refusal.more ?? null } })
-    .where(and(eq(upload.workshopId, workshopId), eq(upload.id, uploadId)));
+  await moveUpload(tx, workshopId, uploadId, ['reject'], { code: refusal.code, detail: refusal.detail, errors: refusal.errors ?? [], more: refusal.more ?? null });
 }

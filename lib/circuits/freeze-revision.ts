@@ -2,12 +2,13 @@
 import 'server-only';
 import { and, eq, sql } from 'drizzle-orm';
 import { z } from 'zod';
-import { revision, upload } from '@/db/schema/circuits';
+import { revision } from '@/db/schema/circuits';
 import { id } from '@/lib/api/fields';
 import { Refusal } from '@/lib/api/problem';
 import { command } from '@/lib/api/use-case';
 import { listQuestions } from './list-questions';
 import { lockDraft } from './locked-revision';
+import { settleUpload } from './move-upload';
 
 const MOST_NAMED = 50;
 
@@ -36,12 +37,7 @@ export const freezeRevision = command({
       .where(and(eq(revision.workshopId, actor.workshopId), eq(revision.id, draft.id)))
       .returning({ version: revision.version });
     if (!made) throw new Error('a locked revision is gone');
-    if (draft.uploadId !== null) {
-      await tx
-        .update(upload)
-        .set({ state: 'frozen' })
-        .where(and(eq(upload.workshopId, actor.workshopId), eq(upload.id, draft.uploadId)));
-    }
+    if (draft.uploadId !== null) await settleUpload(tx, actor.workshopId, draft.uploadId, ['freeze']);
     record(draft.id, { name: draft.name });
     return { id: draft.id, name: draft.name, state: 'frozen' as const, version: made.version };
   },

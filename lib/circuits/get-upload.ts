@@ -7,6 +7,7 @@ import { progress } from '@/db/schema/records';
 import { id, instant } from '@/lib/api/fields';
 import { notFound, Refusal } from '@/lib/api/problem';
 import { command, query } from '@/lib/api/use-case';
+import { UPLOAD_STATES } from './upload-states';
 
 export const getUpload = query({
   name: 'uploads.get',
@@ -18,7 +19,7 @@ export const getUpload = query({
     id: id(),
     fileName: z.string(),
     sizeBytes: z.number().int(),
-    state: z.enum(['received', 'read', 'settled', 'frozen', 'rejected']),
+    state: z.enum(UPLOAD_STATES),
     circuitId: id().nullable(),
     revisionId: id().nullable(),
     createdAt: instant(),
@@ -36,13 +37,12 @@ export const getUpload = query({
       .orderBy(revision.createdAt)
       .limit(1);
     if (!row) throw notFound('upload');
-    const states = z.enum(['received', 'read', 'settled', 'frozen', 'rejected']);
     const runs = z.enum(['running', 'done', 'failed', 'cancelled']);
     return {
       id: row.upload.id,
       fileName: row.upload.fileName,
       sizeBytes: row.upload.sizeBytes,
-      state: states.parse(row.upload.state),
+      state: z.enum(UPLOAD_STATES).parse(row.upload.state),
       circuitId: row.upload.circuitId,
       revisionId: row.revisionId,
       createdAt: row.upload.createdAt.toISOString(),

@@ -2,9 +2,10 @@
 import 'server-only';
 import { and, eq, sql } from 'drizzle-orm';
 import type { Tx } from '@/db/client';
-import { revision, upload } from '@/db/schema/circuits';
+import { revision } from '@/db/schema/circuits';
 import { workshop } from '@/db/schema/people';
 import { matchLines } from './match-revision';
+import { moveUpload } from './move-upload';
 import type { ReadList } from './read-list';
 import { settleQuestions, type Standing } from './settle-questions';
 import { storeLines, storeQuestions } from './store-lines';
@@ -23,7 +24,9 @@ interface Writing {
   readonly list: ReadList;
   /** Freeze where no question is open. */
   readonly freezeBy: string | null;
+  /** The list was read before and is read again: answers given to its rows, by place. */
   readonly earlier?: Standing['earlier'];
+  readonly again?: boolean;
   readonly progress?: (done: number) => Promise<void>;
 }
 
@@ -41,10 +44,7 @@ export async function writeRevision(tx: Tx, writing: Writing): Promise<WrittenRe
   await storeQuestions(tx, workshopId, revisionId, open, stored);
   await matchLines(tx, workshopId, revisionId);
   const freezes = writing.freezeBy !== null && open.length === 0 && lines.length > 0;
-  await tx
-    .update(upload)
-    .set({ state: freezes ? 'frozen' : open.length === 0 ? 'settled' : 'read', problem: null })
-    .where(and(eq(upload.workshopId, workshopId), eq(upload.id, uploadId)));
+  await moveUpload(tx, workshopId, uploadId, [writing.again === true ? 'read-again' : 'read', ...(open.length === 0 && writing.again !== true ? (['settle'] as const) : []), ...(freezes ? (['freeze'] as const) : [])]);
   if (freezes) {
     await tx
       .update(revision)
