@@ -1,23 +1,31 @@
 /**
  * One text about one part to what it says: `100n X7R 50V`, `TL072 or NJM4580`, `B50k lin`, `10u/25v`, `DNP`. The kind may
- * be given (a designator or a heading told it); otherwise the text must tell. What is not said stays null.
+ * be given (a designator or a heading told it); otherwise the text must tell. What is not said stays null, and what can
+ * be meant two ways becomes a doubt.
  */
-import { familyOf } from './families/family-of';
-import type { Doubt, PartKind, PartSpec, Quantity } from './part-spec';
+import { doubtBetween } from './doubt-between';
+import { findPartNumber, NUMBERED } from './find-part-number';
+import { findValue } from './find-value';
+import type { Dielectric, Doubt, PartKind, PartSpec, Quantity, Unit } from './part-spec';
 import {
   DIELECTRIC_WORDS,
+  ELSEWHERE,
   firstOf,
   KIND_WORDS,
+  LEFT_OPEN,
   MOUNTING_WORDS,
   NOT_FITTED,
+  NOT_FITTED_ALONE,
+  OPTIONAL,
   PACKAGE_PATTERNS,
   TECHNOLOGY_WORDS,
+  withoutMarks,
 } from './part-words';
 import { printQuantity } from './print-quantity';
-import { compareQuantity } from './quantity';
-import { type ReadQuantity, readQuantity, unitOfKind } from './read-quantity';
+import { type ReadQuantity, unitOfKind } from './read-quantity';
 import { readRatings } from './read-ratings';
 import { readTaper, type TaperConvention } from './read-taper';
+import { rangeIn, splitAlternatives } from './split-alternatives';
 import { tidyValueText } from './tidy-value-text';
 
 export interface ReadOptions {
@@ -27,193 +35,205 @@ export interface ReadOptions {
 }
 
 const LONGEST_TEXT = 500;
-const OHMIC: readonly PartKind[] = ['resistor', 'potentiometer', 'trimmer', 'thermistor'];
-const VALUED: readonly PartKind[] = [...OHMIC, 'capacitor', 'inductor', 'crystal'];
-/** These are named by a number; a bare number on one is no value. */
-const NUMBERED: readonly PartKind[] = ['diode', 'transistor', 'ic', 'regulator', 'optocoupler', 'led'];
 
 /** Never throws; a text of which nothing is understood has null in every field but `text`. */
 export function readPartText(text: string, options: ReadOptions = {}): PartSpec {
-  const tidy = tidyValueText(text.slice(0, LONGEST_TEXT)).replace(/\s+/g, ' ');
-  const fitted = !NOT_FITTED.test(tidy) && !/^(?:n\/a|nc|dnp|-+)$/i.test(tidy);
-  const { main, others } = splitAlternatives(tidy.replace(NOT_FITTED, ' ').replace(/[()[\]]\s*[)\]]/g, ' '));
-  const given = options.kind ?? null;
-  const family = VALUED.includes(given ?? 'other') ? null : familyIn(main);
-  const kind = given ?? family?.kind ?? kindOf(main);
-  const ratings = readRatings(main);
-  const isPot = kind === 'potentiometer' || kind === 'trimmer';
-  const taper =
-    isPot || kind === null
-      ? readTaper(ratings.rest, options.taperConvention ?? 'ask')
-      : { taper: null, doubt: null, rest: ratings.rest };
-  const dielectric = kind === 'capacitor' || kind === null ? firstOf(DIELECTRIC_WORDS, main) : null;
+  const tidy = withoutMarks(tidyValueText(text.slice(0, LONGEST_TEXT)));
+  const fitted = !NOT_FITTED.test(tidy) && !NOT_FITTED_ALONE.test(tidy);
+  const asked = tidy
+    .replace(NOT_FITTED, ' ')
+    .replace(OPTIONAL, ' ')
+    .replace(/[([]\s*[)\]]/g, ' ')
+    .replace(/\s+/g, ' ')
+    .trim();
+  const { main, others } = splitAlternatives(asked, options.kind ?? null);
+  const number =
+    NOT_FITTED_ALONE.test(tidy) || isValued(options.kind ?? null) ? null : findPartNumber(main, options.kind ?? null);
+  const kindSaid = refinedKind(options.kind ?? null, main, number?.family?.kind ?? null);
   const packaging = packageIn(main);
-  const read =
-    family === null && !NUMBERED.includes(kind ?? 'other') ? valueIn(taper.rest, kind, dielectric !== null) : null;
-  const finalKind = kind ?? read?.kind ?? (dielectric !== null ? 'capacitor' : null);
-  const keepsTaper = finalKind === 'potentiometer' || finalKind === 'trimmer';
-  const doubts: Doubt[] = [...(read?.read.doubts ?? [])];
-  if (taper.doubt && keepsTaper && fitted) doubts.push(taper.doubt);
-  const range = rangeIn(tidy, finalKind);
-  if (range)
-    doubts.push({
-      code: 'either-of',
-      ask: `“${text.trim()}” leaves the value open. Which one goes in?`,
-      options: [printQuantity(range.low), printQuantity(range.high)],
-    });
-  const partNumber = read ? null : partNumberIn(ratings.rest, finalKind, family !== null);
+  const ratings = readRatings(
+    withoutNames(main, [packaging?.found, number?.family == null ? undefined : number.partNumber], kindSaid),
+  );
+  const taper = readTaper(ratings.rest, options.taperConvention ?? 'ask', kindSaid);
+  const kindKnown = kindSaid ?? (taper.taper === null ? null : 'potentiometer');
+  const dielectric = firstOf(DIELECTRIC_WORDS, main);
+  const technology = firstOf(TECHNOLOGY_WORDS, main);
+  const value = number?.family == null ? valueOf(taper.rest, kindKnown, dielectric, ratings.ratedVolts) : null;
+  const kind =
+    kindKnown ??
+    kindOfUnit(value?.quantity.unit ?? null) ??
+    (dielectric === null || technology !== null ? null : 'capacitor');
+  const range = kind === null ? null : rangeIn(asked, kind);
+  const conflict = conflictIn(kind, value, main);
+  const finalKind = conflict?.kind ?? kind;
+  const read = range?.low ?? value?.quantity ?? null;
+  const doubts = [
+    ...(range === null
+      ? (conflict?.doubt ?? value?.doubts ?? [])
+      : [doubtBetween('either-of', text.trim(), 'Either will do, so which one goes in?', [range.low, range.high])]),
+    ...(isPotLike(finalKind) && taper.doubt !== null ? [taper.doubt] : []),
+    ...remarkDoubts(tidy, text.trim(), read, number?.partNumber ?? null),
+  ];
   return {
     kind: finalKind,
-    value: range?.low ?? read?.read.quantity ?? null,
-    tolerancePercent: ratings.tolerancePercent ?? read?.read.tolerancePercent ?? null,
+    value: read,
+    tolerancePercent: ratings.tolerancePercent ?? value?.tolerancePercent ?? null,
     ratedVolts: ratings.ratedVolts,
     ratedWatts: ratings.ratedWatts,
     ratedAmperes: ratings.ratedAmperes,
-    dielectric: finalKind === 'capacitor' ? (dielectric ?? firstOf(DIELECTRIC_WORDS, tidy)) : null,
-    technology: finalKind === 'resistor' ? firstOf(TECHNOLOGY_WORDS, main) : null,
-    taper: keepsTaper ? taper.taper : null,
+    dielectric: finalKind === 'capacitor' ? (dielectric ?? unpolarised(main, read)) : null,
+    technology: finalKind === 'resistor' ? technology : null,
+    taper: isPotLike(finalKind) ? taper.taper : null,
     mounting: packaging?.mounting ?? firstOf(MOUNTING_WORDS, main),
     package: packaging?.name ?? null,
-    partNumber,
-    family: family?.familyId ?? null,
-    alternatives: others,
+    partNumber:
+      value !== null && number?.family == null && (finalKind === null || unitOfKind(finalKind) !== null)
+        ? null
+        : (number?.partNumber ?? null),
+    family: number?.family?.familyId ?? null,
+    alternatives: range === null ? others : [range.highText, ...others.filter((other) => other !== range.highText)],
     fitted,
     doubts: fitted ? doubts : [],
     text,
   };
 }
 
-const ALTERNATIVE_WORDS =
-  /\s*(?:\bor\b|\boder\b|\bou\b|\bof\b(?=\s*[A-Z0-9])|\bequiv(?:alent)?\.?:?|\balso\b:?|\bsubs?(?:titute)?\b:?|\balt(?:ernative(?:ly)?)?\b\.?:?|\bersatz\b:?|\|)\s*/i;
+function isPotLike(kind: PartKind | null): boolean {
+  return kind === 'potentiometer' || kind === 'trimmer';
+}
 
-/** What is asked for first, and what may stand for it: `TL072 or NJM4580`, `1N5817/1N5819`, `BAT41 (substitute: 1N5817)`. */
-function splitAlternatives(text: string): { main: string; others: string[] } {
-  const clean = (piece: string) => piece.replace(/^[\s,;:=(\[]+|[\s,;:=)\]]+$/g, '').trim();
-  const pieces = text
-    .split(ALTERNATIVE_WORDS)
-    .map(clean)
-    .filter((piece) => piece !== '');
-  const [first = '', ...rest] = pieces;
-  const slashed = splitSlash(first);
+/** Kinds that are asked for by value alone; a number on them is looked for only where the text names no value. */
+function isValued(kind: PartKind | null): boolean {
+  return (
+    kind === 'resistor' ||
+    kind === 'capacitor' ||
+    kind === 'potentiometer' ||
+    kind === 'trimmer' ||
+    kind === 'thermistor'
+  );
+}
+
+/** Words may narrow what a designator said: D1 may be an LED, R5 a trimmer or thermistor, U3 a regulator or optocoupler. */
+function refinedKind(given: PartKind | null, text: string, family: PartKind | null): PartKind | null {
+  const word = firstOf(KIND_WORDS, text);
+  if (given === null) return family ?? word;
+  if (family !== null && NUMBERED.includes(given)) return family;
+  if (given === 'diode' && family === null && word === 'led') return 'led';
+  if (given === 'resistor' && (word === 'trimmer' || word === 'potentiometer' || word === 'thermistor')) return word;
+  if (given === 'potentiometer' && word === 'trimmer') return word;
+  if (given === 'ic' && family === null && (word === 'regulator' || word === 'optocoupler')) return word;
+  return given;
+}
+
+/**
+ * Takes away the case and the part number, whose digits are no ratings (`LM4040-10V`), and gives the second figure of
+ * `47/16` on a capacitor its volts.
+ */
+function withoutNames(text: string, names: readonly (string | undefined)[], kind: PartKind | null): string {
+  const bare = names.reduce<string>((left, name) => (name === undefined ? left : left.replace(name, ' ')), text);
+  return kind === 'capacitor' ? bare.replace(/^(\d+(?:[.,]\d+)?)\s?\/\s?(\d{1,3})\s?v?$/i, '$1 $2V') : bare;
+}
+
+function packageIn(text: string): { name: string; found: string; mounting: PartSpec['mounting'] } | null {
+  // 1210 alone is ohms; 0805 alone is a case, since no value starts with 0.
+  if (/^[1-9]\d*$/.test(text)) return null;
+  for (const [pattern, name, mounting] of PACKAGE_PATTERNS) {
+    const match = pattern.exec(text);
+    if (match) return { name: name(match), found: match[0], mounting };
+  }
+  return null;
+}
+
+/** Polarised capacitors are always listed in microfarads, and `47/16` on one is 47 µF for 16 V. */
+function valueOf(
+  text: string,
+  kind: PartKind | null,
+  dielectric: Dielectric | null,
+  ratedVolts: number | null,
+): ReadQuantity | null {
+  const read = findValue(text, kind);
+  if (kind !== 'capacitor' || read === null || read.doubts[0]?.code !== 'bare-capacitance') return read;
+  const polarised =
+    dielectric === 'aluminium' ||
+    dielectric === 'tantalum' ||
+    dielectric === 'aluminium-bipolar' ||
+    dielectric === 'polymer';
+  const number = /^\s*(\d+(?:[.,]\d+)?)/.exec(text)?.[1];
+  const micro = number === undefined || !(polarised || ratedVolts !== null) ? null : findValue(`${number}uF`, kind);
+  if (micro === null) return read;
+  if (polarised) return micro;
   return {
-    main: slashed[0] ?? '',
-    others: [...slashed.slice(1), ...rest].filter((piece) => /[A-Za-z0-9]/.test(piece)).slice(0, 10),
+    ...micro,
+    doubts: [
+      doubtBetween('bare-capacitance', text.trim(), 'No unit: microfarad, as with the voltage beside it?', [
+        micro.quantity,
+        read.quantity,
+      ]),
+    ],
   };
 }
 
-/** A slash parts two numbers of parts or two values, but not a value from its rating (`10u/25V`) or a fraction (`1/4W`). */
-function splitSlash(text: string): string[] {
-  const pieces = text.split(/\s*\/\s*/);
-  if (pieces.length < 2 || pieces.length > 5) return [text];
-  const looksWhole = (piece: string) => familyOf(piece) !== null || /^[A-Z]{1,5}\d{2,5}[A-Z]{0,4}$/i.test(piece);
-  return pieces.every((piece) => looksWhole(piece)) &&
-    pieces.every((piece) => readQuantity(piece, 'resistor') === null || familyOf(piece) !== null)
-    ? pieces
-    : [text];
+/** NP and BP on large values are electrolytics without polarity; on small ones NP is no more than a remark. */
+function unpolarised(text: string, value: Quantity | null): Dielectric | null {
+  const large = value !== null && value.unit === 'farad' && value.significand * 10 ** value.exponent >= 4.7e-7;
+  return large && /\b(?:NP|BP|non[- ]?pol\w*|unpol\w*)\b/i.test(text) ? 'aluminium-bipolar' : null;
 }
 
-function familyIn(text: string): { familyId: string; kind: PartKind } | null {
-  const whole = familyOf(text);
-  if (whole) return whole;
-  for (const token of text.split(/[\s,;()[\]|]+/).slice(0, 8)) {
-    // A bare number inside words is a quantity or a size, not a type.
-    if (/[A-Za-z]/.test(token) && /\d/.test(token) && readQuantity(token, null) === null) {
-      const found = familyOf(token);
-      if (found) return found;
-    }
+function kindOfUnit(unit: Unit | null): PartKind | null {
+  switch (unit) {
+    case 'ohm':
+      return 'resistor';
+    case 'farad':
+      return 'capacitor';
+    case 'henry':
+      return 'inductor';
+    case 'hertz':
+      return 'crystal';
+    default:
+      return null;
   }
-  return null;
 }
 
-function kindOf(text: string): PartKind | null {
-  return firstOf(KIND_WORDS, text);
-}
-
-function packageIn(text: string): { name: string; mounting: 'through-hole' | 'surface' | 'panel' | null } | null {
-  for (const [pattern, name, mounting] of PACKAGE_PATTERNS) {
-    const match = pattern.exec(text);
-    if (match) return { name: name(match), mounting };
-  }
-  return null;
-}
-
-/** The first token, or pair of tokens (`4.7 kΩ`), that reads as a value of the kind. */
-function valueIn(
-  text: string,
+/**
+ * `100nF` on a line of resistors: the value stays as said, and the builder is asked. A word beside the value (`capacitor
+ * 100 nF`) settles it. Ohms on an inductor are a ferrite bead's impedance and no conflict.
+ */
+function conflictIn(
   kind: PartKind | null,
-  isCapacitor: boolean,
-): { read: ReadQuantity; kind: PartKind | null } | null {
-  const asked = kind ?? (isCapacitor ? 'capacitor' : null);
-  if (asked !== null && unitOfKind(asked) === null) return null;
-  const tokens = text
-    .split(/[\s;|()[\]]+|,(?!\d)|\*|(?<=[A-Za-zΩ])\/(?=\d)/)
-    .map((token) => token.replace(/^[=:~≈]+|[.:*]+$/g, ''))
-    .filter((token) => token !== '');
-  for (let index = 0; index < Math.min(tokens.length, 12); index += 1) {
-    const token = tokens[index] ?? '';
-    const next = tokens[index + 1];
-    const pair =
-      next !== undefined && /^[fpnumkKMG]?(?:Ω|F|H|Hz|f|R|k|K|M|u|n|p)$/i.test(next) && /^[\d.,]+$/.test(token)
-        ? readQuantity(`${token} ${next}`, asked)
-        : null;
-    const read = pair ?? readQuantity(token, asked);
-    if (!read) continue;
-    // Sizes and counts in words (`5 mm`, `2 pin`, `16mm`) are no values; a bare number is one only where it stands first.
-    if (asked === null && !pair && /^[\d.,]+$/.test(token)) continue;
-    if (/^[\d.,]+$/.test(token) && !pair && index > 0) continue;
-    return { read, kind: asked ?? kindOfUnit(read.quantity) };
-  }
-  return null;
+  value: ReadQuantity | null,
+  text: string,
+): { kind: PartKind; doubt: readonly Doubt[] } | null {
+  const home = unitOfKind(kind);
+  if (kind === null || value === null || home === null || value.quantity.unit === home) return null;
+  if (kind === 'inductor' && value.quantity.unit === 'ohm') return null;
+  const other = kindOfUnit(value.quantity.unit);
+  if (other === null) return null;
+  if (firstOf(KIND_WORDS, text) === other) return { kind: other, doubt: [] };
+  const shown = printQuantity(value.quantity);
+  const ask = `${shown} is the value of ${article(other)}, but this line is for ${article(kind)}. Which is it?`;
+  return { kind, doubt: [{ code: 'kind-conflict', ask, options: [`${other} ${shown}`] }] };
 }
 
-function kindOfUnit({ unit }: Quantity): PartKind | null {
-  return unit === 'ohm'
-    ? 'resistor'
-    : unit === 'farad'
-      ? 'capacitor'
-      : unit === 'henry'
-        ? 'inductor'
-        : unit === 'hertz'
-          ? 'crystal'
-          : null;
+function article(kind: PartKind): string {
+  return /^[aeiou]/.test(kind) ? `an ${kind}` : `a ${kind}`;
 }
 
-/** `1M to 2M2`, `100k - 220k`: either of them will do. */
-function rangeIn(text: string, kind: PartKind | null): { low: Quantity; high: Quantity } | null {
-  if (kind === null || !VALUED.includes(kind)) return null;
-  const match = /^\s*(\S+)\s*(?:\bto\b|\bbis\b|\ba\b|[–—])\s*(\S+)/i.exec(text) ?? /^\s*(\S+)\s+-\s+(\d\S*)/.exec(text);
-  if (!match) return null;
-  const low = readQuantity(match[1] ?? '', kind);
-  const high = readQuantity(match[2] ?? '', kind);
-  if (!low || !high || low.quantity.unit !== high.quantity.unit || compareQuantity(low.quantity, high.quantity) >= 0)
-    return null;
-  return { low: low.quantity, high: high.quantity };
-}
-
-const NUMBER_SHAPE = /^(?=[^\s]*\d)[A-Za-z0-9][A-Za-z0-9./+,#_-]{1,40}$/;
-
-/** The piece that looks like a maker's number: letters and digits together, or a bare number on a part that is named by one. */
-function partNumberIn(text: string, kind: PartKind | null, hasFamily: boolean): string | null {
-  if (kind !== null && ['resistor', 'pcb'].includes(kind)) return null;
-  const tokens = text
-    .split(/[\s;|()[\]]+/)
-    .map((token) => token.replace(/^[,:]+|[,:.*]+$/g, ''))
-    .filter((token) => token !== '');
-  if (hasFamily) {
-    const named = tokens.find((token) => familyOf(token) !== null);
-    if (named) return named;
-    return tokens.slice(0, 2).join(' ') || null;
+function remarkDoubts(tidy: string, text: string, value: Quantity | null, partNumber: string | null): Doubt[] {
+  const said = value === null ? partNumber : printQuantity(value);
+  const doubts: Doubt[] = [];
+  if (OPTIONAL.test(tidy)) {
+    doubts.push({
+      code: 'optional-part',
+      ask: `“${text}”: does it go in, or stay empty?`,
+      options: [...(said === null ? [] : [said]), 'not fitted'],
+    });
   }
-  for (const token of tokens) {
-    if (!NUMBER_SHAPE.test(token)) continue;
-    if (/^[\d.,/]+$/.test(token)) {
-      if (kind !== null && NUMBERED.includes(kind) && kind !== 'led' && /^\d{2,6}$/.test(token)) return token;
-      continue;
-    }
-    if (/^\d+(?:[.,]\d+)?\s*(?:mm|cm|V|W|A|mA|pins?|way|p|x\d+)$/i.test(token) || /^\d+[xX]\d+$/.test(token)) continue;
-    if (PACKAGE_PATTERNS.some(([pattern]) => pattern.exec(token)?.[0]?.trim() === token)) continue;
-    if (/[A-Za-z]/.test(token) && /\d/.test(token) && (token.length >= 4 || NUMBERED.includes(kind ?? 'other')))
-      return token;
+  if (LEFT_OPEN.test(tidy) || (said === null && ELSEWHERE.test(tidy))) {
+    doubts.push({
+      code: 'left-open',
+      ask: `“${text}” leaves it open. What goes in?`,
+      options: [...(said === null ? [] : [said]), 'not fitted'],
+    });
   }
-  return null;
+  return doubts;
 }

@@ -177,12 +177,12 @@ function microOrMilli(text: string, read: Quantity, other: Quantity): Doubt {
 function readKiloOnCapacitor({ text, home }: Context, decimal: string, word: string): ReadQuantity | null {
   if (home !== 'farad' || (word !== 'k' && word !== 'K') || Number(decimal) === 0) return null;
   const nano = scaled(decimal, -9, 'farad');
-  return finished(nano, undefined, [
-    doubtBetween('kilo-on-capacitor', text, 'Thousands of picofarads, or is this a resistor?', [
-      nano,
-      scaled(decimal, 3, 'ohm'),
-    ]),
-  ]);
+  const doubt: Doubt = {
+    code: 'kilo-on-capacitor',
+    ask: `“${text}”: thousands of picofarads, or is this a resistor?`,
+    options: [printQuantity(nano), `resistor ${printQuantity(scaled(decimal, 3, 'ohm'))}`],
+  };
+  return finished(nano, undefined, [doubt]);
 }
 
 const LETTER_FOR_POINT = /^(\d{0,4})([A-Za-zΩ])(\d{1,4})\s?(ohms?|Ω|F|f|H|h|Hz|HZ|hz|V|R)?\s?([BCDFGJKMZ])?$/;

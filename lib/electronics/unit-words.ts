@@ -57,7 +57,7 @@ const OLD_CAPACITANCE: Readonly<Record<string, number>> = {
 export function readUnitWord(word: string, home: Unit | null): UnitWord | null {
   const old = OLD_CAPACITANCE[word.toLowerCase()];
   if (old !== undefined) return { exponent: old, unit: 'farad', named: true, otherExponent: null };
-  if (/^[RrE]$/.test(word) && (home === 'ohm' || home === 'henry' || (home === null && word !== 'r'))) {
+  if (/^[RrE]$/.test(word) && (home === 'ohm' || home === 'henry' || home === null)) {
     // On an inductor R is ohms: a ferrite bead is named by its impedance.
     return { exponent: 0, unit: 'ohm', named: word !== 'E', otherExponent: null };
   }

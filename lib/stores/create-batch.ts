@@ -9,6 +9,8 @@ import { notFound, Refusal } from '@/lib/api/problem';
 import { command } from '@/lib/api/use-case';
 import { nextNumber } from '@/lib/workshop/next-number';
 
+const MOST_OF_A_LINE = 1_000_000_000;
+
 /**
  * The part for each line: the newest decision of a person, or the best candidate that every check passes. Nothing that
  * changes a figure, asks or is refused is taken without somebody saying so. Also brings needs without a reservation up
@@ -52,6 +54,10 @@ export const createBatch = command({
       .for('share');
     if (!from) throw notFound('revision');
     if (from.state !== 'frozen') throw new Refusal('state.refused', `Revision ${from.name} is still a draft. Answer its questions and freeze it first.`);
+    // batch_need.quantity is an integer; a list that asks for more than that is a misreading.
+    const most = await tx.execute<{ most: string | null }>(sql`
+      select max(l.quantity::bigint * ${input.units})::text as most from line l where l.workshop_id = ${actor.workshopId} and l.revision_id = ${from.id} and l.fitted`);
+    if (Number(most.rows[0]?.most ?? 0) > MOST_OF_A_LINE) throw new Refusal('rule.forbids', `${input.units} units would need more than ${MOST_OF_A_LINE} of one line. Make smaller batches.`);
     const number = await nextNumber(tx, actor.workshopId, 'batch');
     const [made] = await tx
       .insert(batch)

@@ -31,3 +31,6 @@ export const partFactsJson = (alias: 'p') =>
   sql.raw(`json_build_object('id', ${alias}.id, 'name', ${alias}.name, 'description', ${alias}.description, 'kind', ${alias}.kind, 'partNumber', ${alias}.part_number, 'family', ${alias}.family,
     'value', trim_scale(${alias}.value)::text, 'unit', ${alias}.unit, 'tolerancePercent', ${alias}.tolerance_percent::float8, 'ratedVolts', ${alias}.rated_volts::float8, 'ratedWatts', ${alias}.rated_watts::float8,
     'dielectric', ${alias}.dielectric, 'technology', ${alias}.technology, 'taper', ${alias}.taper, 'mounting', ${alias}.mounting, 'package', ${alias}.package, 'safety', ${alias}.safety, 'stockUnit', ${alias}.stock_unit)`);
+
+/** A notice shown where the part is handled (lib/planning/part-cautions.ts). */
+export const caution = z.object({ code: z.string(), level: z.enum(['danger', 'care']), says: z.string() });

@@ -11,11 +11,12 @@ import { reservation } from '@/db/schema/stores';
 import { id } from '@/lib/api/fields';
 import { command } from '@/lib/api/use-case';
 import { BATCH_STATES } from '@/lib/circuits/batch-states';
-import { chooseLots, freeOn, type LotOnShelf } from '@/lib/planning/choose-lots';
+import { chooseLots, freeOn } from '@/lib/planning/choose-lots';
 import { refreshNeeds } from './create-batch';
 import { batchAfter, lockBatch, moveBatch } from './locked-batch';
+import { lockShelf, takeOff } from './locked-shelf';
 
-export interface OpenNeed {
+interface OpenNeed {
   readonly needId: string;
   readonly lineId: string;
   readonly partId: string | null;
@@ -28,7 +29,7 @@ export interface OpenNeed {
 }
 
 /** Needs that are not wholly covered, in the order lots are locked: by part, then by line. */
-export async function openNeeds(tx: Tx, workshopId: string, batchId: string): Promise<OpenNeed[]> {
+async function openNeeds(tx: Tx, workshopId: string, batchId: string): Promise<OpenNeed[]> {
   const found = await tx.execute<{ row: OpenNeed }>(sql`
     select json_build_object('needId', n.id, 'lineId', n.line_id, 'partId', n.part_id, 'partName', p.name, 'text', l.text, 'designators', l.designators, 'quantity', n.quantity,
              'covered', coalesce((select sum(r.quantity - r.released) from reservation r where r.workshop_id = n.workshop_id and r.need_id = n.id), 0)) as row
@@ -38,30 +39,6 @@ export async function openNeeds(tx: Tx, workshopId: string, batchId: string): Pr
      where n.workshop_id = ${workshopId} and n.batch_id = ${batchId}
      order by n.part_id nulls last, l.position`);
   return found.rows.map(({ row }) => row).filter((need) => need.covered < need.quantity);
-}
-
-/** Locks every lot of the parts that has something, in the fixed order, and tells what is free on each. */
-export async function lockShelf(tx: Tx, workshopId: string, partIds: readonly string[]): Promise<Map<string, LotOnShelf[]>> {
-  const shelf = new Map<string, LotOnShelf[]>();
-  if (partIds.length === 0) return shelf;
-  const lots = await tx.execute<{ part_id: string; id: string; bin_id: string; free: number; received_ms: string }>(sql`
-    select t.part_id, t.id, t.bin_id, t.on_hand - t.reserved as free, extract(epoch from t.received_at) * 1000 as received_ms
-      from lot t
-     where t.workshop_id = ${workshopId} and t.part_id in (${sql.join([...new Set(partIds)].map((one) => sql`${one}::uuid`), sql`, `)}) and t.on_hand > 0
-     order by t.part_id, t.id
-       for update`);
-  for (const lot of lots.rows) {
-    const list = shelf.get(lot.part_id) ?? [];
-    list.push({ lotId: lot.id, binId: lot.bin_id, free: lot.free, receivedAtMs: Number(lot.received_ms) });
-    shelf.set(lot.part_id, list);
-  }
-  return shelf;
-}
-
-/** Takes chosen units off the shelf in memory, so that the next need of the same part sees what is left. */
-function takeOff(shelf: LotOnShelf[], chosen: readonly { lotId: string; quantity: number }[]): LotOnShelf[] {
-  const taken = new Map(chosen.map((one) => [one.lotId, one.quantity]));
-  return shelf.map((lot) => ({ ...lot, free: lot.free - (taken.get(lot.lotId) ?? 0) }));
 }
 
 const shortfallOf = z.object({ needId: id(), lineId: id(), partId: id().nullable(), partName: z.string().nullable(), text: z.string(), designators: z.array(z.string()), short: z.number().int() });
@@ -115,14 +92,3 @@ export const reserveBatch = command({
     return { id: batch.id, number: batch.number, state, reserved: made, shortfalls };
   },
 });
-
-/** Releases units of reservations again: they are free for others at once. */
-export async function releaseOpen(tx: Tx, workshopId: string, batchId: string): Promise<number> {
-  const released = await tx.execute<{ units: number }>(sql`
-    with freed as (
-      update reservation set released = quantity - picked
-       where workshop_id = ${workshopId} and batch_id = ${batchId} and quantity - picked - released > 0
-      returning 1)
-    select count(*)::int as units from freed`);
-  return released.rows[0]?.units ?? 0;
-}

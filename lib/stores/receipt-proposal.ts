@@ -1,14 +1,15 @@
-/** What is expected at the door and where it should go, and what came in. */
+/** What is expected at the door, where each bag should go, and who waits for it. */
 import 'server-only';
 import { sql } from 'drizzle-orm';
 import { z } from 'zod';
-import { id, pageFields, pageOf } from '@/lib/api/fields';
+import { id } from '@/lib/api/fields';
 import { notFound } from '@/lib/api/problem';
 import { query } from '@/lib/api/use-case';
-import { partFacts, partFactsJson } from './part-facts';
+import { partCautions } from '@/lib/planning/part-cautions';
+import { caution, partFacts, partFactsJson } from './part-facts';
 
 const binChoice = z.object({ binId: id(), code: z.string(), onHand: z.number().int() });
-const expected = z.object({
+const fromDatabase = z.object({
   orderLineId: id(),
   position: z.number().int(),
   part: partFacts,
@@ -16,10 +17,14 @@ const expected = z.object({
   ordered: z.number().int(),
   received: z.number().int(),
   missing: z.number().int(),
-  /** Where the part lies already, fullest first; else an empty bin. */
+  /** Most of it that may still be received: what is missing, and the workshop's allowed over-delivery. */
+  most: z.number().int(),
+  /** Where the part lies already, fullest first; else an empty bin, a different one for each line. */
   bins: z.array(binChoice),
+  /** Batches that wait for it. */
   waiting: z.array(z.string()),
 });
+const expected = fromDatabase.extend({ cautions: z.array(caution) });
 
 export const receiptProposal = query({
   name: 'receipts.proposal',
@@ -33,9 +38,10 @@ export const receiptProposal = query({
       select o.number, o.state, s.name from purchase_order o join supplier s on s.workshop_id = o.workshop_id and s.id = o.supplier_id where o.workshop_id = ${actor.workshopId} and o.id = ${input.orderId}`);
     const order = head.rows[0];
     if (!order) throw notFound('order');
-    const found = await tx.execute<{ row: z.output<typeof expected> }>(sql`
+    const found = await tx.execute<{ row: z.output<typeof fromDatabase> }>(sql`
       select json_build_object('orderLineId', l.id, 'position', l.position, 'part', ${partFactsJson('p')}, 'supplierCode', l.supplier_code, 'ordered', l.quantity - l.cancelled, 'received', l.received,
                'missing', greatest(l.quantity - l.cancelled - l.received, 0),
+               'most', greatest(l.quantity - l.cancelled - l.received, 0) + ceil(l.quantity * g.over_delivery_percent / 100.0)::int - greatest(l.received - (l.quantity - l.cancelled), 0),
                'bins', (select coalesce(json_agg(x.choice), '[]') from (
                           select json_build_object('binId', b.id, 'code', b.code, 'onHand', sum(t.on_hand)) as choice
                             from lot t join bin b on b.workshop_id = t.workshop_id and b.id = t.bin_id
@@ -44,46 +50,22 @@ export const receiptProposal = query({
                'waiting', (select coalesce(json_agg(distinct c.number), '[]') from batch_need n join batch c on c.workshop_id = n.workshop_id and c.id = n.batch_id
                             where n.workshop_id = l.workshop_id and n.part_id = l.part_id and c.state in ('planned', 'reserved', 'picking')
                               and n.quantity > coalesce((select sum(r.quantity - r.released) from reservation r where r.workshop_id = n.workshop_id and r.need_id = n.id), 0))) as row
-        from order_line l join part p on p.workshop_id = l.workshop_id and p.id = l.part_id
+        from order_line l join part p on p.workshop_id = l.workshop_id and p.id = l.part_id join workshop g on g.id = l.workshop_id
        where l.workshop_id = ${actor.workshopId} and l.order_id = ${input.orderId}
        order by l.position`);
     const empty = await tx.execute<{ binId: string; code: string }>(sql`
       select b.id as "binId", b.code from bin b join cabinet k on k.workshop_id = b.workshop_id and k.id = b.cabinet_id
        where b.workshop_id = ${actor.workshopId} and b.retired_at is null
          and not exists (select 1 from lot t where t.workshop_id = b.workshop_id and t.bin_id = b.id and t.on_hand > 0)
-       order by k.walk_order, b."column", b.row limit 50`);
+       order by k.walk_order, b."column", b.row limit ${found.rows.length}`);
     let nextEmpty = 0;
     const lines = found.rows.map(({ row }) => {
-      if (row.bins.length > 0) return row;
+      const cautions = partCautions(row.part);
+      if (row.bins.length > 0) return { ...row, cautions };
       const place = empty.rows[nextEmpty];
       nextEmpty += 1;
-      return { ...row, bins: place ? [{ ...place, onHand: 0 }] : [] };
+      return { ...row, cautions, bins: place ? [{ ...place, onHand: 0 }] : [] };
     });
     return { orderId: input.orderId, number: order.number, state: order.state, supplierName: order.name, lines };
-  },
-});
-
-const receiptRow = z.object({ id: id(), number: z.string(), orderId: id().nullable(), orderNumber: z.string().nullable(), supplierName: z.string().nullable(), deliveryNote: z.string(), receivedBy: z.string(), receivedAt: z.string(), bags: z.number().int(), units: z.number().int() });
-
-export const listReceipts = query({
-  name: 'receipts.list',
-  http: 'GET /receipts',
-  summary: 'List deliveries received, newest first.',
-  roles: 'everyone',
-  input: z.strictObject({ ...pageFields, orderId: id().optional() }),
-  output: pageOf(receiptRow),
-  async run({ tx, actor, input }) {
-    const ofOrder = input.orderId === undefined ? sql`` : sql`and c.order_id = ${input.orderId}`;
-    const found = await tx.execute<{ row: z.output<typeof receiptRow>; total: number }>(sql`
-      select json_build_object('id', c.id, 'number', c.number, 'orderId', c.order_id, 'orderNumber', o.number, 'supplierName', s.name, 'deliveryNote', c.delivery_note, 'receivedBy', p.name,
-               'receivedAt', to_char(c.received_at at time zone 'UTC', 'YYYY-MM-DD"T"HH24:MI:SS"Z"'), 'bags', x.bags, 'units', x.units) as row, count(*) over ()::int as total
-        from receipt c
-        join person p on p.id = c.received_by
-        left join purchase_order o on o.workshop_id = c.workshop_id and o.id = c.order_id
-        left join supplier s on s.workshop_id = c.workshop_id and s.id = c.supplier_id
-        cross join lateral (select count(*)::int as bags, coalesce(sum(l.quantity), 0)::int as units from receipt_line l where l.workshop_id = c.workshop_id and l.receipt_id = c.id) x
-       where c.workshop_id = ${actor.workshopId} ${ofOrder}
-       order by c.received_at desc limit ${input.size} offset ${(input.page - 1) * input.size}`);
-    return { rows: found.rows.map(({ row }) => row), total: found.rows[0]?.total ?? 0, page: input.page, size: input.size };
   },
 });
