@@ -1,12 +1,17 @@
 /** Which function does which job; the job process runs this table. */
 import 'server-only';
+import { matchRevisionJob, matchStockChanged } from './circuits/match-revision';
+import { readUpload } from './circuits/read-upload';
 import { refundPayment } from './purchasing/refund-payment';
 import { mailOrder } from './purchasing/send-order';
 import { handlePaymentEvent } from './purchasing/settle-payment';
 import type { JobHandler, Queue } from './services/jobs';
 import { sendQueuedMail } from './workshop/send-queued-mail';
 
-export const jobHandlers: Partial<Record<Queue, JobHandler>> = {
+export const jobHandlers: Record<Queue, JobHandler> = {
+  'read-upload': readUpload,
+  'match-revision': matchRevisionJob,
+  'match-stock-changed': matchStockChanged,
   'send-mail': sendQueuedMail,
   'send-order': mailOrder,
   'payment-event': handlePaymentEvent,

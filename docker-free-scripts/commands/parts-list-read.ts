@@ -10,7 +10,7 @@ async function main(file: string | undefined): Promise<void> {
   const reading = await readPartsList(readFileSync(file), { fileName: file });
   if (!reading.ok) {
     const place = [reading.sheet === undefined ? null : `sheet ${reading.sheet}`, reading.row === undefined ? null : `row ${reading.row}`, reading.column === undefined ? null : `column ${reading.column}`].filter((one) => one !== null).join(', ');
-    throw new Error(`${place === '' ? '' : `${place}: `}${reading.sentence} ${reading.cure}`);
+    throw new Error(`${place === '' ? '' : `${place}: `}${reading.detail} ${reading.cure}`);
   }
   const { lines, notLines, questions } = reading;
   const printed = {

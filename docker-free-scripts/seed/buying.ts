@@ -10,8 +10,8 @@ import { createOrder } from '@/lib/purchasing/draft-order';
 import { closeOrder, payOrder } from '@/lib/purchasing/pay-order';
 import { sendOrder } from '@/lib/purchasing/send-order';
 import { createSupplier, setOffer } from '@/lib/purchasing/suppliers';
-import { listBins } from '@/lib/stores/bins';
-import { receiptProposal } from '@/lib/stores/read-receipts';
+import { listBins } from '@/lib/stores/list-bins';
+import { receiptProposal } from '@/lib/stores/receipt-proposal';
 import { receiveDelivery } from '@/lib/stores/receive-delivery';
 import { as, type People } from './acting';
 

@@ -7,11 +7,11 @@ import { demoCircuits } from '@/db/seed/circuits';
 import { createCircuit } from '@/lib/circuits/create-circuit';
 import { createRevision } from '@/lib/circuits/create-revision';
 import { matchLines } from '@/lib/circuits/match-revision';
-import { openCount } from '@/lib/stores/count-bins';
+import { openCount } from '@/lib/stores/open-count';
 import { createBatch } from '@/lib/stores/create-batch';
 import { finishBatch } from '@/lib/stores/finish-batch';
 import { pickBatch } from '@/lib/stores/pick-batch';
-import { pickList } from '@/lib/stores/read-batches';
+import { pickList } from '@/lib/stores/pick-list';
 import { reserveBatch } from '@/lib/stores/reserve-batch';
 import { as, type People } from './acting';
 
@@ -56,7 +56,7 @@ export async function makeBatches(workshopId: string, people: People, revisions:
   await as(people.builder, reserveBatch, { batchId: filter.id, allowPart: true });
   const stops = (await as(people.storekeeper, pickList, { batchId: filter.id })).stops;
   const [first] = stops;
-  if (first && 'reservationId' in first) await as(people.storekeeper, pickBatch, { batchId: filter.id, picks: [{ reservationId: first.reservationId, quantity: first.take }] });
+  if (first) await as(people.storekeeper, pickBatch, { batchId: filter.id, picks: first.lines.map((line) => ({ reservationId: line.reservationId, quantity: line.take })) });
 
   const slopes = await plan('Slope Pair C', 2, 9);
   await as(people.builder, reserveBatch, { batchId: slopes.id, allowPart: true });

@@ -6,7 +6,7 @@ import { bin, lot, movement } from '@/db/schema/stores';
 import { type DemoPart, demoParts } from '@/db/seed/catalogue';
 import { toDecimal } from '@/lib/electronics/quantity';
 import { readPartText } from '@/lib/electronics/read-part-text';
-import { createCabinet } from '@/lib/stores/bins';
+import { createCabinet } from '@/lib/stores/create-cabinet';
 import { and, eq } from 'drizzle-orm';
 import { as, type People } from './acting';
 

@@ -1,7 +1,7 @@
 /** What headings are called, in six languages, and which role each word points to. Common practice throughout. */
 
-export const ROLES = ['designators', 'quantity', 'value', 'kind', 'description', 'part-number', 'maker', 'package', 'notes', 'fitted', 'order-code', 'price', 'index', 'ignore'] as const;
-export type Role = (typeof ROLES)[number];
+export const COLUMN_ROLES = ['designators', 'quantity', 'value', 'kind', 'description', 'part-number', 'maker', 'package', 'notes', 'fitted', 'order-code', 'price', 'index', 'ignore'] as const;
+export type Role = (typeof COLUMN_ROLES)[number];
 
 const WORDS: readonly (readonly [Role, RegExp])[] = [
   ['fitted', /^(?:dnp|dnf|dni|fitted|populate[d]?|fit|bestückt|bestueckt|mounted|monté|montado|gemonteerd|do not (?:fit|populate|place))\??$/],

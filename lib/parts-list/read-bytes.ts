@@ -21,18 +21,18 @@ const COMPOUND_FILE = [0xd0, 0xcf, 0x11, 0xe0, 0xa1, 0xb1, 0x1a, 0xe1];
 
 /** Throws ReadingStopped for what is neither text nor a workbook. */
 export function sniff(bytes: Uint8Array): FileKind {
-  if (bytes.length === 0) throw new ReadingStopped({ code: 'empty', sentence: 'The file is empty.', row: 1, column: 'A', cure: 'Save the list again and choose that file.' });
+  if (bytes.length === 0) throw new ReadingStopped({ code: 'empty', detail: 'The file is empty.', row: 1, column: 'A', cure: 'Save the list again and choose that file.' });
   if (startsWith(bytes, ZIP)) return 'workbook';
   if (startsWith(bytes, COMPOUND_FILE)) {
     const isProtected = containsUtf16(bytes, 'EncryptedPackage');
     throw new ReadingStopped(
       isProtected
-        ? { code: 'protected', sentence: 'The workbook is protected by a password.', row: 1, column: 'A', cure: 'Save it without a password and read it again.' }
-        : { code: 'not-a-list', sentence: 'This is a workbook of the old .xls kind.', row: 1, column: 'A', cure: 'Save it as .xlsx or .csv and read it again.' },
+        ? { code: 'protected', detail: 'The workbook is protected by a password.', row: 1, column: 'A', cure: 'Save it without a password and read it again.' }
+        : { code: 'not-a-list', detail: 'This is a workbook of the old .xls kind.', row: 1, column: 'A', cure: 'Save it as .xlsx or .csv and read it again.' },
     );
   }
   for (const [what, signature] of PICTURES) {
-    if (startsWith(bytes, signature)) throw new ReadingStopped({ code: 'not-a-list', sentence: `This is ${what}, whatever its name says.`, row: 1, column: 'A', cure: 'Choose the spreadsheet, a CSV, or paste the table.' });
+    if (startsWith(bytes, signature)) throw new ReadingStopped({ code: 'not-a-list', detail: `This is ${what}, whatever its name says.`, row: 1, column: 'A', cure: 'Choose the spreadsheet, a CSV, or paste the table.' });
   }
   return 'text';
 }
@@ -47,7 +47,7 @@ export function decodeText(bytes: Uint8Array): string {
   const text = decode(bytes);
   // A stray NUL or two is a spreadsheet's slip; many are a binary file.
   const nuls = countNuls(text);
-  if (nuls > 8 && nuls > text.length / 200) throw new ReadingStopped({ code: 'not-a-list', sentence: 'This is no text: it is full of zero bytes.', row: 1, column: 'A', cure: 'Choose the spreadsheet, a CSV, or paste the table.' });
+  if (nuls > 8 && nuls > text.length / 200) throw new ReadingStopped({ code: 'not-a-list', detail: 'This is no text: it is full of zero bytes.', row: 1, column: 'A', cure: 'Choose the spreadsheet, a CSV, or paste the table.' });
   return text.replaceAll('\u0000', '').replace(/^\ufeff/, '');
 }
 

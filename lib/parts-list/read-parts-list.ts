@@ -5,16 +5,16 @@
 import type { TaperConvention } from '@/lib/electronics/read-taper';
 import { type Column, segmentsOf } from './columns';
 import { kindOfDesignator } from './designators';
-import type { Role } from './heading-words';
+import { COLUMN_ROLES, type Role } from './heading-words';
 import { decodeText, sniff } from './read-bytes';
 import { readDelimited } from './read-delimited';
 import { looksLikeMarkdown, readMarkdown } from './read-markdown-table';
 import { readWorkbook } from './read-workbook';
 import { type PartsListProblem, ReadingStopped, type Table, type TableRow } from './table';
-import { type NotLine, type PartsListLine, type Question, RowReader } from './understand-row';
+import { type NotLine, type PartsListLine, type Question, RowReader, textOf } from './understand-row';
 
 export type { Column } from './columns';
-export type { Role } from './heading-words';
+export { COLUMN_ROLES, type Role } from './heading-words';
 export type { PartsListProblem } from './table';
 export type { NotLine, PartsListLine, Question } from './understand-row';
 
@@ -24,8 +24,13 @@ export interface ReadTable {
   readonly rows: readonly TableRow[];
 }
 
+export type ListFormat = 'workbook' | 'markdown' | 'text';
+
 export interface PartsListReading {
   readonly ok: true;
+  readonly format: ListFormat;
+  /** Empty where the file has only one table. */
+  readonly sheets: readonly string[];
   readonly tables: readonly ReadTable[];
   readonly lines: readonly PartsListLine[];
   readonly notLines: readonly NotLine[];
@@ -35,7 +40,7 @@ export interface PartsListReading {
 export interface ReadingOptions {
   readonly fileName?: string;
   /** Roles a person gave, by sheet (null: the only one) and column from 0. */
-  readonly columnRoles?: readonly { readonly sheet: string | null; readonly columns: Readonly<Record<number, Role>> }[];
+  readonly columnRoles?: readonly { readonly sheet: string | null; readonly index: number; readonly role: string }[];
   readonly taperConvention?: TaperConvention;
   /** Called with rows done and rows in all, now and then. */
   readonly onProgress?: (done: number, total: number) => void;
@@ -46,21 +51,22 @@ const ROWS_BETWEEN_BREATHS = 2_000;
 
 export async function readPartsList(bytes: Uint8Array, options: ReadingOptions = {}): Promise<PartsListReading | PartsListProblem> {
   try {
-    return await readTables(await tablesIn(bytes), options);
+    const { format, tables } = await tablesIn(bytes);
+    return await readTables(format, tables, options);
   } catch (error) {
     if (error instanceof ReadingStopped) return error.problem;
     throw error;
   }
 }
 
-async function tablesIn(bytes: Uint8Array): Promise<Table[]> {
-  if (sniff(bytes) === 'workbook') return readWorkbook(bytes);
+async function tablesIn(bytes: Uint8Array): Promise<{ format: ListFormat; tables: Table[] }> {
+  if (sniff(bytes) === 'workbook') return { format: 'workbook', tables: await readWorkbook(bytes) };
   const text = decodeText(bytes);
-  if (text.trim() === '') throw new ReadingStopped({ code: 'empty', sentence: 'The file holds nothing but blanks.', row: 1, column: 'A', cure: 'Save the list again and choose that file.' });
-  return [looksLikeMarkdown(text) ? readMarkdown(text) : readDelimited(text)];
+  if (text.trim() === '') throw new ReadingStopped({ code: 'empty', detail: 'The file holds nothing but blanks.', row: 1, column: 'A', cure: 'Save the list again and choose that file.' });
+  return looksLikeMarkdown(text) ? { format: 'markdown', tables: [readMarkdown(text)] } : { format: 'text', tables: [readDelimited(text)] };
 }
 
-async function readTables(tables: readonly Table[], options: ReadingOptions): Promise<PartsListReading | PartsListProblem> {
+async function readTables(format: ListFormat, tables: readonly Table[], options: ReadingOptions): Promise<PartsListReading | PartsListProblem> {
   const total = tables.reduce((sum, table) => sum + table.rows.length, 0);
   const read: ReadTable[] = [];
   const lines: PartsListLine[] = [];
@@ -68,7 +74,7 @@ async function readTables(tables: readonly Table[], options: ReadingOptions): Pr
   const questions: Question[] = [];
   let done = 0;
   for (const table of tables) {
-    const fixed = options.columnRoles?.find((one) => one.sheet === table.sheet)?.columns ?? null;
+    const fixed = rolesGiven(table.sheet, options);
     const segments = segmentsOf(table.rows, fixed);
     const reader = new RowReader(table.sheet, options.taperConvention ?? 'ask');
     const bySegment: PartsListLine[][] = [];
@@ -76,7 +82,7 @@ async function readTables(tables: readonly Table[], options: ReadingOptions): Pr
     for (const segment of segments) {
       reader.startSegment();
       const here: PartsListLine[] = [];
-      if (segment.heading) notLines.push({ row: segment.heading.row, ...(table.sheet === null ? {} : { sheet: table.sheet }), why: 'heading, no part' });
+      if (segment.heading) notLines.push({ row: segment.heading.row, ...(table.sheet === null ? {} : { sheet: table.sheet }), why: 'heading, no part', text: textOf(segment.heading) });
       for (const row of segment.rows) {
         const understood = reader.understand(row, segment);
         if ('line' in understood) {
@@ -87,7 +93,7 @@ async function readTables(tables: readonly Table[], options: ReadingOptions): Pr
         if (done % ROWS_BETWEEN_BREATHS === 0) {
           options.onProgress?.(done, total);
           await new Promise((resume) => setImmediate(resume));
-          if (options.signal?.aborted) throw new ReadingStopped({ code: 'cancelled', sentence: 'The reading was cancelled.', cure: 'Start it again.' });
+          if (options.signal?.aborted) throw new ReadingStopped({ code: 'cancelled', detail: 'The reading was cancelled.', cure: 'Start it again.' });
         }
       }
       bySegment.push(here);
@@ -95,7 +101,7 @@ async function readTables(tables: readonly Table[], options: ReadingOptions): Pr
     const repeated = repeatedSegments(bySegment);
     bySegment.forEach((here, index) => {
       if (!repeated.has(index)) lines.push(...here);
-      else notLines.push(...here.map((line) => ({ row: line.row, ...(line.sheet === undefined ? {} : { sheet: line.sheet }), why: 'the same list again, grouped elsewhere in the file' })));
+      else notLines.push(...here.map((line) => ({ row: line.row, ...(line.sheet === undefined ? {} : { sheet: line.sheet }), why: 'the same list again, grouped elsewhere in the file', text: line.text })));
     });
     const kept = new Set(bySegment.flatMap((here, index) => (repeated.has(index) ? [] : here.map((line) => line.row))));
     questions.push(...asked.filter((question) => kept.has(question.row)));
@@ -104,10 +110,17 @@ async function readTables(tables: readonly Table[], options: ReadingOptions): Pr
   }
   options.onProgress?.(total, total);
   if (lines.length === 0) {
-    return { ok: false, code: 'no-parts', sentence: 'No row of this file names a part.', row: tables[0]?.rows[0]?.row ?? 1, column: 'A', cure: 'Check that it is the parts list, with designators or quantities and a value or part number in each row.' };
+    return { ok: false, code: 'no-parts', detail: 'No row of this file names a part.', row: tables[0]?.rows[0]?.row ?? 1, column: 'A', cure: 'Check that it is the parts list, with designators or quantities and a value or part number in each row.' };
   }
   const inOrder = (a: { row: number }, b: { row: number }) => a.row - b.row;
-  return { ok: true, tables: read, lines, notLines: tables.length === 1 ? notLines.sort(inOrder) : notLines, questions };
+  return { ok: true, format, sheets: tables.flatMap((table) => table.sheet ?? []), tables: read, lines, notLines: tables.length === 1 ? notLines.sort(inOrder) : notLines, questions };
+}
+
+/** Null where nobody said anything of this sheet. */
+function rolesGiven(sheet: string | null, options: ReadingOptions): Record<number, Role> | null {
+  const said = (options.columnRoles ?? []).filter((one) => one.sheet === sheet);
+  const roles = said.flatMap(({ index, role }) => COLUMN_ROLES.filter((known) => known === role).map((known): [number, Role] => [index, known]));
+  return roles.length === 0 ? null : Object.fromEntries(roles);
 }
 
 /** A list given twice in one file, one row a designator and then grouped: the grouped one is read. */

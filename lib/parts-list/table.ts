@@ -15,7 +15,7 @@ export interface Table {
 export interface PartsListProblem {
   readonly ok: false;
   readonly code: 'empty' | 'not-a-list' | 'protected' | 'damaged' | 'too-many-rows' | 'cell-too-long' | 'too-many-columns' | 'bad-quantity' | 'no-parts' | 'expands-too-far' | 'too-many-sheets' | 'cancelled';
-  readonly sentence: string;
+  readonly detail: string;
   /** 1-based. */
   readonly row?: number;
   /** Spreadsheet letter: A, B, …, AA. */
@@ -41,7 +41,7 @@ export function columnLetters(index: number): string {
 export class ReadingStopped extends Error {
   readonly problem: PartsListProblem;
   constructor(problem: Omit<PartsListProblem, 'ok'>) {
-    super(problem.sentence);
+    super(problem.detail);
     this.problem = { ok: false, ...problem };
   }
 }
@@ -50,13 +50,13 @@ export class ReadingStopped extends Error {
 export function checkRow(row: TableRow, sheet: string | null, count: number): void {
   const place = { row: row.row, ...(sheet === null ? {} : { sheet }) };
   if (count > LIMITS.rows) {
-    throw new ReadingStopped({ code: 'too-many-rows', sentence: `The list has more than ${LIMITS.rows.toLocaleString('en')} rows.`, ...place, cure: 'Split it, or remove what is no part.' });
+    throw new ReadingStopped({ code: 'too-many-rows', detail: `The list has more than ${LIMITS.rows.toLocaleString('en')} rows.`, ...place, cure: 'Split it, or remove what is no part.' });
   }
   row.cells.forEach((cell, index) => {
     if (cell.length > LIMITS.cellCharacters) {
       throw new ReadingStopped({
         code: 'cell-too-long',
-        sentence: `The cell in row ${row.row}, column ${columnLetters(index)} holds ${cell.length.toLocaleString('en')} characters; a spreadsheet cell holds at most ${LIMITS.cellCharacters.toLocaleString('en')}.`,
+        detail: `The cell in row ${row.row}, column ${columnLetters(index)} holds ${cell.length.toLocaleString('en')} characters; a spreadsheet cell holds at most ${LIMITS.cellCharacters.toLocaleString('en')}.`,
         ...place,
         column: columnLetters(index),
         cure: 'Shorten that cell, or close the quotation mark that was left open there.',
@@ -64,6 +64,6 @@ export function checkRow(row: TableRow, sheet: string | null, count: number): vo
     }
   });
   if (row.cells.length > LIMITS.columns && row.cells.slice(LIMITS.columns).some((cell) => cell !== '')) {
-    throw new ReadingStopped({ code: 'too-many-columns', sentence: `Row ${row.row} has ${row.cells.length.toLocaleString('en')} columns; a parts list has at most ${LIMITS.columns}.`, ...place, column: columnLetters(LIMITS.columns), cure: 'Keep only the columns of the list.' });
+    throw new ReadingStopped({ code: 'too-many-columns', detail: `Row ${row.row} has ${row.cells.length.toLocaleString('en')} columns; a parts list has at most ${LIMITS.columns}.`, ...place, column: columnLetters(LIMITS.columns), cure: 'Keep only the columns of the list.' });
   }
 }

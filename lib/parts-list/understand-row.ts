@@ -30,6 +30,8 @@ export interface NotLine {
   readonly row: number;
   readonly sheet?: string;
   readonly why: string;
+  /** What stands there, cells apart. */
+  readonly text: string;
 }
 export interface Question {
   readonly row: number;
@@ -43,6 +45,8 @@ export type Understood = { readonly line: PartsListLine; readonly questions: rea
 
 const TOTAL = /^(?:grand\s+)?(?:total|sum|summe|gesamt(?:summe)?|subtotal|somme|totale|totaal|zwischensumme|suma)\b/i;
 const ARTWORK = /^(?:outline|logo|artwork|fiducial|board outline|silkscreen|frame|\*{2,}.*)$/i;
+
+export const textOf = (row: TableRow): string => row.cells.filter((cell) => cell !== '').join(' · ');
 
 /** What one run over a list remembers: the section it is in, and texts it has read already. */
 export class RowReader {
@@ -62,7 +66,7 @@ export class RowReader {
 
   understand(row: TableRow, segment: Segment): Understood {
     const place = this.sheet === null ? { row: row.row } : { row: row.row, sheet: this.sheet };
-    const notLine = (why: string): Understood => ({ notLine: { ...place, why } });
+    const notLine = (why: string): Understood => ({ notLine: { ...place, why, text: textOf(row) } });
     const { columns } = segment;
     const filled = row.cells.filter((cell) => cell !== '');
     const text = (role: Role) => columns.filter((column) => column.role === role).map((column) => row.cells[column.index] ?? '').filter((cell) => cell !== '').join(' ');
@@ -154,7 +158,7 @@ export class RowReader {
   private quantityIn(text: string, place: { row: number; sheet?: string }, column: string, columns: readonly Column[]): number | null {
     if (text === '' || !columns.some((one) => one.role === 'quantity')) return null;
     const cell = text.normalize('NFKC').trim();
-    const stop = (what: string) => new ReadingStopped({ code: 'bad-quantity', sentence: `The quantity “${text.slice(0, 40)}” in row ${place.row}, column ${column} is ${what}.`, ...place, column, cure: 'Write a whole number of parts, or leave the cell empty.' });
+    const stop = (what: string) => new ReadingStopped({ code: 'bad-quantity', detail: `The quantity “${text.slice(0, 40)}” in row ${place.row}, column ${column} is ${what}.`, ...place, column, cure: 'Write a whole number of parts, or leave the cell empty.' });
     if (/^[-−]\s*\d/.test(cell)) throw stop('negative');
     const number = /^(?:[x×]\s*)?(\d{1,7})(?:[.,](\d+))?\s*(?:[x×]|pcs?\.?|st(?:k|ück)?\.?|pieces?)?(?=$|\s|\()/i.exec(cell);
     if (!number) return null;

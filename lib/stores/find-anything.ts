@@ -3,7 +3,7 @@ import 'server-only';
 import { sql } from 'drizzle-orm';
 import { z } from 'zod';
 import { query } from '@/lib/api/use-case';
-import { searchCondition } from './parts';
+import { searchCondition } from './part-search';
 
 const hit = z.object({ what: z.enum(['bin', 'part', 'order', 'batch', 'count', 'circuit', 'supplier', 'lot']), title: z.string(), detail: z.string(), href: z.string(), exact: z.boolean() });
 

@@ -19,6 +19,11 @@ import { recordMovements } from './record-movements';
 
 const MOST_BAGS = 500;
 
+/** Year and week, YYWW, as makers print it. */
+export const dateCode = z.string().regex(/^\d{2}(?:0[1-9]|[1-4]\d|5[0-3])$/, 'is year and week, such as 2638');
+/** Cost of one unit in the workshop's currency. */
+export const unitCost = z.string().regex(/^\d{1,9}(\.\d{1,6})?$/, 'is a price with at most six places');
+
 const bag = z.strictObject({
   /** The order's line; left out for a part that nobody ordered. */
   orderLineId: id().optional(),
@@ -26,10 +31,9 @@ const bag = z.strictObject({
   binId: id(),
   quantity: z.number().int('must be a whole number').min(1, 'must be at least 1').max(10_000_000),
   lotCode: words(60).optional(),
-  /** Year and week, YYWW, as makers print it. */
-  dateCode: z.string().regex(/^\d{2}(?:0[1-9]|[1-4]\d|5[0-3])$/, 'is year and week, such as 2638').optional(),
-  /** Cost of one unit in the workshop's currency; of an ordered line the order's price counts. */
-  unitCost: z.string().regex(/^\d{1,9}(\.\d{1,6})?$/, 'is a price with at most six places').optional(),
+  dateCode: dateCode.optional(),
+  /** Of an ordered line the order's price counts. */
+  unitCost: unitCost.optional(),
 });
 
 export const receiveDelivery = command({

@@ -216,7 +216,7 @@ describe('correcting a draft', () => {
   it('a column that was taken for the wrong thing is read again, and answers stay', async () => {
     const made = await readIn(csv('Designators,Quantity,Value,Spare', 'R1,1,10k,22k', 'RV1,1,B50k,A10k'));
     await act(answerQuestion, ours.as.builder, { questionId: made.questions[0]?.id ?? '', answer: 'linear' });
-    const again = await act(changeColumnRole, ours.as.builder, { revisionId: made.id, index: 3, role: 'ignored' });
+    const again = await act(changeColumnRole, ours.as.builder, { revisionId: made.id, index: 3, role: 'ignore' });
     expect(again).toMatchObject({ lines: 2, openQuestions: 0 });
     expect((await linesOf(made.id)).map((one) => one.spec.value?.significand)).toEqual([1, 5]);
     expect((await linesOf(made.id))[1]?.spec.taper).toBe('linear');
@@ -245,7 +245,7 @@ describe('a frozen revision', () => {
       () => act(changeLine, ours.as.builder, { lineId, quantity: 9 }),
       () => act(dropLine, ours.as.builder, { lineId }),
       () => act(takeRowAsLine, ours.as.builder, { revisionId: made.id, row: 1, text: '10k' }),
-      () => act(changeColumnRole, ours.as.builder, { revisionId: made.id, index: 3, role: 'ignored' }),
+      () => act(changeColumnRole, ours.as.builder, { revisionId: made.id, index: 3, role: 'ignore' }),
       () => act(freezeRevision, ours.as.builder, { revisionId: made.id }),
     ]) {
       await expect(tried()).rejects.toMatchObject({ code: 'state.refused' });

@@ -128,7 +128,7 @@ const portOf = (server: Server): number => (server.address() as AddressInfo).por
 function launch(variables: Record<string, string>): { child: ChildProcess; errors: () => string } {
   // Nothing of the caller's environment but what a process needs to run: a stray variable would decide a test.
   const child = spawn(process.execPath, ['--import', 'tsx', MAIN], {
-    env: { PATH: process.env.PATH ?? '', HOME: process.env.HOME ?? '', ...variables },
+    env: { NODE_ENV: 'test', PATH: process.env.PATH ?? '', HOME: process.env.HOME ?? '', ...variables },
     stdio: ['ignore', 'pipe', 'pipe'],
   });
   let errors = '';

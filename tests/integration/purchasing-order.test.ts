@@ -11,7 +11,7 @@ import { orderAsCsv, orderAsPdf, sendOrder } from '@/lib/purchasing/send-order';
 import { listShortfalls } from '@/lib/purchasing/shortfalls';
 import { createSupplier, setOffer } from '@/lib/purchasing/suppliers';
 import { createBatch } from '@/lib/stores/create-batch';
-import { receiptProposal } from '@/lib/stores/read-receipts';
+import { receiptProposal } from '@/lib/stores/receipt-proposal';
 import { receiveDelivery } from '@/lib/stores/receive-delivery';
 import { reserveBatch } from '@/lib/stores/reserve-batch';
 import { type Bins, expectLedgerHolds, makeBins, makePart, makeRevision, stock } from '../support/shelf';

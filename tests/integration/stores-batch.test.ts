@@ -3,12 +3,15 @@ import { sql } from 'drizzle-orm';
 import { closeDatabase, withWorkshop } from '@/db/client';
 import { newId } from '@/db/schema/new-id';
 import { createBatch } from '@/lib/stores/create-batch';
-import { cancelBatch, finishBatch } from '@/lib/stores/finish-batch';
-import { missingAtPick, pickBatch } from '@/lib/stores/pick-batch';
-import { getBatch, pickList } from '@/lib/stores/read-batches';
-import { listMovements } from '@/lib/stores/read-ledger';
-import { getPart } from '@/lib/stores/parts';
-import { listBins } from '@/lib/stores/bins';
+import { cancelBatch } from '@/lib/stores/cancel-batch';
+import { finishBatch } from '@/lib/stores/finish-batch';
+import { missingAtPick } from '@/lib/stores/missing-at-pick';
+import { pickBatch } from '@/lib/stores/pick-batch';
+import { getBatch } from '@/lib/stores/get-batch';
+import { pickList } from '@/lib/stores/pick-list';
+import { listMovements } from '@/lib/stores/list-movements';
+import { getPart } from '@/lib/stores/get-part';
+import { listBins } from '@/lib/stores/list-bins';
 import { reserveBatch } from '@/lib/stores/reserve-batch';
 import { type Bins, expectLedgerHolds, makeBins, makePart, makeRevision, stock } from '../support/shelf';
 import { act, makeWorkshop, type TestWorkshop } from '../support/workshop';
@@ -41,7 +44,7 @@ describe('a batch', () => {
 
     const list = await act(pickList, shop.as.storekeeper, { batchId: batch.id });
     expect(list.stops.map((stop) => [stop.binCode, stop.take])).toEqual([['A-01-1', 3], ['A-03-2', 12]]);
-    const half = await act(pickBatch, shop.as.storekeeper, { batchId: batch.id, picks: [{ reservationId: list.stops[0]?.reservationId ?? '', quantity: 3 }] });
+    const half = await act(pickBatch, shop.as.storekeeper, { batchId: batch.id, picks: [{ reservationId: list.stops[0]?.lines[0]?.reservationId ?? '', quantity: 3 }] });
     expect(half).toMatchObject({ state: 'picking', openUnits: 12 });
     expect(await act(pickBatch, shop.as.storekeeper, { batchId: batch.id })).toMatchObject({ state: 'kitted', openUnits: 0 });
 

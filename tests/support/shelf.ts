@@ -4,9 +4,10 @@ import { withWorkshop } from '@/db/client';
 import { circuit, decision, line, revision } from '@/db/schema/circuits';
 import { newId } from '@/db/schema/new-id';
 import { checkLedger } from '@/lib/stores/check-ledger';
-import { createCabinet, listBins } from '@/lib/stores/bins';
-import { openingStock } from '@/lib/stores/move-stock';
-import { createPart } from '@/lib/stores/parts';
+import { createCabinet } from '@/lib/stores/create-cabinet';
+import { listBins } from '@/lib/stores/list-bins';
+import { openingStock } from '@/lib/stores/opening-stock';
+import { createPart } from '@/lib/stores/create-part';
 import { expect } from 'vitest';
 import { act, type TestWorkshop } from './workshop';
 

@@ -1,5 +1,6 @@
 import { route } from '@/lib/api/route';
-import { createCabinet, listCabinets } from '@/lib/stores/bins';
+import { createCabinet } from '@/lib/stores/create-cabinet';
+import { listCabinets } from '@/lib/stores/list-cabinets';
 
 export const GET = route(listCabinets);
 export const POST = route(createCabinet);

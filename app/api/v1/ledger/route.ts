@@ -1,4 +1,4 @@
 import { route } from '@/lib/api/route';
-import { listMovements } from '@/lib/stores/read-ledger';
+import { listMovements } from '@/lib/stores/list-movements';
 
 export const GET = route(listMovements);

@@ -1,4 +1,4 @@
 import { route } from '@/lib/api/route';
-import { listLots } from '@/lib/stores/read-ledger';
+import { listLots } from '@/lib/stores/list-lots';
 
 export const GET = route(listLots);

@@ -1,5 +1,5 @@
 import { route } from '@/lib/api/route';
-import { listReceipts } from '@/lib/stores/read-receipts';
+import { listReceipts } from '@/lib/stores/list-receipts';
 import { receiveDelivery } from '@/lib/stores/receive-delivery';
 
 export const GET = route(listReceipts);

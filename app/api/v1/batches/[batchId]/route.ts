@@ -1,4 +1,4 @@
 import { route } from '@/lib/api/route';
-import { getBatch } from '@/lib/stores/read-batches';
+import { getBatch } from '@/lib/stores/get-batch';
 
 export const GET = route(getBatch);

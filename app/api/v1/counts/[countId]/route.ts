@@ -1,4 +1,4 @@
 import { route } from '@/lib/api/route';
-import { getCount } from '@/lib/stores/read-counts';
+import { getCount } from '@/lib/stores/get-count';
 
 export const GET = route(getCount);

@@ -1,4 +1,4 @@
 import { route } from '@/lib/api/route';
-import { openingStock } from '@/lib/stores/move-stock';
+import { openingStock } from '@/lib/stores/opening-stock';
 
 export const POST = route(openingStock);

@@ -1,4 +1,4 @@
 import { route } from '@/lib/api/route';
-import { scrapStock } from '@/lib/stores/move-stock';
+import { scrapStock } from '@/lib/stores/scrap-stock';
 
 export const POST = route(scrapStock);

@@ -1,5 +1,6 @@
 import { route } from '@/lib/api/route';
-import { changePart, getPart } from '@/lib/stores/parts';
+import { changePart } from '@/lib/stores/change-part';
+import { getPart } from '@/lib/stores/get-part';
 
 export const GET = route(getPart);
 export const PATCH = route(changePart);

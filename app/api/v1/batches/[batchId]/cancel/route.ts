@@ -1,4 +1,4 @@
 import { route } from '@/lib/api/route';
-import { cancelBatch } from '@/lib/stores/finish-batch';
+import { cancelBatch } from '@/lib/stores/cancel-batch';
 
 export const POST = route(cancelBatch);

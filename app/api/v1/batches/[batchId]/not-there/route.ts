@@ -1,4 +1,4 @@
 import { route } from '@/lib/api/route';
-import { missingAtPick } from '@/lib/stores/pick-batch';
+import { missingAtPick } from '@/lib/stores/missing-at-pick';
 
 export const POST = route(missingAtPick);

@@ -1,4 +1,4 @@
 import { route } from '@/lib/api/route';
-import { pickList } from '@/lib/stores/read-batches';
+import { pickList } from '@/lib/stores/pick-list';
 
 export const GET = route(pickList);

@@ -1,4 +1,4 @@
 import { route } from '@/lib/api/route';
-import { retireBin } from '@/lib/stores/bins';
+import { retireBin } from '@/lib/stores/retire-bin';
 
 export const POST = route(retireBin);

@@ -1,4 +1,4 @@
 import { route } from '@/lib/api/route';
-import { abandonCount } from '@/lib/stores/count-bins';
+import { abandonCount } from '@/lib/stores/abandon-count';
 
 export const POST = route(abandonCount);

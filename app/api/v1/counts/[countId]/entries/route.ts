@@ -1,4 +1,4 @@
 import { route } from '@/lib/api/route';
-import { enterCounts } from '@/lib/stores/count-bins';
+import { enterCounts } from '@/lib/stores/enter-counts';
 
 export const POST = route(enterCounts);

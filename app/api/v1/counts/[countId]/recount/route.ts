@@ -1,4 +1,4 @@
 import { route } from '@/lib/api/route';
-import { recountEntries } from '@/lib/stores/count-bins';
+import { recountEntries } from '@/lib/stores/recount-entries';
 
 export const POST = route(recountEntries);

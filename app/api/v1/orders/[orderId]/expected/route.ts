@@ -1,4 +1,4 @@
 import { route } from '@/lib/api/route';
-import { receiptProposal } from '@/lib/stores/read-receipts';
+import { receiptProposal } from '@/lib/stores/receipt-proposal';
 
 export const GET = route(receiptProposal);
