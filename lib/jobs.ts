@@ -1,6 +1,6 @@
 /** Which function does which job; the job process runs this table. */
 import 'server-only';
-import { matchRevisionJob, matchStockChanged } from './circuits/match-revision';
+import { matchRevision, matchStockChanged } from './circuits/match-revision';
 import { readUpload } from './circuits/read-upload';
 import { refundPayment } from './purchasing/refund-payment';
 import { mailOrder } from './purchasing/send-order';
@@ -10,7 +10,7 @@ import { sendQueuedMail } from './workshop/send-queued-mail';
 
 export const jobHandlers: Record<Queue, JobHandler> = {
   'read-upload': readUpload,
-  'match-revision': matchRevisionJob,
+  'match-revision': matchRevision,
   'match-stock-changed': matchStockChanged,
   'send-mail': sendQueuedMail,
   'send-order': mailOrder,
