@@ -104,8 +104,8 @@ export async function makeOrders(workshopId: string, people: People, suppliers: 
   const paid = await submitted(suppliers.quillfern, [['knob 13 mm', 60]]);
   await markPaid(workshopId, paid, people.buyer.personId);
   await submitted(suppliers.quillfern, [['B100k pot', 20], ['A100k pot', 10]]);
-  await submitted(suppliers.brasskettle, [['AS3320', 60]], 'for the spring run');
-  const second = await submitted(suppliers.brasskettle, [['AS3320', 55]]);
+  await submitted(suppliers.brasskettle, [['AS3320', 160]], 'for the spring run');
+  const second = await submitted(suppliers.brasskettle, [['AS3320', 120]]);
   await as(people.lead, approveOrder, { orderId: second });
   await as(people.buyer, cancelOrder, { orderId: second, reason: 'ordered twice' });
   await draft(suppliers.quillfern, [['LED green 3 mm', 50]]);
