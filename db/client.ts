@@ -27,7 +27,8 @@ const holder = globalThis as typeof globalThis & { ohmsteadDatabase?: { pool: pg
 function database(): { pool: pg.Pool; db: Database } {
   if (!holder.ohmsteadDatabase) {
     const connectionString = process.env.DATABASE_URL;
-    if (!connectionString) throw new Error('DATABASE_URL is not set: expected postgres://ohmstead_app:…@127.0.0.1:PORT/NAME');
+    if (!connectionString)
+      throw new Error('DATABASE_URL is not set: expected postgres://ohmstead_app:…@127.0.0.1:PORT/NAME');
     const pool = new pg.Pool({
       connectionString,
       max: POOL_SIZE,
@@ -71,7 +72,11 @@ export function databaseFault(error: unknown): DatabaseFault | null {
   return null;
 }
 
-async function transact<T>(setting: ReturnType<typeof sql>, run: (tx: Tx) => Promise<T>, readOnly: boolean): Promise<T> {
+async function transact<T>(
+  setting: ReturnType<typeof sql>,
+  run: (tx: Tx) => Promise<T>,
+  readOnly: boolean,
+): Promise<T> {
   for (let attempt = 1; ; attempt += 1) {
     try {
       return await database().db.transaction(
@@ -93,7 +98,11 @@ async function transact<T>(setting: ReturnType<typeof sql>, run: (tx: Tx) => Pro
  * Runs `run` in one transaction of the workshop. Serialization failures and deadlocks run it again, at most five times,
  * so it must not touch anything outside the transaction.
  */
-export function withWorkshop<T>(workshopId: string, run: (tx: Tx) => Promise<T>, { readOnly = false } = {}): Promise<T> {
+export function withWorkshop<T>(
+  workshopId: string,
+  run: (tx: Tx) => Promise<T>,
+  { readOnly = false } = {},
+): Promise<T> {
   return transact(sql`select set_config('app.workshop_id', ${workshopId}, true)`, run, readOnly);
 }
 

@@ -5,4 +5,9 @@ import { purchasingUseCases } from './purchasing/use-cases';
 import { storesUseCases } from './stores/use-cases';
 import { workshopUseCases } from './workshop/use-cases';
 
-export const useCases: readonly UseCase[] = [...circuitsUseCases, ...storesUseCases, ...purchasingUseCases, ...workshopUseCases];
+export const useCases: readonly UseCase[] = [
+  ...circuitsUseCases,
+  ...storesUseCases,
+  ...purchasingUseCases,
+  ...workshopUseCases,
+];

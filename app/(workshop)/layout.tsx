@@ -30,7 +30,11 @@ export default async function WorkshopLayout({ children }: { readonly children: 
         person={{ name: me.name, roles: me.roles }}
         signOut={signOut}
         switchWorkshop={switchWorkshop}
-        banner={process.env.OHMSTEAD_SERVICES === 'fake' ? 'Local stand-ins for payments, mail and uploads: no money moves, no mail leaves this machine.' : null}
+        banner={
+          process.env.OHMSTEAD_SERVICES === 'fake'
+            ? 'Local stand-ins for payments, mail and uploads: no money moves, no mail leaves this machine.'
+            : null
+        }
       >
         {children}
       </WorkshopShell>

@@ -8,7 +8,18 @@ import { whatWaits } from '@/lib/workshop/what-waits';
 
 export const metadata: Metadata = { title: 'Today' };
 
-const NUMBER_WORDS = ['Nothing waits', 'One thing waits', 'Two things wait', 'Three things wait', 'Four things wait', 'Five things wait', 'Six things wait', 'Seven things wait', 'Eight things wait', 'Nine things wait'];
+const NUMBER_WORDS = [
+  'Nothing waits',
+  'One thing waits',
+  'Two things wait',
+  'Three things wait',
+  'Four things wait',
+  'Five things wait',
+  'Six things wait',
+  'Seven things wait',
+  'Eight things wait',
+  'Nine things wait',
+];
 
 export default async function TodayPage() {
   const { waiting, recent } = await ask(whatWaits, {});
@@ -47,7 +58,10 @@ export default async function TodayPage() {
           <ul className="mt-1">
             {recent.map((entry, index) => (
               // Lines of a ledger page never change places.
-              <li key={index} className="grid grid-cols-[3.5rem_8rem_1fr_auto] items-baseline gap-x-4 border-b border-hair py-1.5 max-sm:grid-cols-[3.5rem_1fr_auto]">
+              <li
+                key={index}
+                className="grid grid-cols-[3.5rem_8rem_1fr_auto] items-baseline gap-x-4 border-b border-hair py-1.5 max-sm:grid-cols-[3.5rem_1fr_auto]"
+              >
                 <span className="font-mono text-small text-soft">{clockText(entry.at)}</span>
                 <span className="max-sm:col-span-2">{entry.person}</span>
                 <span className="max-sm:col-span-2 max-sm:col-start-2 max-sm:row-start-2">{entry.said}</span>

@@ -34,7 +34,11 @@ export function LookPad() {
   const say = useSay();
   return (
     <div className="max-w-xs">
-      <KeyPad label="How many are there" onEnter={(value) => say({ text: `Counted ${value}`, action: { word: 'Undo', run: () => undefined } })} unit="pieces" />
+      <KeyPad
+        label="How many are there"
+        onEnter={(value) => say({ text: `Counted ${value}`, action: { word: 'Undo', run: () => undefined } })}
+        unit="pieces"
+      />
     </div>
   );
 }

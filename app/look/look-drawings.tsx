@@ -9,7 +9,10 @@ import { ResistorDrawing } from '@/components/drawings/resistor-drawing';
 import { To92Drawing } from '@/components/drawings/to92-drawing';
 import { Section } from '@/components/ui/section';
 
-const CONTENTS = '100R 220R 470R 1k 2k2 4k7 10k 22k 47k 100k 220k 470k 1M 120k 18k 33k 15k 1k5 10n 22n 47n 100n 1n 2n2 4n7 10u'.split(' ');
+const CONTENTS =
+  '100R 220R 470R 1k 2k2 4k7 10k 22k 47k 100k 220k 470k 1M 120k 18k 33k 15k 1k5 10n 22n 47n 100n 1n 2n2 4n7 10u'.split(
+    ' ',
+  );
 
 const BINS: readonly DrawnBin[] = CONTENTS.map((content, index) => {
   const column = (index % 13) + 1;
@@ -36,9 +39,18 @@ export function LookDrawings() {
       </Section>
       <Section title="Drawn parts">
         <div className="flex flex-wrap items-center gap-x-8 gap-y-5">
-          <ResistorDrawing bands={['brown', 'black', 'black', 'orange', 'brown']} body="blue" name="brown, black, black, orange, brown" />
+          <ResistorDrawing
+            bands={['brown', 'black', 'black', 'orange', 'brown']}
+            body="blue"
+            name="brown, black, black, orange, brown"
+          />
           <ResistorDrawing bands={['brown', 'black', 'green', 'gold']} body="tan" name="brown, black, green, gold" />
-          <ResistorDrawing bands={['grey', 'white', 'silver', 'pink', 'white']} body="blue" name="odd colours" scale={2} />
+          <ResistorDrawing
+            bands={['grey', 'white', 'silver', 'pink', 'white']}
+            body="blue"
+            name="odd colours"
+            scale={2}
+          />
           <CapacitorDrawing shape="disc" mark="104" name="disc marked 104" />
           <CapacitorDrawing shape="box" mark="2n2" second="63" name="film box marked 2n2" />
           <CapacitorDrawing shape="can" mark="10µF" second="25V" name="can" />

@@ -34,7 +34,13 @@ const COLUMNS = [
     ...DRAWN_COLUMN,
     colId: 'look',
     headerName: 'Look for',
-    cellRenderer: () => <ResistorDrawing bands={['brown', 'black', 'black', 'brown', 'brown']} body="blue" name="brown, black, black, brown, brown" />,
+    cellRenderer: () => (
+      <ResistorDrawing
+        bands={['brown', 'black', 'black', 'brown', 'brown']}
+        body="blue"
+        name="brown, black, black, brown, brown"
+      />
+    ),
   },
   { ...NUMBER_COLUMN, field: 'need' as const, headerName: 'Need', width: 90 },
   { ...NUMBER_COLUMN, field: 'free' as const, headerName: 'Free', width: 90 },
@@ -71,7 +77,16 @@ export function LookGrid() {
         />
       </Section>
       <Section title="Grid, fetched">
-        <Grid<Line> label="Lines fetched" columns={COLUMNS} source={fetchLines} rowId={(row) => row.id} select="many" height={300} hideOnPhone={['look']} empty={<EmptyState title="No lines" />} />
+        <Grid<Line>
+          label="Lines fetched"
+          columns={COLUMNS}
+          source={fetchLines}
+          rowId={(row) => row.id}
+          select="many"
+          height={300}
+          hideOnPhone={['look']}
+          empty={<EmptyState title="No lines" />}
+        />
       </Section>
     </>
   );

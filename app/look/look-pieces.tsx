@@ -69,7 +69,8 @@ export function LookPieces() {
         beside={
           <Sheet title="U3: may CD4011BE stand in?">
             <p>
-              <Verdict verdict="refused" word="Refused" strong /> in a timing place a plain NAND does not oscillate cleanly.
+              <Verdict verdict="refused" word="Refused" strong /> in a timing place a plain NAND does not oscillate
+              cleanly.
             </p>
             <div className="my-4">
               <Table label="Wanted and offered" dense>
@@ -96,9 +97,15 @@ export function LookPieces() {
               </Table>
             </div>
             <p className="mb-2">
-              <strong className="font-semibold">Effect on “Clock rate”</strong> <span className="text-soft">U3, R12, C9</span>
+              <strong className="font-semibold">Effect on “Clock rate”</strong>{' '}
+              <span className="text-soft">U3, R12, C9</span>
             </p>
-            <BandedRange label="Clock rate" bandPercent={5} asked={{ percent: 0, lowPercent: -2.4, highPercent: 2.5, text: '4.21 Hz' }} offered={null} />
+            <BandedRange
+              label="Clock rate"
+              bandPercent={5}
+              asked={{ percent: 0, lowPercent: -2.4, highPercent: 2.5, text: '4.21 Hz' }}
+              offered={null}
+            />
             <BandedRange
               label="Clock rate"
               bandPercent={5}
@@ -135,7 +142,11 @@ export function LookPieces() {
                   {index === 3 ? (
                     <IcDrawing pins={14} mark="CD4093BE" name="IC, 14 pins, marked CD4093BE" />
                   ) : (
-                    <ResistorDrawing bands={['yellow', 'violet', 'black', 'brown', 'brown']} body="blue" name="yellow, violet, black, brown, brown" />
+                    <ResistorDrawing
+                      bands={['yellow', 'violet', 'black', 'brown', 'brown']}
+                      body="blue"
+                      name="yellow, violet, black, brown, brown"
+                    />
                   )}
                 </Cell>
                 <Cell label="Need" number>
@@ -190,7 +201,13 @@ export function LookPieces() {
           <TextField label="Part number" mono defaultValue="TL072CP" hint="As it stands on the part." />
           <NumberField label="Units" defaultValue="2" error="Only whole numbers from 1 to 500." />
           <NumberField label="Rail" unit="V" whole={false} optional defaultValue="12" />
-          <SelectField label="Cabinet" options={[{ value: 'a', label: 'Cabinet A, back room' }, { value: 'b', label: 'Cabinet B' }]} />
+          <SelectField
+            label="Cabinet"
+            options={[
+              { value: 'a', label: 'Cabinet A, back room' },
+              { value: 'b', label: 'Cabinet B' },
+            ]}
+          />
           <TextArea label="Note" optional />
           <CheckboxField label="Remember for this workshop" hint="Asked again when the text differs." />
         </div>
@@ -198,7 +215,13 @@ export function LookPieces() {
       <div className="grid gap-8 sm:grid-cols-2">
         <Section title="On the way">
           <div className="grid gap-4">
-            <ProgressBar label="Reading lines" done={412} total={1000} unit="lines" note="You may leave this page; it goes on." />
+            <ProgressBar
+              label="Reading lines"
+              done={412}
+              total={1000}
+              unit="lines"
+              note="You may leave this page; it goes on."
+            />
             <ProgressBar label="Looking through the price list" done={83} total={null} unit="rows" />
             <SkeletonRows rows={3} what="lines" />
             <CopyText text="2026-0041-K7Q2" label="the order number" />

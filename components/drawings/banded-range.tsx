@@ -36,7 +36,12 @@ export function BandedRange({
   const inside = offered !== null && Math.abs(offered.percent) <= bandPercent;
   const offeredInk = inside ? 'amber' : 'oxide';
   return (
-    <svg viewBox={`0 0 ${WIDTH} ${offered === null ? 76 : 96}`} className="block w-full max-w-[30rem]" role="img" aria-label={rangeName({ label, bandPercent, asked, offered })}>
+    <svg
+      viewBox={`0 0 ${WIDTH} ${offered === null ? 76 : 96}`}
+      className="block w-full max-w-[30rem]"
+      role="img"
+      aria-label={rangeName({ label, bandPercent, asked, offered })}
+    >
       <rect x={left} y="10" width={right - left} height="26" className="fill-mask-wash" />
       <path d={`M${MARGIN - 8} 36H${WIDTH - MARGIN + 8}`} className="stroke-rule" strokeWidth="1" />
       <Whisker point={asked} x={x} y={20} stroke="stroke-ink" fill="fill-ink" />
@@ -64,7 +69,13 @@ export function BandedRange({
             fill={offeredInk === 'amber' ? 'fill-amber' : 'fill-oxide'}
           />
           {/* A square for the offered, a disc for the asked: told apart without colour. */}
-          <rect x={x(offered.percent) - 3.5} y="64.5" width="7" height="7" className={offeredInk === 'amber' ? 'fill-amber' : 'fill-oxide'} />
+          <rect
+            x={x(offered.percent) - 3.5}
+            y="64.5"
+            width="7"
+            height="7"
+            className={offeredInk === 'amber' ? 'fill-amber' : 'fill-oxide'}
+          />
           <path d={`M${left} 36v40M${right} 36v40`} className="stroke-rule" strokeWidth="1" strokeDasharray="2 3" />
           <Label x={x(offered.percent)} y={88} strong>
             {offered.text}
@@ -91,14 +102,36 @@ function Whisker({
   if (point.lowPercent === undefined || point.highPercent === undefined) return null;
   const low = x(point.lowPercent);
   const high = x(point.highPercent);
-  return <path d={`M${low} ${y - 4}v8M${high} ${y - 4}v8M${low} ${y}H${high}`} className={`${stroke} ${fill}`} strokeWidth="1.6" />;
+  return (
+    <path
+      d={`M${low} ${y - 4}v8M${high} ${y - 4}v8M${low} ${y}H${high}`}
+      className={`${stroke} ${fill}`}
+      strokeWidth="1.6"
+    />
+  );
 }
 
-function Label({ x, y, strong = false, children }: { readonly x: number; readonly y: number; readonly strong?: boolean; readonly children: string }) {
+function Label({
+  x,
+  y,
+  strong = false,
+  children,
+}: {
+  readonly x: number;
+  readonly y: number;
+  readonly strong?: boolean;
+  readonly children: string;
+}) {
   const half = children.length * 3.6;
   const kept = Math.min(WIDTH - half, Math.max(half, x));
   return (
-    <text x={kept} y={y} fontSize="11.5" textAnchor="middle" className={`font-mono ${strong ? 'fill-ink font-semibold' : 'fill-soft'}`}>
+    <text
+      x={kept}
+      y={y}
+      fontSize="11.5"
+      textAnchor="middle"
+      className={`font-mono ${strong ? 'fill-ink font-semibold' : 'fill-soft'}`}
+    >
       {children}
     </text>
   );
@@ -106,7 +139,15 @@ function Label({ x, y, strong = false, children }: { readonly x: number; readonl
 
 /** Percent to drawing units, wide enough for the band with room beside it and for both spreads. */
 function scale(bandPercent: number, asked: RangePoint, offered: RangePoint | null): (percent: number) => number {
-  const reaches = [bandPercent * 1.9, asked.percent, asked.lowPercent, asked.highPercent, offered?.percent, offered?.lowPercent, offered?.highPercent];
+  const reaches = [
+    bandPercent * 1.9,
+    asked.percent,
+    asked.lowPercent,
+    asked.highPercent,
+    offered?.percent,
+    offered?.lowPercent,
+    offered?.highPercent,
+  ];
   const reach = Math.max(...reaches.map((value) => Math.abs(value ?? 0)), 0.001) * 1.04;
   return (percent) => WIDTH / 2 + (percent / reach) * (WIDTH / 2 - MARGIN);
 }
@@ -132,7 +173,9 @@ export function rangeName({
   readonly offered: RangePoint | null;
 }): string {
   const spread = (point: RangePoint) =>
-    point.lowPercent === undefined || point.highPercent === undefined ? '' : `, spread ${signed(point.lowPercent)} to ${signed(point.highPercent)}`;
+    point.lowPercent === undefined || point.highPercent === undefined
+      ? ''
+      : `, spread ${signed(point.lowPercent)} to ${signed(point.highPercent)}`;
   const first = `${label}: ${asked.text} as asked for${spread(asked)}, band ±${plain(bandPercent)} %.`;
   if (offered === null) return `${first} The part offered gives no figure.`;
   const where = Math.abs(offered.percent) <= bandPercent ? 'inside the band' : 'outside the band';

@@ -1,6 +1,20 @@
 /** How the bands of IEC 60062 are named and filled when drawn. */
 
-export const BAND_COLOURS = ['black', 'brown', 'red', 'orange', 'yellow', 'green', 'blue', 'violet', 'grey', 'white', 'gold', 'silver', 'pink'] as const;
+export const BAND_COLOURS = [
+  'black',
+  'brown',
+  'red',
+  'orange',
+  'yellow',
+  'green',
+  'blue',
+  'violet',
+  'grey',
+  'white',
+  'gold',
+  'silver',
+  'pink',
+] as const;
 export type BandColour = (typeof BAND_COLOURS)[number];
 
 // Written out, because Tailwind keeps only the class names that it can read in the source.

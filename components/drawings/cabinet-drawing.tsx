@@ -27,7 +27,15 @@ export interface DrawnBin {
   readonly span?: number;
 }
 
-export function CabinetDrawing({ label, columns, bins }: { readonly label: string; readonly columns: number; readonly bins: readonly DrawnBin[] }) {
+export function CabinetDrawing({
+  label,
+  columns,
+  bins,
+}: {
+  readonly label: string;
+  readonly columns: number;
+  readonly bins: readonly DrawnBin[];
+}) {
   const inOrder = [...bins].sort((a, b) => a.row - b.row || a.column - b.column);
   return (
     <div role="region" aria-label={label} tabIndex={0} className="max-w-full overflow-x-auto p-1">
@@ -45,7 +53,11 @@ export function CabinetDrawing({ label, columns, bins }: { readonly label: strin
 function Drawer({ bin }: { readonly bin: DrawnBin }) {
   const lit = bin.stop !== undefined && bin.stop !== null;
   const share = bin.fill === null ? 0 : Math.min(1, Math.max(0, bin.fill));
-  const edge = bin.selected ? 'border-2 border-ink' : lit ? 'border-2 border-copper' : 'border border-rule hover:border-copper';
+  const edge = bin.selected
+    ? 'border-2 border-ink'
+    : lit
+      ? 'border-2 border-copper'
+      : 'border border-rule hover:border-copper';
   return (
     <Link
       href={bin.href}
@@ -61,7 +73,9 @@ function Drawer({ bin }: { readonly bin: DrawnBin }) {
         <span className="h-1 w-6 bg-soft" />
       </span>
       <span aria-hidden className="relative block px-1.5 pt-1 leading-tight">
-        <span className={`block truncate font-mono text-small font-semibold ${bin.content === null ? 'text-soft' : ''} ${bin.countDue ? 'pr-3' : ''}`}>
+        <span
+          className={`block truncate font-mono text-small font-semibold ${bin.content === null ? 'text-soft' : ''} ${bin.countDue ? 'pr-3' : ''}`}
+        >
           {bin.content ?? '–'}
         </span>
         <span className="block truncate font-mono text-[0.6875rem] text-soft">{bin.code}</span>
@@ -86,8 +100,10 @@ function Drawer({ bin }: { readonly bin: DrawnBin }) {
 /** What a screen reader says of a drawer. */
 export function binName(bin: DrawnBin): string {
   const parts = [`Bin ${bin.code}`, bin.contentName ?? bin.content ?? 'nothing assigned'];
-  if (bin.fill !== null) parts.push(bin.fill <= 0 ? 'empty' : `about ${Math.max(1, Math.round(Math.min(1, bin.fill) * 100))} % full`);
-  if (bin.stop !== undefined && bin.stop !== null) parts.push(bin.stopDone ? `stop ${bin.stop} of the pick, taken` : `stop ${bin.stop} of the pick`);
+  if (bin.fill !== null)
+    parts.push(bin.fill <= 0 ? 'empty' : `about ${Math.max(1, Math.round(Math.min(1, bin.fill) * 100))} % full`);
+  if (bin.stop !== undefined && bin.stop !== null)
+    parts.push(bin.stopDone ? `stop ${bin.stop} of the pick, taken` : `stop ${bin.stop} of the pick`);
   if (bin.countDue) parts.push('due for a count');
   return parts.join(', ');
 }

@@ -43,7 +43,11 @@ export function CapacitorDrawing({
     return (
       <DrawingFrame width={40} height={36} {...size}>
         <path d="M14 24v11M26 24v11" className="stroke-part-lead" strokeWidth="1.6" />
-        <path d="M20 1.5C31 1.5 36 8 35 15c-.8 6-5 10.5-9 11.5H14C10 25.5 5.8 21 5 15 4 8 9 1.5 20 1.5z" className="fill-part-tantalum stroke-part-outline" strokeWidth="1" />
+        <path
+          d="M20 1.5C31 1.5 36 8 35 15c-.8 6-5 10.5-9 11.5H14C10 25.5 5.8 21 5 15 4 8 9 1.5 20 1.5z"
+          className="fill-part-tantalum stroke-part-outline"
+          strokeWidth="1"
+        />
         <Print x={20} y={10} size={9.5} fill="fill-part-dark" fit={26}>
           {mark}
         </Print>
@@ -59,7 +63,11 @@ export function CapacitorDrawing({
       {/* Lying on its side, leads to the right, as it comes out of a bag; the stripe runs along the negative lead. */}
       <path d="M52 9h12" className="stroke-part-lead" strokeWidth="1.6" />
       <path d={shape === 'can' ? 'M52 21h8' : 'M52 21h12'} className="stroke-part-lead" strokeWidth="1.6" />
-      <path d="M3 2.5h47.5q2.5 0 2.5 2.5v20q0 2.5-2.5 2.5H3q-2 0-2-2V4.5q0-2 2-2z" className="fill-part-can stroke-part-outline" strokeWidth="1" />
+      <path
+        d="M3 2.5h47.5q2.5 0 2.5 2.5v20q0 2.5-2.5 2.5H3q-2 0-2-2V4.5q0-2 2-2z"
+        className="fill-part-can stroke-part-outline"
+        strokeWidth="1"
+      />
       {shape === 'can' ? (
         <g>
           <rect x="1.5" y="19" width="51" height="7" className="fill-part-stripe" />

@@ -14,7 +14,15 @@ export function DiodeDrawing({
   return (
     <DrawingFrame width={96} height={22} name={name} {...(scale === undefined ? {} : { scale })}>
       <path d="M0 11h96" className="stroke-part-lead" strokeWidth="1.6" />
-      <rect x="28" y={top} width="40" height={tall} rx={body === 'glass' ? 4 : 1} className={`stroke-part-outline ${body === 'glass' ? 'fill-part-glass' : 'fill-part-epoxy'}`} strokeWidth="1" />
+      <rect
+        x="28"
+        y={top}
+        width="40"
+        height={tall}
+        rx={body === 'glass' ? 4 : 1}
+        className={`stroke-part-outline ${body === 'glass' ? 'fill-part-glass' : 'fill-part-epoxy'}`}
+        strokeWidth="1"
+      />
       <rect data-band={band} x="56" y={top + 0.5} width="6" height={tall - 1} className={BAND_FILL[band]} />
       <Print x={80} y={5} size={8} fill="fill-soft" weight={400}>
         K
@@ -23,7 +31,11 @@ export function DiodeDrawing({
   );
 }
 
-export function LedDrawing({ colour, name, scale }: DrawingSize & { readonly colour: 'red' | 'green' | 'yellow' | 'blue' | 'white' | 'orange' }) {
+export function LedDrawing({
+  colour,
+  name,
+  scale,
+}: DrawingSize & { readonly colour: 'red' | 'green' | 'yellow' | 'blue' | 'white' | 'orange' }) {
   return (
     <DrawingFrame width={44} height={36} name={name} {...(scale === undefined ? {} : { scale })}>
       {/* The longer lead is the anode; the flat of the rim is at the cathode. */}

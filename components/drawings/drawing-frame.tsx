@@ -52,9 +52,19 @@ export function Print({
 }) {
   // 0.62 em is the advance of one character in the values' typeface.
   const natural = children.length * size * 0.62;
-  const squeezed = fit !== undefined && natural > fit ? { textLength: fit, lengthAdjust: 'spacingAndGlyphs' as const } : {};
+  const squeezed =
+    fit !== undefined && natural > fit ? { textLength: fit, lengthAdjust: 'spacingAndGlyphs' as const } : {};
   return (
-    <text x={x} y={y} fontSize={size} fontWeight={weight} textAnchor={anchor} dominantBaseline="central" className={`font-mono ${fill}`} {...squeezed}>
+    <text
+      x={x}
+      y={y}
+      fontSize={size}
+      fontWeight={weight}
+      textAnchor={anchor}
+      dominantBaseline="central"
+      className={`font-mono ${fill}`}
+      {...squeezed}
+    >
       {children}
     </text>
   );

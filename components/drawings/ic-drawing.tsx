@@ -16,7 +16,11 @@ export function IcDrawing({ pins, mark, name, scale }: DrawingSize & { readonly 
           <rect data-pin x={x - 1.5} y="26" width="3" height="7" />
         </g>
       ))}
-      <path d={`M2 6h${bodyWidth}v22H2v-7.5a3.5 3.5 0 0 0 0 -7z`} className="fill-part-epoxy stroke-part-outline" strokeWidth="1" />
+      <path
+        d={`M2 6h${bodyWidth}v22H2v-7.5a3.5 3.5 0 0 0 0 -7z`}
+        className="fill-part-epoxy stroke-part-outline"
+        strokeWidth="1"
+      />
       <circle cx="8" cy="23.5" r="1.7" className="fill-part-print" />
       <Print x={2 + bodyWidth / 2 + 3} y={17.3} size={10.5} fit={bodyWidth - 22}>
         {mark}

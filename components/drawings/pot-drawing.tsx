@@ -1,7 +1,12 @@
 /** A potentiometer from the shaft side with its mark ("B50k"), or a trimmer from above with its code and slot. */
 import { DrawingFrame, type DrawingSize, Print } from './drawing-frame';
 
-export function PotDrawing({ form, mark, name, scale }: DrawingSize & { readonly form: 'potentiometer' | 'trimmer'; readonly mark: string }) {
+export function PotDrawing({
+  form,
+  mark,
+  name,
+  scale,
+}: DrawingSize & { readonly form: 'potentiometer' | 'trimmer'; readonly mark: string }) {
   const size = { name, ...(scale === undefined ? {} : { scale }) };
   if (form === 'trimmer') {
     return (

@@ -2,7 +2,12 @@
 import { DrawingFrame, type DrawingSize, Print } from './drawing-frame';
 
 /** `leads` from left to right, such as `EBC` or `CBE`; null where it is not known, which is drawn as question marks. */
-export function To92Drawing({ leads, mark, name, scale }: DrawingSize & { readonly leads: string | null; readonly mark: string }) {
+export function To92Drawing({
+  leads,
+  mark,
+  name,
+  scale,
+}: DrawingSize & { readonly leads: string | null; readonly mark: string }) {
   const letters = (leads ?? '???').slice(0, 3).split('');
   const width = 46 + mark.length * 6.4;
   return (
@@ -15,7 +20,11 @@ export function To92Drawing({ leads, mark, name, scale }: DrawingSize & { readon
           </Print>
         </g>
       ))}
-      <path d="M6 1.5h28q2 0 2 2v14.5h-32v-14.5q0 -2 2 -2z" className="fill-part-epoxy stroke-part-outline" strokeWidth="1" />
+      <path
+        d="M6 1.5h28q2 0 2 2v14.5h-32v-14.5q0 -2 2 -2z"
+        className="fill-part-epoxy stroke-part-outline"
+        strokeWidth="1"
+      />
       <path d="M8 5h24" className="stroke-part-print/30" strokeWidth="1" />
       <Print x={42} y={11} size={10} fill="fill-ink" anchor="start" weight={400}>
         {mark}

@@ -14,9 +14,21 @@ export const CODE_COLUMN: Kind = {
   comparator: (a: unknown, b: unknown) => naturally.compare(String(a ?? ''), String(b ?? '')),
 };
 
-export const NUMBER_COLUMN: Kind = { cellClass: 'grid-number', headerClass: 'ag-right-aligned-header', filter: 'agNumberColumnFilter', minWidth: 76, width: 100 };
+export const NUMBER_COLUMN: Kind = {
+  cellClass: 'grid-number',
+  headerClass: 'ag-right-aligned-header',
+  filter: 'agNumberColumnFilter',
+  minWidth: 76,
+  width: 100,
+};
 
 /** Drawings and verdicts: nothing that a text filter could search. */
-export const DRAWN_COLUMN: Kind = { cellClass: 'grid-drawn', filter: false, minWidth: 110, width: 140, sortable: false };
+export const DRAWN_COLUMN: Kind = {
+  cellClass: 'grid-drawn',
+  filter: false,
+  minWidth: 110,
+  width: 140,
+  sortable: false,
+};
 
 const naturally = new Intl.Collator('en', { numeric: true, sensitivity: 'base' });

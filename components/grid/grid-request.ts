@@ -31,9 +31,13 @@ export interface GridPage<Row> {
 
 export type GridSource<Row> = (request: GridRequest, signal: AbortSignal) => Promise<GridPage<Row>>;
 
-export function gridRequest(params: Pick<IGetRowsParams, 'startRow' | 'endRow' | 'sortModel' | 'filterModel'>): GridRequest {
+export function gridRequest(
+  params: Pick<IGetRowsParams, 'startRow' | 'endRow' | 'sortModel' | 'filterModel'>,
+): GridRequest {
   const model: unknown = params.filterModel;
-  const filters = isRecord(model) ? Object.entries(model).flatMap(([column, filter]) => readFilter(column, filter)) : [];
+  const filters = isRecord(model)
+    ? Object.entries(model).flatMap(([column, filter]) => readFilter(column, filter))
+    : [];
   return {
     start: params.startRow,
     end: params.endRow,
@@ -46,7 +50,10 @@ export function gridRequest(params: Pick<IGetRowsParams, 'startRow' | 'endRow' |
 export function gridRequestParameters(request: GridRequest): URLSearchParams {
   const parameters = new URLSearchParams({ start: String(request.start), end: String(request.end) });
   if (request.sort.length > 0) {
-    parameters.set('sort', request.sort.map(({ column, direction }) => (direction === 'desc' ? `-${column}` : column)).join(','));
+    parameters.set(
+      'sort',
+      request.sort.map(({ column, direction }) => (direction === 'desc' ? `-${column}` : column)).join(','),
+    );
   }
   for (const { column, type, value, to } of request.filters) {
     parameters.append('filter', [column, type, value ?? '', ...(to === null ? [] : [to])].join(':'));
@@ -59,7 +66,14 @@ function readFilter(column: string, filter: unknown): readonly GridFilter[] {
   // Two conditions on one column; both must hold, since the columns allow no other joining.
   if (Array.isArray(filter.conditions)) return filter.conditions.flatMap((one: unknown) => readFilter(column, one));
   if (typeof filter.type !== 'string') return [];
-  return [{ column, type: filter.type, value: plain(filter.filter ?? filter.dateFrom), to: plain(filter.filterTo ?? filter.dateTo) }];
+  return [
+    {
+      column,
+      type: filter.type,
+      value: plain(filter.filter ?? filter.dateFrom),
+      to: plain(filter.filterTo ?? filter.dateTo),
+    },
+  ];
 }
 
 function plain(value: unknown): string | number | null {

@@ -25,7 +25,15 @@ import {
   TextFilterModule,
 } from 'ag-grid-community';
 import { AgGridReact } from 'ag-grid-react';
-import { type ReactNode, type Ref, useEffect, useImperativeHandle, useMemo, useState, useSyncExternalStore } from 'react';
+import {
+  type ReactNode,
+  type Ref,
+  useEffect,
+  useImperativeHandle,
+  useMemo,
+  useState,
+  useSyncExternalStore,
+} from 'react';
 import { Button } from '@/components/ui/button';
 import { Notice } from '@/components/ui/notice';
 import { type GridSource, gridRequest } from './grid-request';
@@ -84,12 +92,29 @@ interface GridCommon<Row> {
 }
 
 export type GridProps<Row> = GridCommon<Row> &
-  ({ readonly rows: readonly Row[]; readonly source?: undefined } | { readonly source: GridSource<Row>; readonly rows?: undefined });
+  (
+    | { readonly rows: readonly Row[]; readonly source?: undefined }
+    | { readonly source: GridSource<Row>; readonly rows?: undefined }
+  );
 
 const BLOCK_ROWS = 100;
 
 export function Grid<Row extends object>(props: GridProps<Row>) {
-  const { label, columns, rowId, select = 'none', onSelect, onOpen, empty, quickFilter, rowClass, wrap = false, dense = false, hideOnPhone = [], ref } = props;
+  const {
+    label,
+    columns,
+    rowId,
+    select = 'none',
+    onSelect,
+    onOpen,
+    empty,
+    quickFilter,
+    rowClass,
+    wrap = false,
+    dense = false,
+    hideOnPhone = [],
+    ref,
+  } = props;
   const { rows, source } = props;
   const height = props.height ?? (source === undefined && (rows?.length ?? 0) <= 60 ? 'auto' : 'fill');
   const phone = usePhone();
@@ -157,17 +182,34 @@ export function Grid<Row extends object>(props: GridProps<Row>) {
   const definitions = useMemo(() => [...columns], [columns]);
   const data = useMemo(() => (rows === undefined ? undefined : [...rows]), [rows]);
   const defaults = useMemo<ColDef<Row>>(
-    () => ({ sortable: true, resizable: true, suppressMovable: true, wrapText: wrap, autoHeight: wrap, suppressHeaderMenuButton: true, suppressHeaderFilterButton: phone, filterParams: { maxNumConditions: 1 } }),
+    () => ({
+      sortable: true,
+      resizable: true,
+      suppressMovable: true,
+      wrapText: wrap,
+      autoHeight: wrap,
+      suppressHeaderMenuButton: true,
+      suppressHeaderFilterButton: phone,
+      filterParams: { maxNumConditions: 1 },
+    }),
     [wrap, phone],
   );
   // A style element that the grid adds must bear the page's nonce where a Content-Security-Policy asks for one.
-  const [nonce] = useState(() => (typeof document === 'undefined' ? '' : (document.querySelector<HTMLElement>('script[nonce]')?.nonce ?? '')));
+  const [nonce] = useState(() =>
+    typeof document === 'undefined' ? '' : (document.querySelector<HTMLElement>('script[nonce]')?.nonce ?? ''),
+  );
 
-  if ((source !== undefined && emptySource === source) || (source === undefined && (rows?.length ?? 0) === 0)) return <>{empty}</>;
+  if ((source !== undefined && emptySource === source) || (source === undefined && (rows?.length ?? 0) === 0))
+    return <>{empty}</>;
 
   // Keeps the page from jumping when the grid arrives after the words round it.
   const waiting = { minHeight: 36 + (rows?.length ?? 0) * rowHeight };
-  const frame = height === 'auto' ? (api === null ? waiting : undefined) : { height: height === 'fill' ? 'max(20rem, calc(100dvh - 15rem))' : height };
+  const frame =
+    height === 'auto'
+      ? api === null
+        ? waiting
+        : undefined
+      : { height: height === 'fill' ? 'max(20rem, calc(100dvh - 15rem))' : height };
   return (
     <div className="grid gap-3">
       {failed ? (
@@ -188,7 +230,13 @@ export function Grid<Row extends object>(props: GridProps<Row>) {
           defaultColDef={defaults}
           {...(datasource === undefined
             ? { rowModelType: 'clientSide' as const, rowData: data ?? [] }
-            : { rowModelType: 'infinite' as const, datasource, cacheBlockSize: BLOCK_ROWS, maxBlocksInCache: 20, infiniteInitialRowCount: 1 })}
+            : {
+                rowModelType: 'infinite' as const,
+                datasource,
+                cacheBlockSize: BLOCK_ROWS,
+                maxBlocksInCache: 20,
+                infiniteInitialRowCount: 1,
+              })}
           getRowId={({ data: row }) => rowId(row)}
           domLayout={height === 'auto' ? 'autoHeight' : 'normal'}
           rowHeight={rowHeight}
@@ -204,9 +252,16 @@ export function Grid<Row extends object>(props: GridProps<Row>) {
                 rowSelection:
                   select === 'one'
                     ? { mode: 'singleRow' as const, checkboxes: false, enableClickSelection: true }
-                    : { mode: 'multiRow' as const, checkboxes: true, headerCheckbox: source === undefined, enableClickSelection: false },
+                    : {
+                        mode: 'multiRow' as const,
+                        checkboxes: true,
+                        headerCheckbox: source === undefined,
+                        enableClickSelection: false,
+                      },
               })}
-          {...(rowClass === undefined ? {} : { getRowClass: ({ data: row }) => (row === undefined ? undefined : rowClass(row)) })}
+          {...(rowClass === undefined
+            ? {}
+            : { getRowClass: ({ data: row }) => (row === undefined ? undefined : rowClass(row)) })}
           {...(quickFilter === undefined || source !== undefined ? {} : { quickFilterText: quickFilter })}
           overlayComponentParams={{
             noRows: { overlayText: 'No row matches. Clear a filter to see more.' },
@@ -219,7 +274,8 @@ export function Grid<Row extends object>(props: GridProps<Row>) {
             if (event.data !== undefined) onOpen?.(event.data);
           }}
           onCellKeyDown={(event) => {
-            if (!(event.event instanceof KeyboardEvent) || event.event.key !== 'Enter' || event.data === undefined) return;
+            if (!(event.event instanceof KeyboardEvent) || event.event.key !== 'Enter' || event.data === undefined)
+              return;
             // A link or button inside the cell keeps its own Enter.
             if (event.event.target instanceof HTMLElement && event.event.target.closest('a, button, input')) return;
             onOpen?.(event.data);

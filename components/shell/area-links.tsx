@@ -28,7 +28,9 @@ export function AreaLinks({ label, links }: { readonly label: string; readonly l
                 className={`flex min-h-8 items-center gap-1.5 px-2 text-small max-sm:min-h-11 ${here ? 'font-semibold text-ink' : 'text-copper hover:bg-copper-wash'}`}
               >
                 {link.word}
-                {link.count !== undefined && link.count > 0 ? <span className="font-mono">{link.count.toLocaleString('en-GB')}</span> : null}
+                {link.count !== undefined && link.count > 0 ? (
+                  <span className="font-mono">{link.count.toLocaleString('en-GB')}</span>
+                ) : null}
               </Link>
             </li>
           );

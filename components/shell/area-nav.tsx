@@ -18,7 +18,9 @@ export function AreaNav() {
                 aria-current={here ? (pathname === area.href ? 'page' : 'true') : undefined}
                 className={`group flex items-center px-3.5 max-md:min-h-11 max-md:px-2.5 lg:px-4 ${here ? 'font-semibold text-ink' : 'text-soft hover:text-ink'}`}
               >
-                <span className={`border-y-[3px] border-t-transparent py-0.5 leading-snug ${here ? 'border-b-copper' : 'border-b-transparent group-hover:border-b-rule'}`}>
+                <span
+                  className={`border-y-[3px] border-t-transparent py-0.5 leading-snug ${here ? 'border-b-copper' : 'border-b-transparent group-hover:border-b-rule'}`}
+                >
                   {area.word}
                 </span>
               </Link>

@@ -12,7 +12,13 @@ import { type FetchSuggestions, fetchSuggestions, type FindSuggestion } from './
 const PAUSE_MS = 140;
 const GROUP_SEPARATOR = '\u001d';
 
-export function FindField({ fetcher = fetchSuggestions, initial = '' }: { readonly fetcher?: FetchSuggestions; readonly initial?: string }) {
+export function FindField({
+  fetcher = fetchSuggestions,
+  initial = '',
+}: {
+  readonly fetcher?: FetchSuggestions;
+  readonly initial?: string;
+}) {
   const router = useRouter();
   const input = useRef<HTMLInputElement>(null);
   const listId = useId();
@@ -24,7 +30,11 @@ export function FindField({ fetcher = fetchSuggestions, initial = '' }: { readon
   useEffect(() => {
     function onKey(event: KeyboardEvent) {
       if (event.key !== '/' || event.ctrlKey || event.metaKey || event.altKey || event.defaultPrevented) return;
-      if (event.target instanceof HTMLElement && event.target.closest('input, textarea, select, [contenteditable=true], [role=dialog]')) return;
+      if (
+        event.target instanceof HTMLElement &&
+        event.target.closest('input, textarea, select, [contenteditable=true], [role=dialog]')
+      )
+        return;
       event.preventDefault();
       input.current?.focus();
       input.current?.select();
@@ -79,7 +89,11 @@ export function FindField({ fetcher = fetchSuggestions, initial = '' }: { readon
         if (!event.currentTarget.contains(event.relatedTarget)) setOpen(false);
       }}
     >
-      <Glyph name="scan" size={18} className="pointer-events-none absolute top-1/2 left-2.5 -translate-y-1/2 text-soft" />
+      <Glyph
+        name="scan"
+        size={18}
+        className="pointer-events-none absolute top-1/2 left-2.5 -translate-y-1/2 text-soft"
+      />
       <input
         ref={input}
         type="search"
@@ -111,7 +125,11 @@ export function FindField({ fetcher = fetchSuggestions, initial = '' }: { readon
             // Keyboard-wedge scanners send the group separator of a two-dimensional label as Control-].
             event.preventDefault();
             const { selectionStart, selectionEnd, value } = event.currentTarget;
-            setQuery(value.slice(0, selectionStart ?? value.length) + GROUP_SEPARATOR + value.slice(selectionEnd ?? value.length));
+            setQuery(
+              value.slice(0, selectionStart ?? value.length) +
+                GROUP_SEPARATOR +
+                value.slice(selectionEnd ?? value.length),
+            );
           } else if (event.key === 'ArrowDown' && showing) {
             event.preventDefault();
             setActive((before) => (before + 1) % found.length);
@@ -126,10 +144,19 @@ export function FindField({ fetcher = fetchSuggestions, initial = '' }: { readon
           }
         }}
       />
-      <kbd aria-hidden className="pointer-events-none absolute top-1/2 right-2.5 -translate-y-1/2 border border-rule px-1.5 font-mono text-fine text-soft peer-focus:hidden max-md:hidden">
+      <kbd
+        aria-hidden
+        className="pointer-events-none absolute top-1/2 right-2.5 -translate-y-1/2 border border-rule px-1.5 font-mono text-fine text-soft peer-focus:hidden max-md:hidden"
+      >
         /
       </kbd>
-      <ul id={listId} role="listbox" aria-label="Recognised" hidden={!showing} className="absolute inset-x-0 top-full z-40 mt-px max-h-[70dvh] overflow-y-auto border border-ink bg-sheet">
+      <ul
+        id={listId}
+        role="listbox"
+        aria-label="Recognised"
+        hidden={!showing}
+        className="absolute inset-x-0 top-full z-40 mt-px max-h-[70dvh] overflow-y-auto border border-ink bg-sheet"
+      >
         {found.map((item, index) => (
           <li
             key={`${item.kind} ${item.href} ${item.label}`}

@@ -12,7 +12,10 @@ export type FetchSuggestions = (query: string, signal: AbortSignal) => Promise<r
 
 /** Asks the server. Any failure gives no suggestions: the field still goes to /find on Enter, which says what is wrong. */
 export async function fetchSuggestions(query: string, signal: AbortSignal): Promise<readonly FindSuggestion[]> {
-  const response = await fetch(`/api/v1/find?q=${encodeURIComponent(query)}`, { signal, headers: { accept: 'application/json' } });
+  const response = await fetch(`/api/v1/find?q=${encodeURIComponent(query)}`, {
+    signal,
+    headers: { accept: 'application/json' },
+  });
   if (!response.ok) return [];
   const body: unknown = await response.json();
   return readSuggestions(body);
@@ -23,9 +26,22 @@ export function readSuggestions(body: unknown): readonly FindSuggestion[] {
   const items = isRecord(body) ? body.hits : null;
   if (!Array.isArray(items)) return [];
   return items.flatMap((item: unknown) => {
-    if (!isRecord(item) || typeof item.what !== 'string' || typeof item.title !== 'string' || typeof item.href !== 'string') return [];
+    if (
+      !isRecord(item) ||
+      typeof item.what !== 'string' ||
+      typeof item.title !== 'string' ||
+      typeof item.href !== 'string'
+    )
+      return [];
     if (!/^\/(?![/\\])/.test(item.href)) return [];
-    return [{ kind: item.what, label: item.title, href: item.href, detail: typeof item.detail === 'string' ? item.detail : null }];
+    return [
+      {
+        kind: item.what,
+        label: item.title,
+        href: item.href,
+        detail: typeof item.detail === 'string' ? item.detail : null,
+      },
+    ];
   });
 }
 

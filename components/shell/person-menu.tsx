@@ -70,13 +70,22 @@ export function PersonMenu({
         className="flex items-center gap-3 px-4 hover:bg-copper-wash max-md:size-11 max-md:justify-center max-md:px-0"
       >
         <span className="flex items-baseline gap-3 max-md:sr-only">
-          {first === undefined ? null : <span className="text-soft max-lg:sr-only">{capital(first)}{person.roles.length > 1 ? ` +${person.roles.length - 1}` : ''}</span>}
+          {first === undefined ? null : (
+            <span className="text-soft max-lg:sr-only">
+              {capital(first)}
+              {person.roles.length > 1 ? ` +${person.roles.length - 1}` : ''}
+            </span>
+          )}
           <span className="font-mono text-small">{person.name}</span>
         </span>
         <Glyph name="down" size={12} className="text-soft max-md:hidden" />
         <Glyph name="menu" size={20} className="md:hidden" />
       </button>
-      <div id={panelId} hidden={!open} className="absolute top-full right-0 z-40 mt-px w-64 border border-ink bg-sheet max-md:-right-3 max-md:w-[min(20rem,100vw)]">
+      <div
+        id={panelId}
+        hidden={!open}
+        className="absolute top-full right-0 z-40 mt-px w-64 border border-ink bg-sheet max-md:-right-3 max-md:w-[min(20rem,100vw)]"
+      >
         <p className="border-b border-rule px-3 py-2.5">
           <span className="font-semibold">{person.name}</span>
           <span className="block text-small text-soft">

@@ -16,7 +16,14 @@ export interface TopBarProps {
   readonly homeHref?: string;
 }
 
-export function TopBar({ workshop, person, workshops = [], switchWorkshop, signOut = '/sign-out', homeHref = '/' }: TopBarProps) {
+export function TopBar({
+  workshop,
+  person,
+  workshops = [],
+  switchWorkshop,
+  signOut = '/sign-out',
+  homeHref = '/',
+}: TopBarProps) {
   return (
     <header className="border-b border-ink bg-paper print:hidden">
       <div className="flex min-h-[51px] flex-wrap items-stretch max-md:px-3">

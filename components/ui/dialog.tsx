@@ -23,7 +23,17 @@ export interface DialogProps {
   readonly actions?: ReactNode;
 }
 
-export function Dialog({ title, description, trigger, open, onOpenChange, place = 'middle', wide = false, children, actions }: DialogProps) {
+export function Dialog({
+  title,
+  description,
+  trigger,
+  open,
+  onOpenChange,
+  place = 'middle',
+  wide = false,
+  children,
+  actions,
+}: DialogProps) {
   const where =
     place === 'side'
       ? 'inset-y-0 right-0 w-[min(30rem,100vw)] border-l'
@@ -40,9 +50,14 @@ export function Dialog({ title, description, trigger, open, onOpenChange, place 
           <div className="flex items-start justify-between gap-4 border-b border-rule py-3 pr-3 pl-5">
             <div className="min-w-0 pt-1">
               <Parts.Title className="text-heading font-bold">{title}</Parts.Title>
-              {description === undefined ? null : <Parts.Description className="mt-0.5 text-soft">{description}</Parts.Description>}
+              {description === undefined ? null : (
+                <Parts.Description className="mt-0.5 text-soft">{description}</Parts.Description>
+              )}
             </div>
-            <Parts.Close aria-label="Close" className="inline-flex size-9 shrink-0 items-center justify-center text-soft hover:bg-hair hover:text-ink max-sm:size-11">
+            <Parts.Close
+              aria-label="Close"
+              className="inline-flex size-9 shrink-0 items-center justify-center text-soft hover:bg-hair hover:text-ink max-sm:size-11"
+            >
               <Glyph name="close" />
             </Parts.Close>
           </div>
@@ -51,7 +66,9 @@ export function Dialog({ title, description, trigger, open, onOpenChange, place 
             {children}
           </div>
           {actions === undefined ? null : (
-            <div className="flex flex-wrap justify-end gap-3 border-t border-rule px-5 py-3.5 max-sm:flex-col-reverse max-sm:items-stretch">{actions}</div>
+            <div className="flex flex-wrap justify-end gap-3 border-t border-rule px-5 py-3.5 max-sm:flex-col-reverse max-sm:items-stretch">
+              {actions}
+            </div>
           )}
         </Parts.Content>
       </Parts.Portal>

@@ -14,7 +14,10 @@ export function Facts({ facts, columns = 1 }: { readonly facts: readonly Fact[];
   return (
     <dl className={columns === 2 ? 'grid gap-x-8 sm:grid-cols-2' : undefined}>
       {facts.map((fact, index) => (
-        <div key={index} className="grid grid-cols-[minmax(7rem,2fr)_minmax(0,3fr)] gap-x-4 border-b border-hair py-1.5">
+        <div
+          key={index}
+          className="grid grid-cols-[minmax(7rem,2fr)_minmax(0,3fr)] gap-x-4 border-b border-hair py-1.5"
+        >
           <dt className="text-soft">{fact.name}</dt>
           <dd className={`min-w-0 break-words ${fact.mono ? 'font-mono' : ''}`}>
             {fact.value}

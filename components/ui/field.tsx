@@ -32,7 +32,9 @@ export function Field({
 }: FieldWords & { readonly id?: string; readonly children: (aria: FieldAria) => ReactNode }) {
   const made = useId();
   const controlId = id ?? made;
-  const described = [hint !== undefined ? `${controlId}-hint` : null, error ? `${controlId}-error` : null].filter(Boolean).join(' ');
+  const described = [hint !== undefined ? `${controlId}-hint` : null, error ? `${controlId}-error` : null]
+    .filter(Boolean)
+    .join(' ');
   return (
     <div className="flex min-w-0 flex-col gap-1">
       <label htmlFor={controlId} className={hideLabel ? 'sr-only' : 'text-small font-semibold'}>
@@ -82,7 +84,9 @@ export function TextField({
   }) {
   return (
     <Field label={label} hint={hint} error={error} {...optionals({ hideLabel, optional, id })}>
-      {(aria) => <input type="text" autoComplete="off" {...rest} {...aria} className={`${CONTROL} ${mono ? 'font-mono' : ''}`} />}
+      {(aria) => (
+        <input type="text" autoComplete="off" {...rest} {...aria} className={`${CONTROL} ${mono ? 'font-mono' : ''}`} />
+      )}
     </Field>
   );
 }
@@ -106,7 +110,12 @@ export function NumberField({
     readonly ref?: React.Ref<HTMLInputElement>;
   }) {
   return (
-    <Field label={unit === undefined ? label : `${label}, ${unit}`} hint={hint} error={error} {...optionals({ hideLabel, optional, id })}>
+    <Field
+      label={unit === undefined ? label : `${label}, ${unit}`}
+      hint={hint}
+      error={error}
+      {...optionals({ hideLabel, optional, id })}
+    >
       {(aria) => (
         // Text with a numeric keyboard: type=number changes its value under a turning wheel and swallows what it cannot read.
         <input
@@ -184,10 +193,15 @@ export function CheckboxField({
   id,
   ...rest
 }: Pick<FieldWords, 'label' | 'hint' | 'error'> &
-  Omit<InputHTMLAttributes<HTMLInputElement>, Own | 'type'> & { readonly id?: string; readonly ref?: React.Ref<HTMLInputElement> }) {
+  Omit<InputHTMLAttributes<HTMLInputElement>, Own | 'type'> & {
+    readonly id?: string;
+    readonly ref?: React.Ref<HTMLInputElement>;
+  }) {
   const made = useId();
   const controlId = id ?? made;
-  const described = [hint !== undefined ? `${controlId}-hint` : null, error ? `${controlId}-error` : null].filter(Boolean).join(' ');
+  const described = [hint !== undefined ? `${controlId}-hint` : null, error ? `${controlId}-error` : null]
+    .filter(Boolean)
+    .join(' ');
   return (
     <div className="grid grid-cols-[auto_1fr] content-start gap-x-2.5">
       <input
@@ -216,7 +230,11 @@ export function CheckboxField({
 }
 
 /** Leaves out what was not given, so that the frame's own defaults hold. */
-function optionals(given: { hideLabel?: boolean | undefined; optional?: boolean | undefined; id?: string | undefined }) {
+function optionals(given: {
+  hideLabel?: boolean | undefined;
+  optional?: boolean | undefined;
+  id?: string | undefined;
+}) {
   return {
     ...(given.hideLabel === undefined ? {} : { hideLabel: given.hideLabel }),
     ...(given.optional === undefined ? {} : { optional: given.optional }),

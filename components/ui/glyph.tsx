@@ -1,6 +1,12 @@
 /** Our own small signs, drawn on a 16-unit square in the colour of the text beside them. */
 
-const STROKE = { fill: 'none', stroke: 'currentColor', strokeWidth: 1.6, strokeLinecap: 'square', strokeLinejoin: 'miter' } as const;
+const STROKE = {
+  fill: 'none',
+  stroke: 'currentColor',
+  strokeWidth: 1.6,
+  strokeLinecap: 'square',
+  strokeLinejoin: 'miter',
+} as const;
 
 const GLYPHS = {
   same: (
@@ -80,7 +86,8 @@ export function Glyph({
   readonly label?: string;
   readonly className?: string;
 }) {
-  const spoken = label === undefined ? ({ 'aria-hidden': true } as const) : ({ role: 'img', 'aria-label': label } as const);
+  const spoken =
+    label === undefined ? ({ 'aria-hidden': true } as const) : ({ role: 'img', 'aria-label': label } as const);
   return (
     <svg viewBox="0 0 16 16" width={size} height={size} className={`inline-block shrink-0 ${className}`} {...spoken}>
       {GLYPHS[name]}

@@ -38,7 +38,8 @@ export function KeyPad({
     if (digits !== '' && !busy) onEnter(Number(digits));
   }
 
-  const key = 'flex min-h-12 items-center justify-center border border-edge bg-sheet text-lead font-semibold select-none touch-manipulation hover:bg-copper-wash active:bg-copper-wash';
+  const key =
+    'flex min-h-12 items-center justify-center border border-edge bg-sheet text-lead font-semibold select-none touch-manipulation hover:bg-copper-wash active:bg-copper-wash';
   return (
     <div
       role="group"

@@ -4,7 +4,9 @@ import { Glyph, type GlyphName } from './glyph';
 
 export type NoticeTone = 'good' | 'look' | 'stop' | 'plain';
 
-const TONES: Readonly<Record<NoticeTone, { readonly box: string; readonly ink: string; readonly glyph: GlyphName; readonly spoken: string }>> = {
+const TONES: Readonly<
+  Record<NoticeTone, { readonly box: string; readonly ink: string; readonly glyph: GlyphName; readonly spoken: string }>
+> = {
   good: { box: 'border-mask bg-mask-wash', ink: 'text-mask', glyph: 'same', spoken: 'Good:' },
   look: { box: 'border-amber bg-amber-wash', ink: 'text-amber', glyph: 'look', spoken: 'Look:' },
   stop: { box: 'border-oxide bg-oxide-wash', ink: 'text-oxide', glyph: 'refused', spoken: 'Stop:' },
@@ -27,7 +29,10 @@ export function Notice({
 }) {
   const look = TONES[tone];
   return (
-    <div role={announce ? (tone === 'stop' ? 'alert' : 'status') : undefined} className={`flex gap-2.5 border px-3.5 py-2.5 ${look.box}`}>
+    <div
+      role={announce ? (tone === 'stop' ? 'alert' : 'status') : undefined}
+      className={`flex gap-2.5 border px-3.5 py-2.5 ${look.box}`}
+    >
       <Glyph name={look.glyph} size={17} className={`mt-0.5 ${look.ink}`} />
       <div className="min-w-0 flex-1">
         {look.spoken === '' ? null : <span className="sr-only">{look.spoken} </span>}

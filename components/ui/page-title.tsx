@@ -36,7 +36,11 @@ export function PageTitle({
             </ul>
           ) : null}
         </div>
-        {actions !== undefined ? <div className="flex flex-wrap items-center gap-x-4 gap-y-2 max-sm:w-full max-sm:gap-x-2.5 print:hidden">{actions}</div> : null}
+        {actions !== undefined ? (
+          <div className="flex flex-wrap items-center gap-x-4 gap-y-2 max-sm:w-full max-sm:gap-x-2.5 print:hidden">
+            {actions}
+          </div>
+        ) : null}
       </div>
     </header>
   );

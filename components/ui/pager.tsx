@@ -22,7 +22,10 @@ export function Pager({
 }) {
   const number = (value: number) => value.toLocaleString('en-GB');
   return (
-    <nav aria-label={`Pages of ${what}`} className="mt-3 flex flex-wrap items-center justify-between gap-3 print:hidden">
+    <nav
+      aria-label={`Pages of ${what}`}
+      className="mt-3 flex flex-wrap items-center justify-between gap-3 print:hidden"
+    >
       <p className="text-soft">
         <span className="font-mono text-ink">
           {number(first)}–{number(last)}
@@ -37,7 +40,15 @@ export function Pager({
   );
 }
 
-function Step({ href, word, glyph }: { readonly href: string | null; readonly word: string; readonly glyph: 'previous' | 'next' }) {
+function Step({
+  href,
+  word,
+  glyph,
+}: {
+  readonly href: string | null;
+  readonly word: string;
+  readonly glyph: 'previous' | 'next';
+}) {
   const inside = (
     <>
       {glyph === 'previous' ? <Glyph name="previous" size={13} /> : null}
@@ -48,7 +59,11 @@ function Step({ href, word, glyph }: { readonly href: string | null; readonly wo
   const shape = 'inline-flex min-h-9 items-center gap-2 border px-3 font-semibold max-sm:min-h-12 max-sm:px-4';
   if (href === null) return <span className={`${shape} border-rule text-soft`}>{inside}</span>;
   return (
-    <Link href={href} rel={glyph === 'next' ? 'next' : 'prev'} className={`${shape} border-copper text-copper hover:bg-copper-wash`}>
+    <Link
+      href={href}
+      rel={glyph === 'next' ? 'next' : 'prev'}
+      className={`${shape} border-copper text-copper hover:bg-copper-wash`}
+    >
       {inside}
     </Link>
   );

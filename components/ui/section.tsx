@@ -46,7 +46,10 @@ export function Sheet({
   const id = useId();
   const border = { ink: 'border-ink', rule: 'border-rule', dashed: 'border-dashed border-soft' }[edge];
   return (
-    <section aria-labelledby={title === undefined ? undefined : id} className={`min-w-0 border bg-sheet p-5 max-sm:p-4 ${border}`}>
+    <section
+      aria-labelledby={title === undefined ? undefined : id}
+      className={`min-w-0 border bg-sheet p-5 max-sm:p-4 ${border}`}
+    >
       {title !== undefined ? (
         <div className="mb-3 flex items-baseline justify-between gap-4">
           <h2 id={id} className="text-heading font-bold">

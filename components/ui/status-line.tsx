@@ -46,13 +46,22 @@ export function StatusProvider({ children }: { readonly children: ReactNode }) {
   );
 }
 
-export function StatusLine({ message, onDismiss }: { readonly message: StatusMessage | null; readonly onDismiss: () => void }) {
+export function StatusLine({
+  message,
+  onDismiss,
+}: {
+  readonly message: StatusMessage | null;
+  readonly onDismiss: () => void;
+}) {
   const glyph = { good: 'same', look: 'look', stop: 'refused' } as const;
   const ink = { good: 'text-mask', look: 'text-amber', stop: 'text-oxide' } as const;
   const tone = message?.tone ?? 'good';
   return (
     // The live region is there from the start: one that arrives together with its text is not announced.
-    <div role="status" className="pointer-events-none fixed inset-x-0 bottom-0 z-40 flex justify-center p-3 print:hidden">
+    <div
+      role="status"
+      className="pointer-events-none fixed inset-x-0 bottom-0 z-40 flex justify-center p-3 print:hidden"
+    >
       {message === null ? null : (
         <div className="pointer-events-auto flex max-w-xl items-center gap-2.5 border border-ink bg-sheet py-1.5 pr-1.5 pl-3.5">
           <Glyph name={glyph[tone]} className={ink[tone]} />
@@ -69,7 +78,12 @@ export function StatusLine({ message, onDismiss }: { readonly message: StatusMes
               {message.action.word}
             </button>
           )}
-          <button type="button" aria-label="Dismiss" onClick={onDismiss} className="inline-flex size-8 items-center justify-center hover:bg-hair max-sm:size-11">
+          <button
+            type="button"
+            aria-label="Dismiss"
+            onClick={onDismiss}
+            className="inline-flex size-8 items-center justify-center hover:bg-hair max-sm:size-11"
+          >
             <Glyph name="close" size={13} />
           </button>
         </div>

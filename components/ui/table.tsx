@@ -94,7 +94,13 @@ export function TableRow({
   readonly tone?: 'hatched' | 'total' | undefined;
   readonly selected?: boolean;
 }) {
-  const look = selected ? 'bg-copper-wash' : tone === 'hatched' ? 'hatched text-soft' : tone === 'total' ? 'font-semibold' : '';
+  const look = selected
+    ? 'bg-copper-wash'
+    : tone === 'hatched'
+      ? 'hatched text-soft'
+      : tone === 'total'
+        ? 'font-semibold'
+        : '';
   return (
     <tr role="row" aria-selected={selected || undefined} className={look}>
       {children}

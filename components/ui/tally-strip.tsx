@@ -28,7 +28,13 @@ const TONES: Readonly<Record<TallyTone, { readonly look: string; readonly glyph:
   plain: { look: 'bg-hair text-ink border-hair', glyph: 'drop-in' },
 };
 
-export function TallyStrip({ label, segments }: { readonly label: string; readonly segments: readonly TallySegment[] }) {
+export function TallyStrip({
+  label,
+  segments,
+}: {
+  readonly label: string;
+  readonly segments: readonly TallySegment[];
+}) {
   const shown = segments.filter((segment) => segment.count > 0 || segment.current === true);
   if (shown.length === 0) return null;
   return (

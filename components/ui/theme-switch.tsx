@@ -43,7 +43,10 @@ export function ThemeSwitch() {
     >
       <Glyph name="lamp" className="text-soft" />
       <span className="flex-1">Bench lamp</span>
-      <span aria-hidden className={`flex h-4.5 w-8 items-center border p-0.5 ${lit ? 'justify-end border-copper bg-copper-wash' : 'justify-start border-edge'}`}>
+      <span
+        aria-hidden
+        className={`flex h-4.5 w-8 items-center border p-0.5 ${lit ? 'justify-end border-copper bg-copper-wash' : 'justify-start border-edge'}`}
+      >
         <span className={`size-3 ${lit ? 'bg-copper' : 'bg-edge'}`} />
       </span>
     </button>

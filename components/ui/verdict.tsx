@@ -33,7 +33,9 @@ export function Verdict({
   readonly strong?: boolean;
 }) {
   return (
-    <span className={`inline-flex items-baseline gap-1.5 whitespace-nowrap ${VERDICT_INK[verdict]} ${strong ? 'font-semibold' : ''}`}>
+    <span
+      className={`inline-flex items-baseline gap-1.5 whitespace-nowrap ${VERDICT_INK[verdict]} ${strong ? 'font-semibold' : ''}`}
+    >
       <Glyph name={verdict} size={15} className="translate-y-[2px]" />
       <span className={signOnly ? 'sr-only' : undefined}>{word}</span>
     </span>

@@ -22,7 +22,12 @@ export function InvitationForm() {
 
   if (token === null || look.isError) {
     return (
-      <Notice tone="stop" announce title="This invitation does not work" actions={<ButtonLink href="/sign-in">Go to sign-in</ButtonLink>}>
+      <Notice
+        tone="stop"
+        announce
+        title="This invitation does not work"
+        actions={<ButtonLink href="/sign-in">Go to sign-in</ButtonLink>}
+      >
         {look.isError ? look.error.details.detail : 'Open it from the mail, or copy it to the last character.'}
       </Notice>
     );
@@ -47,10 +52,22 @@ export function InvitationForm() {
           {accept.error.details.detail}
         </Notice>
       ) : null}
-      {hasAccount ? null : <TextField label="Your name" hint="As it will stand in the ledger." name="name" autoComplete="name" required value={name} onChange={(event) => setName(event.target.value)} />}
+      {hasAccount ? null : (
+        <TextField
+          label="Your name"
+          hint="As it will stand in the ledger."
+          name="name"
+          autoComplete="name"
+          required
+          value={name}
+          onChange={(event) => setName(event.target.value)}
+        />
+      )}
       <TextField
         label={hasAccount ? 'Your password' : 'A password'}
-        hint={hasAccount ? 'You have an account already; its password confirms that it is you.' : 'At least 12 characters.'}
+        hint={
+          hasAccount ? 'You have an account already; its password confirms that it is you.' : 'At least 12 characters.'
+        }
         name="password"
         type="password"
         autoComplete={hasAccount ? 'current-password' : 'new-password'}

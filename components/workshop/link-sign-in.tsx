@@ -11,7 +11,12 @@ export function LinkSignIn() {
   const [state, setState] = useState<'ready' | 'busy' | 'refused'>('ready');
   if (state === 'refused' || token === null) {
     return (
-      <Notice tone="stop" announce title="This link does not work any more" actions={<ButtonLink href="/sign-in">Ask for a new one</ButtonLink>}>
+      <Notice
+        tone="stop"
+        announce
+        title="This link does not work any more"
+        actions={<ButtonLink href="/sign-in">Ask for a new one</ButtonLink>}
+      >
         It was used already, or its 20 minutes are over.
       </Notice>
     );
@@ -23,7 +28,14 @@ export function LinkSignIn() {
     else setState('refused');
   }
   return (
-    <Button kind="primary" size="large" wide busy={state === 'busy' || token === undefined} busyWord="Signing in …" onClick={() => void enter()}>
+    <Button
+      kind="primary"
+      size="large"
+      wide
+      busy={state === 'busy' || token === undefined}
+      busyWord="Signing in …"
+      onClick={() => void enter()}
+    >
       Sign in now
     </Button>
   );

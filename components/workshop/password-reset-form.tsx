@@ -30,7 +30,15 @@ export function PasswordResetRequest() {
           {ask.error.details.detail}
         </Notice>
       ) : null}
-      <TextField label="E-mail" name="email" type="email" autoComplete="username" required value={email} onChange={(event) => setEmail(event.target.value)} />
+      <TextField
+        label="E-mail"
+        name="email"
+        type="email"
+        autoComplete="username"
+        required
+        value={email}
+        onChange={(event) => setEmail(event.target.value)}
+      />
       <Button type="submit" kind="primary" size="large" wide busy={ask.isPending} busyWord="Sending …">
         Mail me a link
       </Button>
@@ -44,14 +52,23 @@ export function NewPasswordForm() {
   const set = useCommand<typeof setPassword>('POST /password-resets/use');
   if (set.isSuccess) {
     return (
-      <Notice tone="good" announce title="Your new password holds" actions={<ButtonLink href="/sign-in">Sign in</ButtonLink>}>
+      <Notice
+        tone="good"
+        announce
+        title="Your new password holds"
+        actions={<ButtonLink href="/sign-in">Sign in</ButtonLink>}
+      >
         Every earlier session was ended.
       </Notice>
     );
   }
   if (token === null) {
     return (
-      <Notice tone="stop" title="This link is not whole" actions={<ButtonLink href="/password-reset">Ask for a new one</ButtonLink>}>
+      <Notice
+        tone="stop"
+        title="This link is not whole"
+        actions={<ButtonLink href="/password-reset">Ask for a new one</ButtonLink>}
+      >
         Open it from the mail, or copy it to the last character.
       </Notice>
     );

@@ -29,18 +29,41 @@ interface Invited {
   readonly expiresAt: string;
 }
 
-function RoleChoice({ chosen, onChange, label }: { readonly chosen: readonly Role[]; readonly onChange: (roles: Role[]) => void; readonly label: string }) {
+function RoleChoice({
+  chosen,
+  onChange,
+  label,
+}: {
+  readonly chosen: readonly Role[];
+  readonly onChange: (roles: Role[]) => void;
+  readonly label: string;
+}) {
   return (
     <fieldset className="flex flex-wrap gap-x-5 gap-y-1">
       <legend className="sr-only">{label}</legend>
       {ROLES.map((role) => (
-        <CheckboxField key={role} label={role} checked={chosen.includes(role)} onChange={(event) => onChange(event.target.checked ? [...chosen, role] : chosen.filter((one) => one !== role))} />
+        <CheckboxField
+          key={role}
+          label={role}
+          checked={chosen.includes(role)}
+          onChange={(event) =>
+            onChange(event.target.checked ? [...chosen, role] : chosen.filter((one) => one !== role))
+          }
+        />
       ))}
     </fieldset>
   );
 }
 
-export function People({ people, invitations, mayChange }: { readonly people: readonly Member[]; readonly invitations: readonly Invited[]; readonly mayChange: boolean }) {
+export function People({
+  people,
+  invitations,
+  mayChange,
+}: {
+  readonly people: readonly Member[];
+  readonly invitations: readonly Invited[];
+  readonly mayChange: boolean;
+}) {
   const router = useRouter();
   const say = useSay();
   const [editing, setEditing] = useState<{ personId: string; roles: Role[] } | null>(null);
@@ -82,7 +105,15 @@ export function People({ people, invitations, mayChange }: { readonly people: re
                 <span className="font-mono break-all">{one.email}</span>
               </Cell>
               <Cell label="Roles">
-                {editing?.personId === one.personId ? <RoleChoice label={`Roles of ${one.name}`} chosen={editing.roles} onChange={(roles) => setEditing({ personId: one.personId, roles })} /> : one.roles.join(', ')}
+                {editing?.personId === one.personId ? (
+                  <RoleChoice
+                    label={`Roles of ${one.name}`}
+                    chosen={editing.roles}
+                    onChange={(roles) => setEditing({ personId: one.personId, roles })}
+                  />
+                ) : (
+                  one.roles.join(', ')
+                )}
               </Cell>
               <Cell label="Since">{dayText(one.since)}</Cell>
               {mayChange ? (
@@ -94,7 +125,12 @@ export function People({ people, invitations, mayChange }: { readonly people: re
                         size="small"
                         busy={change.isPending}
                         busyWord="Saving …"
-                        onClick={() => change.mutate({ personId: one.personId, roles: editing.roles }, { onSuccess: () => done(`${one.name} is now ${editing.roles.join(', ')}`) })}
+                        onClick={() =>
+                          change.mutate(
+                            { personId: one.personId, roles: editing.roles },
+                            { onSuccess: () => done(`${one.name} is now ${editing.roles.join(', ')}`) },
+                          )
+                        }
                       >
                         Save roles
                       </Button>
@@ -104,7 +140,18 @@ export function People({ people, invitations, mayChange }: { readonly people: re
                     </span>
                   ) : ending === one.personId ? (
                     <span className="flex flex-wrap gap-2">
-                      <Button size="small" kind="danger" busy={end.isPending} busyWord="Ending …" onClick={() => end.mutate({ personId: one.personId }, { onSuccess: () => done(`${one.name} has left the workshop`) })}>
+                      <Button
+                        size="small"
+                        kind="danger"
+                        busy={end.isPending}
+                        busyWord="Ending …"
+                        onClick={() =>
+                          end.mutate(
+                            { personId: one.personId },
+                            { onSuccess: () => done(`${one.name} has left the workshop`) },
+                          )
+                        }
+                      >
                         End membership of {one.name}
                       </Button>
                       <Button size="small" kind="quiet" onClick={() => setEnding(null)}>
@@ -113,7 +160,10 @@ export function People({ people, invitations, mayChange }: { readonly people: re
                     </span>
                   ) : (
                     <span className="flex flex-wrap gap-2">
-                      <Button size="small" onClick={() => setEditing({ personId: one.personId, roles: [...one.roles] })}>
+                      <Button
+                        size="small"
+                        onClick={() => setEditing({ personId: one.personId, roles: [...one.roles] })}
+                      >
                         Change roles<span className="sr-only"> of {one.name}</span>
                       </Button>
                       {one.you ? null : (
@@ -151,7 +201,18 @@ export function People({ people, invitations, mayChange }: { readonly people: re
                   <Cell label="Until">{dayText(one.expiresAt)}</Cell>
                   {mayChange ? (
                     <Cell label="Change">
-                      <Button size="small" kind="quiet" busy={withdraw.isPending} busyWord="Taking back …" onClick={() => withdraw.mutate({ invitationId: one.id }, { onSuccess: () => done(`The invitation to ${one.email} was taken back`) })}>
+                      <Button
+                        size="small"
+                        kind="quiet"
+                        busy={withdraw.isPending}
+                        busyWord="Taking back …"
+                        onClick={() =>
+                          withdraw.mutate(
+                            { invitationId: one.id },
+                            { onSuccess: () => done(`The invitation to ${one.email} was taken back`) },
+                          )
+                        }
+                      >
                         Take back<span className="sr-only"> the invitation to {one.email}</span>
                       </Button>
                     </Cell>
@@ -194,7 +255,13 @@ function InviteForm({ onDone }: { readonly onDone: (text: string) => void }) {
             {invite.error.details.detail}
           </Notice>
         ) : null}
-        <TextField label="Their e-mail" type="email" required value={email} onChange={(event) => setEmail(event.target.value)} />
+        <TextField
+          label="Their e-mail"
+          type="email"
+          required
+          value={email}
+          onChange={(event) => setEmail(event.target.value)}
+        />
         <RoleChoice label="Roles of the person invited" chosen={roles} onChange={setRoles} />
         <div>
           <Button type="submit" kind="primary" busy={invite.isPending} busyWord="Inviting …">

@@ -85,7 +85,13 @@ export function SettingsForm({ settings, mayChange }: { readonly settings: Setti
           options={TAPERS}
           onChange={(event) => setTaper(TAPERS.find((one) => one.value === event.target.value)?.value ?? 'ask')}
         />
-        <TextArea label="Letterhead on orders" hint="Address and what else suppliers should see under the name." rows={4} value={letterhead} onChange={(event) => setLetterhead(event.target.value)} />
+        <TextArea
+          label="Letterhead on orders"
+          hint="Address and what else suppliers should see under the name."
+          rows={4}
+          value={letterhead}
+          onChange={(event) => setLetterhead(event.target.value)}
+        />
         {mayChange ? (
           <div>
             <Button type="submit" kind="primary" busy={change.isPending} busyWord="Saving …">

@@ -57,13 +57,37 @@ export function SignInForm({ next }: { readonly next: string }) {
           {link.error.details.detail}
         </Notice>
       ) : null}
-      <TextField label="E-mail" name="email" type="email" autoComplete="username" required value={email} onChange={(event) => setEmail(event.target.value)} />
-      <TextField label="Password" name="password" type="password" autoComplete="current-password" value={password} onChange={(event) => setPassword(event.target.value)} />
+      <TextField
+        label="E-mail"
+        name="email"
+        type="email"
+        autoComplete="username"
+        required
+        value={email}
+        onChange={(event) => setEmail(event.target.value)}
+      />
+      <TextField
+        label="Password"
+        name="password"
+        type="password"
+        autoComplete="current-password"
+        value={password}
+        onChange={(event) => setPassword(event.target.value)}
+      />
       <Button type="submit" kind="primary" size="large" wide busy={busy} busyWord="Signing in …">
         Sign in
       </Button>
       <div className="flex flex-wrap items-center justify-between gap-3">
-        <Button kind="quiet" busy={link.isPending} busyWord="Sending …" onClick={() => (email.includes('@') ? link.mutate({ email }) : setRefusal('Type your e-mail address first; the link goes there.'))}>
+        <Button
+          kind="quiet"
+          busy={link.isPending}
+          busyWord="Sending …"
+          onClick={() =>
+            email.includes('@')
+              ? link.mutate({ email })
+              : setRefusal('Type your e-mail address first; the link goes there.')
+          }
+        >
           Mail me a link instead
         </Button>
         <Link href="/password-reset" className="text-copper underline underline-offset-2">

@@ -62,7 +62,13 @@ export function Tokens({ tokens }: { readonly tokens: readonly Token[] }) {
                 <Cell label="Made">{dayText(token.createdAt)}</Cell>
                 <Cell label="Until">{dayText(token.expiresAt)}</Cell>
                 <Cell label="Change">
-                  <Button size="small" kind="danger" busy={revoke.isPending} busyWord="Revoking …" onClick={() => revoke.mutate({ tokenId: token.id }, { onSuccess: () => router.refresh() })}>
+                  <Button
+                    size="small"
+                    kind="danger"
+                    busy={revoke.isPending}
+                    busyWord="Revoking …"
+                    onClick={() => revoke.mutate({ tokenId: token.id }, { onSuccess: () => router.refresh() })}
+                  >
                     Revoke<span className="sr-only"> {token.name}</span>
                   </Button>
                 </Cell>

@@ -1,6 +1,17 @@
 /** Parts as the workshop keeps them: the same facts that the reader understands in a line, as columns to match by. */
 import { sql } from 'drizzle-orm';
-import { boolean, check, doublePrecision, index, integer, numeric, pgTable, primaryKey, text, uniqueIndex } from 'drizzle-orm/pg-core';
+import {
+  boolean,
+  check,
+  doublePrecision,
+  index,
+  integer,
+  numeric,
+  pgTable,
+  primaryKey,
+  text,
+  uniqueIndex,
+} from 'drizzle-orm/pg-core';
 import { at, createdAt, ownWorkshopOnly, rowId, workshopId } from './columns';
 
 export const part = pgTable(
@@ -51,13 +62,19 @@ export const part = pgTable(
     check('part_value_has_unit', sql`(${t.value} is null) = (${t.unit} is null)`),
     check('part_value_not_negative', sql`${t.value} is null or ${t.value} >= 0`),
     check('part_stock_unit', sql`${t.stockUnit} in ('piece', 'mm', 'mg')`),
-    check('part_reorder', sql`(${t.reorderPoint} is null or ${t.reorderPoint} >= 0) and (${t.reorderQuantity} is null or ${t.reorderQuantity} > 0)`),
+    check(
+      'part_reorder',
+      sql`(${t.reorderPoint} is null or ${t.reorderPoint} >= 0) and (${t.reorderQuantity} is null or ${t.reorderQuantity} > 0)`,
+    ),
     // The three ways a line finds its part: by spelling, by family, by kind and exact value.
     index('part_by_key').on(t.workshopId, t.partKey),
     index('part_by_family').on(t.workshopId, t.family),
     index('part_by_value').on(t.workshopId, t.kind, t.valueKey),
     // The one field and the parts page search by any piece of the name or description.
-    index('part_search').using('gin', sql`(name || ' ' || coalesce(part_number, '') || ' ' || description) gin_trgm_ops`),
+    index('part_search').using(
+      'gin',
+      sql`(name || ' ' || coalesce(part_number, '') || ' ' || description) gin_trgm_ops`,
+    ),
     ownWorkshopOnly(),
   ],
 ).enableRLS();

@@ -1,6 +1,22 @@
 /** Circuits, their revisions and lines, what lines were matched to, what people decided, and the batches made of them. */
 import { sql } from 'drizzle-orm';
-import { boolean, check, customType, date, foreignKey, index, integer, jsonb, numeric, pgTable, primaryKey, text, unique, uniqueIndex, uuid } from 'drizzle-orm/pg-core';
+import {
+  boolean,
+  check,
+  customType,
+  date,
+  foreignKey,
+  index,
+  integer,
+  jsonb,
+  numeric,
+  pgTable,
+  primaryKey,
+  text,
+  unique,
+  uniqueIndex,
+  uuid,
+} from 'drizzle-orm/pg-core';
 import { part } from './catalogue';
 import { at, createdAt, ownWorkshopOnly, rowId, workshopId } from './columns';
 
@@ -22,7 +38,11 @@ export const circuit = pgTable(
     version: integer('version').notNull().default(1),
     createdAt: createdAt(),
   },
-  (t) => [primaryKey({ columns: [t.workshopId, t.id] }), uniqueIndex('circuit_name_once').on(t.workshopId, t.name), ownWorkshopOnly()],
+  (t) => [
+    primaryKey({ columns: [t.workshopId, t.id] }),
+    uniqueIndex('circuit_name_once').on(t.workshopId, t.name),
+    ownWorkshopOnly(),
+  ],
 ).enableRLS();
 
 /** A file or pasted table on its way to a revision. The original stays, whatever became of the reading. */
@@ -119,7 +139,10 @@ export const line = pgTable(
     uniqueIndex('line_position_once').on(t.workshopId, t.revisionId, t.position),
     index('line_by_spec').on(t.workshopId, t.specKey),
     check('line_quantity', sql`${t.quantity} >= 0`),
-    check('line_use', sql`${t.use} is null or ${t.use} in ('timing', 'audio', 'control', 'decoupling', 'logic', 'power', 'safety')`),
+    check(
+      'line_use',
+      sql`${t.use} is null or ${t.use} in ('timing', 'audio', 'control', 'decoupling', 'logic', 'power', 'safety')`,
+    ),
     ownWorkshopOnly(),
   ],
 ).enableRLS();

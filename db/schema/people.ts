@@ -1,6 +1,19 @@
 /** Workshops, people, who does what where, and the ways in: invitations, one-time links, API tokens. */
 import { sql } from 'drizzle-orm';
-import { bigint, check, foreignKey, index, integer, pgPolicy, pgTable, primaryKey, text, unique, uniqueIndex, uuid } from 'drizzle-orm/pg-core';
+import {
+  bigint,
+  check,
+  foreignKey,
+  index,
+  integer,
+  pgPolicy,
+  pgTable,
+  primaryKey,
+  text,
+  unique,
+  uniqueIndex,
+  uuid,
+} from 'drizzle-orm/pg-core';
 import { applicationRole, at, createdAt, ownWorkshopOr, rowId, scopeOnly, workshopId } from './columns';
 import { newId } from './new-id';
 
@@ -79,7 +92,10 @@ export const membership = pgTable(
   (t) => [
     primaryKey({ columns: [t.workshopId, t.personId] }),
     index('membership_by_person').on(t.personId),
-    check('membership_roles_known', sql`${t.roles} <@ array['builder','storekeeper','buyer','lead']::text[] and cardinality(${t.roles}) > 0`),
+    check(
+      'membership_roles_known',
+      sql`${t.roles} <@ array['builder','storekeeper','buyer','lead']::text[] and cardinality(${t.roles}) > 0`,
+    ),
     ownWorkshopOr('auth'),
   ],
 ).enableRLS();
@@ -103,7 +119,10 @@ export const invitation = pgTable(
     primaryKey({ columns: [t.workshopId, t.id] }),
     unique('invitation_token').on(t.tokenHash),
     foreignKey({ columns: [t.workshopId, t.invitedBy], foreignColumns: [membership.workshopId, membership.personId] }),
-    check('invitation_roles_known', sql`${t.roles} <@ array['builder','storekeeper','buyer','lead']::text[] and cardinality(${t.roles}) > 0`),
+    check(
+      'invitation_roles_known',
+      sql`${t.roles} <@ array['builder','storekeeper','buyer','lead']::text[] and cardinality(${t.roles}) > 0`,
+    ),
     ownWorkshopOr('auth'),
   ],
 ).enableRLS();

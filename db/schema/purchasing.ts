@@ -1,6 +1,21 @@
 /** Suppliers and their offers, orders and their money, deliveries. Order money is minor units of the order's currency. */
 import { sql } from 'drizzle-orm';
-import { bigint, boolean, check, date, foreignKey, index, integer, jsonb, numeric, pgTable, primaryKey, text, uniqueIndex, uuid } from 'drizzle-orm/pg-core';
+import {
+  bigint,
+  boolean,
+  check,
+  date,
+  foreignKey,
+  index,
+  integer,
+  jsonb,
+  numeric,
+  pgTable,
+  primaryKey,
+  text,
+  uniqueIndex,
+  uuid,
+} from 'drizzle-orm/pg-core';
 import { part } from './catalogue';
 import { at, createdAt, ownWorkshopOnly, rowId, workshopId } from './columns';
 import { bin, lot } from './stores';
@@ -31,7 +46,10 @@ export const supplier = pgTable(
     primaryKey({ columns: [t.workshopId, t.id] }),
     uniqueIndex('supplier_name_once').on(t.workshopId, t.name),
     check('supplier_currency', sql`${t.currency} ~ '^[A-Z]{3}$'`),
-    check('supplier_money', sql`${t.postageMinor} >= 0 and ${t.minimumOrderMinor} >= 0 and (${t.postageFreeFromMinor} is null or ${t.postageFreeFromMinor} >= 0)`),
+    check(
+      'supplier_money',
+      sql`${t.postageMinor} >= 0 and ${t.minimumOrderMinor} >= 0 and (${t.postageFreeFromMinor} is null or ${t.postageFreeFromMinor} >= 0)`,
+    ),
     check('supplier_lead_time', sql`${t.leadTimeDays} between 0 and 730`),
     ownWorkshopOnly(),
   ],
@@ -107,7 +125,10 @@ export const purchaseOrder = pgTable(
     foreignKey({ columns: [t.workshopId, t.supplierId], foreignColumns: [supplier.workshopId, supplier.id] }),
     uniqueIndex('purchase_order_number_once').on(t.workshopId, t.number),
     index('purchase_order_by_state').on(t.workshopId, t.state),
-    check('purchase_order_total', sql`${t.totalMinor} = ${t.goodsMinor} + ${t.postageMinor} and ${t.goodsMinor} >= 0 and ${t.postageMinor} >= 0`),
+    check(
+      'purchase_order_total',
+      sql`${t.totalMinor} = ${t.goodsMinor} + ${t.postageMinor} and ${t.goodsMinor} >= 0 and ${t.postageMinor} >= 0`,
+    ),
     check(
       'purchase_order_state',
       sql`${t.state} in ('draft', 'submitted', 'approved', 'paid', 'on-account', 'sent', 'part-received', 'received', 'closed', 'cancelled')`,
@@ -142,7 +163,10 @@ export const orderLine = pgTable(
     foreignKey({ columns: [t.workshopId, t.offerId], foreignColumns: [offer.workshopId, offer.id] }),
     uniqueIndex('order_line_position_once').on(t.workshopId, t.orderId, t.position),
     index('order_line_by_part').on(t.workshopId, t.partId),
-    check('order_line_amounts', sql`${t.quantity} > 0 and ${t.received} >= 0 and ${t.cancelled} >= 0 and ${t.cancelled} <= ${t.quantity} and ${t.totalMinor} >= 0`),
+    check(
+      'order_line_amounts',
+      sql`${t.quantity} > 0 and ${t.received} >= 0 and ${t.cancelled} >= 0 and ${t.cancelled} <= ${t.quantity} and ${t.totalMinor} >= 0`,
+    ),
     ownWorkshopOnly(),
   ],
 ).enableRLS();

@@ -1,7 +1,29 @@
 /** What was done and what follows from it: audit events, idempotency keys, the outbox, document counters, progress. */
 import { sql } from 'drizzle-orm';
-import { bigint, bigserial, check, index, integer, jsonb, pgPolicy, pgTable, primaryKey, text, uuid, varchar } from 'drizzle-orm/pg-core';
-import { applicationRole, at, createdAt, ownWorkshopOnly, ownWorkshopOr, rowId, scopeOnly, workshopId } from './columns';
+import {
+  bigint,
+  bigserial,
+  check,
+  index,
+  integer,
+  jsonb,
+  pgPolicy,
+  pgTable,
+  primaryKey,
+  text,
+  uuid,
+  varchar,
+} from 'drizzle-orm/pg-core';
+import {
+  applicationRole,
+  at,
+  createdAt,
+  ownWorkshopOnly,
+  ownWorkshopOr,
+  rowId,
+  scopeOnly,
+  workshopId,
+} from './columns';
 
 /** One row a command, written in the command's own transaction. */
 export const auditEvent = pgTable(
@@ -128,13 +150,19 @@ export const progress = pgTable(
 ).enableRLS();
 
 /** When the job processes last said that they run; the health route reads it. */
-export const heartbeat = pgTable('heartbeat', { name: text('name').primaryKey(), at: at('at').notNull().defaultNow() }, () => [
-  pgPolicy('any_process', { for: 'all', to: applicationRole, using: sql`true`, withCheck: sql`true` }),
-]).enableRLS();
+export const heartbeat = pgTable(
+  'heartbeat',
+  { name: text('name').primaryKey(), at: at('at').notNull().defaultNow() },
+  () => [pgPolicy('any_process', { for: 'all', to: applicationRole, using: sql`true`, withCheck: sql`true` })],
+).enableRLS();
 
 /** The shape that rate-limiter-flexible's PostgreSQL store expects (`tableCreated: true`). Keys are hashed addresses and accounts. */
 export const rateLimit = pgTable(
   'rate_limit',
-  { key: varchar('key', { length: 255 }).primaryKey(), points: integer('points').notNull().default(0), expire: bigint('expire', { mode: 'number' }) },
+  {
+    key: varchar('key', { length: 255 }).primaryKey(),
+    points: integer('points').notNull().default(0),
+    expire: bigint('expire', { mode: 'number' }),
+  },
   () => [pgPolicy('any_process', { for: 'all', to: applicationRole, using: sql`true`, withCheck: sql`true` })],
 ).enableRLS();

@@ -4,7 +4,20 @@
  * movements and reserved follows reservations, so no code can set either directly.
  */
 import { sql } from 'drizzle-orm';
-import { bigserial, boolean, check, foreignKey, index, integer, numeric, pgTable, primaryKey, text, uniqueIndex, uuid } from 'drizzle-orm/pg-core';
+import {
+  bigserial,
+  boolean,
+  check,
+  foreignKey,
+  index,
+  integer,
+  numeric,
+  pgTable,
+  primaryKey,
+  text,
+  uniqueIndex,
+  uuid,
+} from 'drizzle-orm/pg-core';
 import { part } from './catalogue';
 import { batch, batchNeed } from './circuits';
 import { at, createdAt, ownWorkshopOnly, rowId, workshopId } from './columns';
@@ -136,7 +149,10 @@ export const movement = pgTable(
     index('movement_by_reference').on(t.workshopId, t.referenceType, t.referenceId),
     check('movement_kind', sql`${t.kind} in ('receipt', 'pick', 'return', 'move', 'count', 'scrap', 'opening')`),
     check('movement_moves', sql`${t.quantity} <> 0`),
-    check('movement_sign', sql`(${t.kind} not in ('receipt', 'return', 'opening') or ${t.quantity} > 0) and (${t.kind} not in ('pick', 'scrap') or ${t.quantity} < 0)`),
+    check(
+      'movement_sign',
+      sql`(${t.kind} not in ('receipt', 'return', 'opening') or ${t.quantity} > 0) and (${t.kind} not in ('pick', 'scrap') or ${t.quantity} < 0)`,
+    ),
     check('movement_count_has_reason', sql`${t.kind} not in ('count', 'scrap') or ${t.reason} <> ''`),
     ownWorkshopOnly(),
   ],
@@ -165,7 +181,10 @@ export const reservation = pgTable(
     index('reservation_by_batch').on(t.workshopId, t.batchId),
     index('reservation_by_need').on(t.workshopId, t.needId),
     index('reservation_open_by_lot').on(t.workshopId, t.lotId).where(sql`quantity - picked - released > 0`),
-    check('reservation_amounts', sql`${t.quantity} > 0 and ${t.picked} >= 0 and ${t.released} >= 0 and ${t.picked} + ${t.released} <= ${t.quantity}`),
+    check(
+      'reservation_amounts',
+      sql`${t.quantity} > 0 and ${t.picked} >= 0 and ${t.released} >= 0 and ${t.picked} + ${t.released} <= ${t.quantity}`,
+    ),
     ownWorkshopOnly(),
   ],
 ).enableRLS();

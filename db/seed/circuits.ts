@@ -4,7 +4,12 @@ export interface DemoCircuit {
   readonly name: string;
   readonly description: string;
   readonly railsVolts: readonly number[];
-  readonly revisions: readonly { readonly name: string; readonly fileName: string; readonly list: string; readonly freeze: boolean }[];
+  readonly revisions: readonly {
+    readonly name: string;
+    readonly fileName: string;
+    readonly list: string;
+    readonly freeze: boolean;
+  }[];
   /** What lines do, by designator, for the checks that depend on it. */
   readonly uses: Readonly<Record<string, 'timing' | 'audio' | 'control' | 'decoupling' | 'logic' | 'power' | 'safety'>>;
 }

@@ -10,7 +10,9 @@ try {
   for (const { id, name } of workshops) {
     console.log(name);
     for (const report of await withWorkshop(id, (tx) => checkLedger(tx, id), { readOnly: true })) {
-      console.log(`  ${report.broken.length === 0 ? 'holds ' : 'BROKEN'} ${report.number}. ${report.says} (${report.checked} checked)`);
+      console.log(
+        `  ${report.broken.length === 0 ? 'holds ' : 'BROKEN'} ${report.number}. ${report.says} (${report.checked} checked)`,
+      );
       for (const row of report.broken) console.log(`         ${row}`);
       broken += report.broken.length;
     }

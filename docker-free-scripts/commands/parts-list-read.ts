@@ -9,14 +9,36 @@ async function main(file: string | undefined): Promise<void> {
   if (statSync(file).size > MOST_BYTES) throw new Error(`${file} is larger than ${MOST_BYTES / 1024 / 1024} MiB`);
   const reading = await readPartsList(readFileSync(file), { fileName: file });
   if (!reading.ok) {
-    const place = [reading.sheet === undefined ? null : `sheet ${reading.sheet}`, reading.row === undefined ? null : `row ${reading.row}`, reading.column === undefined ? null : `column ${reading.column}`].filter((one) => one !== null).join(', ');
+    const place = [
+      reading.sheet === undefined ? null : `sheet ${reading.sheet}`,
+      reading.row === undefined ? null : `row ${reading.row}`,
+      reading.column === undefined ? null : `column ${reading.column}`,
+    ]
+      .filter((one) => one !== null)
+      .join(', ');
     throw new Error(`${place === '' ? '' : `${place}: `}${reading.detail} ${reading.cure}`);
   }
   const { lines, notLines, questions } = reading;
   const printed = {
-    lines: lines.map(({ row, sheet, designators, quantity, fitted, kind, value, partNumber, alternatives, text }) => ({ row, ...(sheet === undefined ? {} : { sheet }), designators, quantity, fitted, kind, value, partNumber, alternatives, text })),
+    lines: lines.map(({ row, sheet, designators, quantity, fitted, kind, value, partNumber, alternatives, text }) => ({
+      row,
+      ...(sheet === undefined ? {} : { sheet }),
+      designators,
+      quantity,
+      fitted,
+      kind,
+      value,
+      partNumber,
+      alternatives,
+      text,
+    })),
     notLines: notLines.map(({ row, sheet, why }) => ({ row, ...(sheet === undefined ? {} : { sheet }), why })),
-    questions: questions.map(({ row, sheet, ask, options }) => ({ row, ...(sheet === undefined ? {} : { sheet }), ask, options })),
+    questions: questions.map(({ row, sheet, ask, options }) => ({
+      row,
+      ...(sheet === undefined ? {} : { sheet }),
+      ask,
+      options,
+    })),
   };
   process.stdout.write(`${JSON.stringify(printed)}\n`);
 }

@@ -15,10 +15,18 @@ import { makeShelf } from '../seed/shelf';
 
 async function main(): Promise<void> {
   const there = await withScope('auth', (tx) => tx.select({ name: workshop.name }).from(workshop).limit(1));
-  if (there.length > 0) throw new Error(`this database has a workshop already (${there[0]?.name}); the demo is only written into an empty one`);
+  if (there.length > 0)
+    throw new Error(
+      `this database has a workshop already (${there[0]?.name}); the demo is only written into an empty one`,
+    );
   const password = `${randomBytes(9).toString('base64url')}-bench`;
 
-  const fernhollow = await makeWorkshop('Fernhollow Synth Works', 'Fernhollow Synth Works\nThe Old Dairy, Fernhollow\naccounts@fernhollow.example', FERNHOLLOW, password);
+  const fernhollow = await makeWorkshop(
+    'Fernhollow Synth Works',
+    'Fernhollow Synth Works\nThe Old Dairy, Fernhollow\naccounts@fernhollow.example',
+    FERNHOLLOW,
+    password,
+  );
   const parts = await makeShelf(fernhollow.id, fernhollow.people);
   console.log(`${parts.size} parts on the shelf`);
   const suppliers = await makeSuppliers(fernhollow.people);
@@ -31,13 +39,22 @@ async function main(): Promise<void> {
 
   // E. Wisket works in both, so that the change of workshop can be tried.
   const both = fernhollow.ids.get('both@fernhollow.example') ?? '';
-  const larkspur = await makeWorkshop('Larkspur Modular Bench', 'Larkspur Modular Bench', LARKSPUR, password, [{ personId: both, roles: ['builder'] }]);
+  const larkspur = await makeWorkshop('Larkspur Modular Bench', 'Larkspur Modular Bench', LARKSPUR, password, [
+    { personId: both, roles: ['builder'] },
+  ]);
   await makeShelf(larkspur.id, larkspur.people);
 
   const file = process.env.SIGN_INS_FILE ?? '.data/sign-ins.txt';
   mkdirSync(path.dirname(file), { recursive: true });
-  const rows = [...FERNHOLLOW.map((one) => ['Fernhollow Synth Works', one] as const), ...LARKSPUR.map((one) => ['Larkspur Modular Bench', one] as const)];
-  writeFileSync(file, `${rows.map(([where, one]) => `${one.roles.join('+').padEnd(20)} ${one.email.padEnd(32)} ${password}   ${where}`).join('\n')}\n`, { mode: 0o600 });
+  const rows = [
+    ...FERNHOLLOW.map((one) => ['Fernhollow Synth Works', one] as const),
+    ...LARKSPUR.map((one) => ['Larkspur Modular Bench', one] as const),
+  ];
+  writeFileSync(
+    file,
+    `${rows.map(([where, one]) => `${one.roles.join('+').padEnd(20)} ${one.email.padEnd(32)} ${password}   ${where}`).join('\n')}\n`,
+    { mode: 0o600 },
+  );
 }
 
 try {

@@ -10,8 +10,11 @@ import { membership, person, workshop } from '@/db/schema/people';
 import { issueToken } from '@/lib/workshop/api-tokens';
 
 async function main(): Promise<void> {
-  const { values } = parseArgs({ options: { email: { type: 'string' }, scope: { type: 'string', default: 'write' }, workshop: { type: 'string' } } });
-  if (process.env.OHMSTEAD_SERVICES === 'live') throw new Error('not with live services: make a token under Workshop, API tokens');
+  const { values } = parseArgs({
+    options: { email: { type: 'string' }, scope: { type: 'string', default: 'write' }, workshop: { type: 'string' } },
+  });
+  if (process.env.OHMSTEAD_SERVICES === 'live')
+    throw new Error('not with live services: make a token under Workshop, API tokens');
   const { email, scope } = values;
   if (!email) throw new Error('say whose: --email ADDRESS');
   if (scope !== 'read' && scope !== 'write') throw new Error('--scope is read or write');
@@ -24,9 +27,12 @@ async function main(): Promise<void> {
       .where(and(eq(person.email, email.toLowerCase()), isNull(membership.endedAt)))
       .orderBy(asc(membership.createdAt)),
   );
-  const owner = values.workshop === undefined ? members[0] : members.find((one) => one.workshopName === values.workshop);
+  const owner =
+    values.workshop === undefined ? members[0] : members.find((one) => one.workshopName === values.workshop);
   if (!owner) throw new Error(`nobody with the address ${email} belongs to ${values.workshop ?? 'a workshop'}`);
-  const { token } = await withWorkshop(owner.workshopId, (tx) => issueToken(tx, { workshopId: owner.workshopId, personId: owner.personId }, 'development command', scope));
+  const { token } = await withWorkshop(owner.workshopId, (tx) =>
+    issueToken(tx, { workshopId: owner.workshopId, personId: owner.personId }, 'development command', scope),
+  );
   console.log(token);
 }
 

@@ -8,7 +8,11 @@ import type { Credentials } from '@/lib/auth/load-actor';
 
 export type People = Readonly<Record<Role, Credentials>>;
 
-export async function as<U extends UseCase>(credentials: Credentials, useCase: U, input: z.input<U['input']>): Promise<z.output<U['output']>> {
+export async function as<U extends UseCase>(
+  credentials: Credentials,
+  useCase: U,
+  input: z.input<U['input']>,
+): Promise<z.output<U['output']>> {
   const { output } = await perform(useCase, { credentials, input, requestId: newId(), idempotencyKey: null });
   return output;
 }

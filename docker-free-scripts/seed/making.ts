@@ -18,10 +18,22 @@ import { as, type People } from './acting';
 export async function makeCircuits(workshopId: string, people: People): Promise<Map<string, string>> {
   const revisions = new Map<string, string>();
   for (const demo of demoCircuits) {
-    const circuit = await as(people.builder, createCircuit, { name: demo.name, description: demo.description, railsVolts: [...demo.railsVolts] });
+    const circuit = await as(people.builder, createCircuit, {
+      name: demo.name,
+      description: demo.description,
+      railsVolts: [...demo.railsVolts],
+    });
     for (const list of demo.revisions) {
-      const made = await as(people.builder, createRevision, { circuitId: circuit.id, name: list.name, file: { name: list.fileName, bytes: new TextEncoder().encode(list.list) }, freeze: list.freeze });
-      if (list.freeze && made.state !== 'frozen') throw new Error(`${demo.name} ${list.name} has open questions: ${made.questions.map((one) => one.ask).join('; ')}`);
+      const made = await as(people.builder, createRevision, {
+        circuitId: circuit.id,
+        name: list.name,
+        file: { name: list.fileName, bytes: new TextEncoder().encode(list.list) },
+        freeze: list.freeze,
+      });
+      if (list.freeze && made.state !== 'frozen')
+        throw new Error(
+          `${demo.name} ${list.name} has open questions: ${made.questions.map((one) => one.ask).join('; ')}`,
+        );
       revisions.set(`${demo.name} ${list.name}`, made.id);
       await withWorkshop(workshopId, async (tx) => {
         const lines = await tx
@@ -43,9 +55,14 @@ export async function makeCircuits(workshopId: string, people: People): Promise<
   return revisions;
 }
 
-export async function makeBatches(workshopId: string, people: People, revisions: ReadonlyMap<string, string>): Promise<void> {
+export async function makeBatches(
+  workshopId: string,
+  people: People,
+  revisions: ReadonlyMap<string, string>,
+): Promise<void> {
   const day = (days: number) => new Date(Date.now() + days * 86_400_000).toISOString().slice(0, 10);
-  const plan = (name: string, units: number, days: number) => as(people.builder, createBatch, { revisionId: revisions.get(name) ?? '', units, neededBy: day(days) });
+  const plan = (name: string, units: number, days: number) =>
+    as(people.builder, createBatch, { revisionId: revisions.get(name) ?? '', units, neededBy: day(days) });
 
   const folder = await plan('Wave Folder 1.0', 2, -5);
   await as(people.builder, reserveBatch, { batchId: folder.id, allowPart: true });
@@ -56,7 +73,11 @@ export async function makeBatches(workshopId: string, people: People, revisions:
   await as(people.builder, reserveBatch, { batchId: filter.id, allowPart: true });
   const stops = (await as(people.storekeeper, pickList, { batchId: filter.id })).stops;
   const [first] = stops;
-  if (first) await as(people.storekeeper, pickBatch, { batchId: filter.id, picks: first.lines.map((line) => ({ reservationId: line.reservationId, quantity: line.take })) });
+  if (first)
+    await as(people.storekeeper, pickBatch, {
+      batchId: filter.id,
+      picks: first.lines.map((line) => ({ reservationId: line.reservationId, quantity: line.take })),
+    });
 
   const slopes = await plan('Slope Pair C', 2, 9);
   await as(people.builder, reserveBatch, { batchId: slopes.id, allowPart: true });
@@ -64,8 +85,17 @@ export async function makeBatches(workshopId: string, people: People, revisions:
   await plan('Supply ±12 V A', 1, 30);
 
   await withWorkshop(workshopId, async (tx) => {
-    const bins = await tx.select({ id: bin.id, code: bin.code }).from(bin).where(eq(bin.workshopId, workshopId)).orderBy(bin.code);
-    for (const [code, reason] of [['A-10-1', 'missed at a pick last week'], ['A-13-2', 'due by its class'], ['B-05-4', 'due by its class'], ['B-12-3', 'missed at a pick last week']] as const) {
+    const bins = await tx
+      .select({ id: bin.id, code: bin.code })
+      .from(bin)
+      .where(eq(bin.workshopId, workshopId))
+      .orderBy(bin.code);
+    for (const [code, reason] of [
+      ['A-10-1', 'missed at a pick last week'],
+      ['A-13-2', 'due by its class'],
+      ['B-05-4', 'due by its class'],
+      ['B-12-3', 'missed at a pick last week'],
+    ] as const) {
       const found = bins.find((one) => one.code === code);
       if (found)
         await tx
@@ -74,5 +104,10 @@ export async function makeBatches(workshopId: string, people: People, revisions:
           .where(and(eq(bin.workshopId, workshopId), eq(bin.id, found.id)));
     }
     return bins;
-  }).then((bins) => as(people.storekeeper, openCount, { binIds: bins.filter((one) => /^C-01-[1-4]$/.test(one.code)).map((one) => one.id), reason: 'first cabinet column, monthly' }));
+  }).then((bins) =>
+    as(people.storekeeper, openCount, {
+      binIds: bins.filter((one) => /^C-01-[1-4]$/.test(one.code)).map((one) => one.id),
+      reason: 'first cabinet column, monthly',
+    }),
+  );
 }

@@ -12,11 +12,30 @@ import { as, type People } from './acting';
 
 const OPENED_DAYS_AGO = 60;
 /** A drawer of small parts; what the drawn level is measured against. */
-const CAPACITY: Partial<Record<DemoPart['kind'], number>> = { resistor: 500, capacitor: 400, diode: 500, hardware: 400, connector: 200 };
+const CAPACITY: Partial<Record<DemoPart['kind'], number>> = {
+  resistor: 500,
+  capacitor: 400,
+  diode: 500,
+  hardware: 400,
+  connector: 200,
+};
 
 export async function makeShelf(workshopId: string, people: People): Promise<Map<string, string>> {
-  for (const [index, [code, room]] of ([['A', 'back room, left'], ['B', 'back room, right'], ['C', 'by the bench']] as const).entries()) {
-    await as(people.storekeeper, createCabinet, { code, name: `Cabinet ${code}`, room, columns: 15, rows: 4, walkOrder: index + 1 });
+  for (const [index, [code, room]] of (
+    [
+      ['A', 'back room, left'],
+      ['B', 'back room, right'],
+      ['C', 'by the bench'],
+    ] as const
+  ).entries()) {
+    await as(people.storekeeper, createCabinet, {
+      code,
+      name: `Cabinet ${code}`,
+      room,
+      columns: 15,
+      rows: 4,
+      walkOrder: index + 1,
+    });
   }
   return withWorkshop(workshopId, async (tx) => {
     const ids = await insertParts(tx, workshopId);
@@ -60,7 +79,11 @@ async function insertParts(tx: Tx, workshopId: string): Promise<Map<string, stri
 
 /** One part a bin while bins last, then two: as drawers fill up in a real workshop. */
 async function fillBins(tx: Tx, workshopId: string, personId: string, ids: ReadonlyMap<string, string>): Promise<void> {
-  const bins = await tx.select({ id: bin.id, code: bin.code }).from(bin).where(eq(bin.workshopId, workshopId)).orderBy(bin.code);
+  const bins = await tx
+    .select({ id: bin.id, code: bin.code })
+    .from(bin)
+    .where(eq(bin.workshopId, workshopId))
+    .orderBy(bin.code);
   const stocked = demoParts.filter((one) => one.stock > 0);
   const at = new Date(Date.now() - OPENED_DAYS_AGO * 86_400_000);
   const lots = stocked.map((one, index) => {
@@ -69,7 +92,18 @@ async function fillBins(tx: Tx, workshopId: string, personId: string, ids: Reado
     if (!place) throw new Error('the cabinets have no bins');
     return { one, lotId: newId(), partId: ids.get(one.name) ?? '', binId: place.id };
   });
-  await tx.insert(lot).values(lots.map(({ one, ...row }) => ({ workshopId, id: row.lotId, partId: row.partId, binId: row.binId, unitCost: one.price, receivedAt: at })));
+  await tx
+    .insert(lot)
+    .values(
+      lots.map(({ one, ...row }) => ({
+        workshopId,
+        id: row.lotId,
+        partId: row.partId,
+        binId: row.binId,
+        unitCost: one.price,
+        receivedAt: at,
+      })),
+    );
   await tx.insert(movement).values(
     lots.map(({ one, ...row }, index) => ({
       workshopId,

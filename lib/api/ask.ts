@@ -8,7 +8,10 @@ import { Refusal } from './problem';
 import type { Endpoint, Query } from './use-case';
 
 /** Signed out leads to the sign-in page, a missing thing to "not found"; other refusals reach the error page. */
-export async function ask<In extends z.ZodType, Out extends z.ZodType>(useCase: Query<string, Endpoint, In, Out>, input: z.input<In>): Promise<z.output<Out>> {
+export async function ask<In extends z.ZodType, Out extends z.ZodType>(
+  useCase: Query<string, Endpoint, In, Out>,
+  input: z.input<In>,
+): Promise<z.output<Out>> {
   const credentials = await credentialsOfPage();
   if (!credentials) redirect('/sign-in');
   try {

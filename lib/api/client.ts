@@ -24,7 +24,11 @@ export class Problem extends Error {
 }
 
 /** Calls the API. `files` in the input (File objects) make it a multipart request. Throws Problem. */
-export async function callApi<U extends UseCase>(endpoint: U['http'], input: InputOf<U>, options: { idempotencyKey?: string; signal?: AbortSignal } = {}): Promise<OutputOf<U>> {
+export async function callApi<U extends UseCase>(
+  endpoint: U['http'],
+  input: InputOf<U>,
+  options: { idempotencyKey?: string; signal?: AbortSignal } = {},
+): Promise<OutputOf<U>> {
   const [method, template] = endpoint.split(' ') as [string, string];
   const rest: Record<string, unknown> = { ...(input as Record<string, unknown>) };
   let path = template.replace(/\{(\w+)\}/g, (_, name: string) => {
@@ -43,7 +47,8 @@ export async function callApi<U extends UseCase>(endpoint: U['http'], input: Inp
     if (query.size) path += `?${query}`;
   } else if (Object.values(rest).some((value) => value instanceof File)) {
     const form = new FormData();
-    for (const [name, value] of Object.entries(rest)) if (value !== undefined && value !== null) form.append(name, value instanceof File ? value : String(value));
+    for (const [name, value] of Object.entries(rest))
+      if (value !== undefined && value !== null) form.append(name, value instanceof File ? value : String(value));
     body = form;
   } else {
     headers['content-type'] = 'application/json';
@@ -52,17 +57,38 @@ export async function callApi<U extends UseCase>(endpoint: U['http'], input: Inp
   if (method !== 'GET') headers['idempotency-key'] = options.idempotencyKey ?? crypto.randomUUID();
   let response: Response;
   try {
-    response = await fetch(`/api/v1${path}`, { method, headers, ...(body === undefined ? {} : { body }), ...(options.signal ? { signal: options.signal } : {}) });
+    response = await fetch(`/api/v1${path}`, {
+      method,
+      headers,
+      ...(body === undefined ? {} : { body }),
+      ...(options.signal ? { signal: options.signal } : {}),
+    });
   } catch (cause) {
     if (options.signal?.aborted) throw cause;
-    throw new Problem({ type: '/problems/service-away', title: 'No network', status: 0, detail: 'The workshop’s server can’t be reached. Nothing was changed; try again when the network is back.', instance: path, code: 'service.away', requestId: '' });
+    throw new Problem({
+      type: '/problems/service-away',
+      title: 'No network',
+      status: 0,
+      detail: 'The workshop’s server can’t be reached. Nothing was changed; try again when the network is back.',
+      instance: path,
+      code: 'service.away',
+      requestId: '',
+    });
   }
   const answer: unknown = await response.json().catch(() => null);
   if (!response.ok) {
     throw new Problem(
       isProblem(answer)
         ? answer
-        : { type: '/problems/bug', title: 'Our mistake', status: response.status, detail: `The server answered ${response.status} without a reason.`, instance: path, code: 'bug', requestId: response.headers.get('x-request-id') ?? '' },
+        : {
+            type: '/problems/bug',
+            title: 'Our mistake',
+            status: response.status,
+            detail: `The server answered ${response.status} without a reason.`,
+            instance: path,
+            code: 'bug',
+            requestId: response.headers.get('x-request-id') ?? '',
+          },
     );
   }
   return answer as OutputOf<U>;
@@ -91,12 +117,17 @@ export function useCommand<U extends UseCase>(endpoint: U['http']) {
     },
     onError: (problem) => {
       // A refusal is an answer: the next press is a new request. Only an unknown outcome keeps the key.
-      if (problem.details.status >= 400 && problem.details.status < 500 && problem.details.code !== 'request.running') intention.current = null;
+      if (problem.details.status >= 400 && problem.details.status < 500 && problem.details.code !== 'request.running')
+        intention.current = null;
     },
   });
 }
 
-export function useAnswer<U extends UseCase>(endpoint: U['http'], input: InputOf<U>, options: { enabled?: boolean; refetchIntervalMs?: number } = {}) {
+export function useAnswer<U extends UseCase>(
+  endpoint: U['http'],
+  input: InputOf<U>,
+  options: { enabled?: boolean; refetchIntervalMs?: number } = {},
+) {
   return useQuery<OutputOf<U>, Problem>({
     queryKey: [endpoint, input],
     queryFn: ({ signal }) => callApi<U>(endpoint, input, { signal }),

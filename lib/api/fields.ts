@@ -21,7 +21,10 @@ export const day = () => z.iso.date();
 
 /** One or several values of a query parameter. */
 export function listOf<Item extends z.ZodType>(item: Item, most = 100) {
-  return z.preprocess((value) => (value === undefined || Array.isArray(value) ? value : [value]), z.array(item).max(most));
+  return z.preprocess(
+    (value) => (value === undefined || Array.isArray(value) ? value : [value]),
+    z.array(item).max(most),
+  );
 }
 
 /** A file that came in a multipart body. */

@@ -20,7 +20,11 @@ const PROBLEM_SCHEMA: Json = {
       type: 'array',
       items: {
         type: 'object',
-        properties: { pointer: { type: 'string', description: 'JSON pointer, or row and column of a file' }, code: { type: 'string' }, detail: { type: 'string' } },
+        properties: {
+          pointer: { type: 'string', description: 'JSON pointer, or row and column of a file' },
+          code: { type: 'string' },
+          detail: { type: 'string' },
+        },
       },
     },
     more: { description: 'More for a program: row, column and cure of a file; the current version; what is short' },
@@ -35,13 +39,20 @@ export function openApi(useCases: readonly UseCase[], serverUrl: string): Json {
   }
   return {
     openapi: '3.1.0',
-    info: { title: 'Ohmstead', version: '1', description: 'Everything the screens do. Sign in with a session cookie or send a bearer token.' },
+    info: {
+      title: 'Ohmstead',
+      version: '1',
+      description: 'Everything the screens do. Sign in with a session cookie or send a bearer token.',
+    },
     servers: [{ url: `${serverUrl}/api/v1` }],
     security: [{ session: [] }, { token: [] }],
     paths,
     components: {
       schemas: { Problem: PROBLEM_SCHEMA },
-      securitySchemes: { session: { type: 'apiKey', in: 'cookie', name: 'next-auth.session-token' }, token: { type: 'http', scheme: 'bearer' } },
+      securitySchemes: {
+        session: { type: 'apiKey', in: 'cookie', name: 'next-auth.session-token' },
+        token: { type: 'http', scheme: 'bearer' },
+      },
     },
   };
 }
@@ -51,10 +62,16 @@ function operation(useCase: UseCase, method: string, path: string): Json {
   const properties = (input.properties ?? {}) as Record<string, Json>;
   const required = new Set((input.required as string[] | undefined) ?? []);
   const inPath = [...path.matchAll(/\{(\w+)\}/g)].flatMap((match) => match[1] ?? []);
-  const parameters: Json[] = inPath.map((name) => ({ name, in: 'path', required: true, schema: properties[name] ?? { type: 'string' } }));
+  const parameters: Json[] = inPath.map((name) => ({
+    name,
+    in: 'path',
+    required: true,
+    schema: properties[name] ?? { type: 'string' },
+  }));
   const others = Object.entries(properties).filter(([name]) => !inPath.includes(name));
   const asks = method === 'GET' || method === 'DELETE';
-  if (asks) for (const [name, schema] of others) parameters.push({ name, in: 'query', required: required.has(name), schema });
+  if (asks)
+    for (const [name, schema] of others) parameters.push({ name, in: 'query', required: required.has(name), schema });
   if (useCase.type === 'command' || useCase.type === 'errand') {
     parameters.push({
       name: 'Idempotency-Key',
@@ -64,8 +81,16 @@ function operation(useCase: UseCase, method: string, path: string): Json {
       schema: { type: 'string', maxLength: 200 },
     });
   }
-  const body = { type: 'object', properties: Object.fromEntries(others), required: others.map(([name]) => name).filter((name) => required.has(name)), additionalProperties: false };
-  const problem = { description: 'A problem', content: { 'application/problem+json': { schema: { $ref: '#/components/schemas/Problem' } } } };
+  const body = {
+    type: 'object',
+    properties: Object.fromEntries(others),
+    required: others.map(([name]) => name).filter((name) => required.has(name)),
+    additionalProperties: false,
+  };
+  const problem = {
+    description: 'A problem',
+    content: { 'application/problem+json': { schema: { $ref: '#/components/schemas/Problem' } } },
+  };
   return {
     operationId: useCase.name,
     summary: useCase.summary,
@@ -75,8 +100,20 @@ function operation(useCase: UseCase, method: string, path: string): Json {
     parameters,
     ...(asks || others.length === 0
       ? {}
-      : { requestBody: { required: true, content: { [useCase.multipartLimitBytes === undefined ? 'application/json' : 'multipart/form-data']: { schema: body } } } }),
-    responses: { 200: { description: 'Done', content: { 'application/json': { schema: jsonSchema(useCase.output, 'output') } } }, default: problem },
+      : {
+          requestBody: {
+            required: true,
+            content: {
+              [useCase.multipartLimitBytes === undefined ? 'application/json' : 'multipart/form-data']: {
+                schema: body,
+              },
+            },
+          },
+        }),
+    responses: {
+      200: { description: 'Done', content: { 'application/json': { schema: jsonSchema(useCase.output, 'output') } } },
+      default: problem,
+    },
   };
 }
 

@@ -38,7 +38,11 @@ export function perform<U extends UseCase>(useCase: U, request: Request): Promis
 export async function perform(useCase: UseCase, request: Request): Promise<Performed<unknown>> {
   try {
     if (useCase.type === 'open') {
-      const output = await useCase.run({ input: parseInput(useCase, request.input), requestId: request.requestId, address: request.address ?? 'unknown' });
+      const output = await useCase.run({
+        input: parseInput(useCase, request.input),
+        requestId: request.requestId,
+        address: request.address ?? 'unknown',
+      });
       return { output, replayed: false };
     }
     if (!request.credentials) throw new Refusal('signed-out', 'Sign in, or send a bearer token.');
@@ -102,21 +106,46 @@ function commandContext(tx: Tx, actor: Actor, input: unknown, requestId: string,
     requestKey,
     record: (subjectId, detail = {}) => void records.push({ subjectId, detail }),
     enqueue: async (job) => {
-      await tx.insert(outbox).values({ workshopId: actor.workshopId, queue: job.queue, payload: job.payload, ...(job.runAfter ? { runAfter: job.runAfter } : {}) });
+      await tx
+        .insert(outbox)
+        .values({
+          workshopId: actor.workshopId,
+          queue: job.queue,
+          payload: job.payload,
+          ...(job.runAfter ? { runAfter: job.runAfter } : {}),
+        });
     },
   };
   const writeAudit = async (command: string): Promise<void> => {
     const rows = records.length ? records : [{ subjectId: null, detail: {} }];
-    await tx.insert(auditEvent).values(rows.map((row) => ({ workshopId: actor.workshopId, personId: actor.personId, command, subjectId: row.subjectId, detail: row.detail, requestId })));
+    await tx
+      .insert(auditEvent)
+      .values(
+        rows.map((row) => ({
+          workshopId: actor.workshopId,
+          personId: actor.personId,
+          command,
+          subjectId: row.subjectId,
+          detail: row.detail,
+          requestId,
+        })),
+      );
   };
   return { context, writeAudit };
 }
 
 function requestKeyOf(useCase: UseCase, actor: Actor, request: Request): string {
-  return request.idempotencyKey === null ? `${useCase.name}:${request.requestId}` : `${useCase.name}:${actor.personId}:${request.idempotencyKey}`;
+  return request.idempotencyKey === null
+    ? `${useCase.name}:${request.requestId}`
+    : `${useCase.name}:${actor.personId}:${request.idempotencyKey}`;
 }
 
-function runCommand(useCase: Command, credentials: Credentials, input: unknown, request: Request): Promise<Performed<unknown>> {
+function runCommand(
+  useCase: Command,
+  credentials: Credentials,
+  input: unknown,
+  request: Request,
+): Promise<Performed<unknown>> {
   return withWorkshop(credentials.workshopId, async (tx) => {
     const actor = await loadActor(tx, credentials);
     authorise(useCase, actor);
@@ -124,7 +153,13 @@ function runCommand(useCase: Command, credentials: Credentials, input: unknown, 
       const claimed = await claim(tx, useCase, actor, request.idempotencyKey, bodyHash(request.input));
       if (claimed.state === 'done') return { output: claimed.answer, replayed: true };
     }
-    const { context, writeAudit } = commandContext(tx, actor, input, request.requestId, requestKeyOf(useCase, actor, request));
+    const { context, writeAudit } = commandContext(
+      tx,
+      actor,
+      input,
+      request.requestId,
+      requestKeyOf(useCase, actor, request),
+    );
     const output = await useCase.run(context);
     await writeAudit(useCase.name);
     if (request.idempotencyKey !== null) await answer(tx, useCase, actor, request.idempotencyKey, output);
@@ -132,12 +167,20 @@ function runCommand(useCase: Command, credentials: Credentials, input: unknown, 
   });
 }
 
-async function runErrand(useCase: Errand, credentials: Credentials, input: unknown, request: Request): Promise<Performed<unknown>> {
+async function runErrand(
+  useCase: Errand,
+  credentials: Credentials,
+  input: unknown,
+  request: Request,
+): Promise<Performed<unknown>> {
   const key = request.idempotencyKey;
   const { actor, claimed } = await withWorkshop(credentials.workshopId, async (tx) => {
     const loaded = await loadActor(tx, credentials);
     authorise(useCase, loaded);
-    return { actor: loaded, claimed: key === null ? null : await claim(tx, useCase, loaded, key, bodyHash(request.input)) };
+    return {
+      actor: loaded,
+      claimed: key === null ? null : await claim(tx, useCase, loaded, key, bodyHash(request.input)),
+    };
   });
   if (claimed?.state === 'done') return { output: claimed.answer, replayed: true };
   const requestKey = requestKeyOf(useCase, actor, request);
@@ -183,24 +226,44 @@ type Claim = { state: 'mine' } | { state: 'done'; answer: unknown };
 
 /** Same key and body: the first answer again. Same key, other body: 422. Still running: 409. (IETF draft on the Idempotency-Key header.) */
 async function claim(tx: Tx, useCase: UseCase, actor: Actor, key: string, hash: string): Promise<Claim> {
-  if (key.length < 1 || key.length > 200) throw new Refusal('input.invalid', 'Idempotency-Key must have 1 to 200 characters.');
+  if (key.length < 1 || key.length > 200)
+    throw new Refusal('input.invalid', 'Idempotency-Key must have 1 to 200 characters.');
   const lockName = `${actor.workshopId}:${actor.personId}:${useCase.name}:${key}`;
   // Held to the end of the transaction: a second request with this key doesn't wait, it is told.
-  const lock = await tx.execute<{ taken: boolean }>(sql`select pg_try_advisory_xact_lock(hashtextextended(${lockName}, 0)) as taken`);
-  if (!lock.rows[0]?.taken) throw new Refusal('request.running', 'The same request is still running; ask again in a moment.');
+  const lock = await tx.execute<{ taken: boolean }>(
+    sql`select pg_try_advisory_xact_lock(hashtextextended(${lockName}, 0)) as taken`,
+  );
+  if (!lock.rows[0]?.taken)
+    throw new Refusal('request.running', 'The same request is still running; ask again in a moment.');
   const leaseUntil = new Date(Date.now() + LEASE_MS);
   const made = await tx
     .insert(idempotencyKey)
-    .values({ workshopId: actor.workshopId, personId: actor.personId, command: useCase.name, key, bodyHash: hash, state: 'running', leaseUntil })
+    .values({
+      workshopId: actor.workshopId,
+      personId: actor.personId,
+      command: useCase.name,
+      key,
+      bodyHash: hash,
+      state: 'running',
+      leaseUntil,
+    })
     .onConflictDoNothing()
     .returning({ key: idempotencyKey.key });
   if (made.length) return { state: 'mine' };
-  const [held] = await tx.select().from(idempotencyKey).where(keyIs(useCase, actor, key));
+  const [held] = await tx
+    .select()
+    .from(idempotencyKey)
+    .where(keyIs(useCase, actor, key));
   if (!held) return { state: 'mine' };
-  if (held.bodyHash !== hash) throw new Refusal('key.reused', 'This Idempotency-Key was used for another request. Nothing was changed.');
+  if (held.bodyHash !== hash)
+    throw new Refusal('key.reused', 'This Idempotency-Key was used for another request. Nothing was changed.');
   if (held.state === 'done') return { state: 'done', answer: held.answer };
-  if (held.leaseUntil.getTime() > Date.now()) throw new Refusal('request.running', 'The same request is still running; ask again in a moment.');
-  await tx.update(idempotencyKey).set({ leaseUntil }).where(keyIs(useCase, actor, key));
+  if (held.leaseUntil.getTime() > Date.now())
+    throw new Refusal('request.running', 'The same request is still running; ask again in a moment.');
+  await tx
+    .update(idempotencyKey)
+    .set({ leaseUntil })
+    .where(keyIs(useCase, actor, key));
   return { state: 'mine' };
 }
 

@@ -57,7 +57,11 @@ export class Refusal extends Error {
   readonly errors: readonly FieldProblem[] | undefined;
   readonly more: unknown;
 
-  constructor(code: ProblemCode, detail: string, options: { errors?: readonly FieldProblem[]; more?: unknown; cause?: unknown; inner?: string } = {}) {
+  constructor(
+    code: ProblemCode,
+    detail: string,
+    options: { errors?: readonly FieldProblem[]; more?: unknown; cause?: unknown; inner?: string } = {},
+  ) {
     super(options.inner ?? `${code}: ${detail}`, { cause: options.cause });
     this.name = 'Refusal';
     this.code = code;
@@ -89,7 +93,11 @@ export function problemDetails(refusal: Refusal, requestId: string, instance: st
 
 export function problemResponse(refusal: Refusal, requestId: string, instance: string): Response {
   const details = problemDetails(refusal, requestId, instance);
-  const headers = new Headers({ 'content-type': 'application/problem+json', 'cache-control': 'no-store', 'x-request-id': requestId });
+  const headers = new Headers({
+    'content-type': 'application/problem+json',
+    'cache-control': 'no-store',
+    'x-request-id': requestId,
+  });
   if (details.status === 503) headers.set('retry-after', '5');
   if (details.status === 429) headers.set('retry-after', '60');
   return new Response(JSON.stringify(details), { status: details.status, headers });

@@ -8,7 +8,10 @@ const CONSTRAINTS: Record<string, readonly [ProblemCode, string]> = {
   movement_append_only: ['rule.forbids', 'The ledger is append-only: enter a correcting movement instead.'],
   reservation_amounts: ['rule.forbids', 'That is more than was reserved. Nothing was changed.'],
   revision_frozen: ['state.refused', 'A frozen revision never changes: make a new one.'],
-  order_line_over_delivery: ['rule.forbids', 'That is more than was ordered and the workshop allows. Nothing was booked.'],
+  order_line_over_delivery: [
+    'rule.forbids',
+    'That is more than was ordered and the workshop allows. Nothing was booked.',
+  ],
   circuit_name_once: ['name.taken', 'A circuit of that name is there already.'],
   revision_name_once: ['name.taken', 'This circuit has a revision of that name already.'],
   part_name_once: ['name.taken', 'A part of that name is there already.'],
@@ -21,7 +24,20 @@ const CONSTRAINTS: Record<string, readonly [ProblemCode, string]> = {
   person_email_unique: ['name.taken', 'There is an account with that address already.'],
 };
 
-const AWAY = new Set(['ECONNREFUSED', 'ECONNRESET', 'EPIPE', 'ETIMEDOUT', '57P01', '57P02', '57P03', '08000', '08003', '08006', '08001', '53300']);
+const AWAY = new Set([
+  'ECONNREFUSED',
+  'ECONNRESET',
+  'EPIPE',
+  'ETIMEDOUT',
+  '57P01',
+  '57P02',
+  '57P03',
+  '08000',
+  '08003',
+  '08006',
+  '08001',
+  '53300',
+]);
 
 /** The refusal behind an error, or null where it is a bug. */
 export function refusalFrom(error: unknown): Refusal | null {
@@ -32,16 +48,26 @@ export function refusalFrom(error: unknown): Refusal | null {
     if (known) return new Refusal(known[0], known[1], { cause: error });
   }
   if (fault && AWAY.has(fault.code)) {
-    return new Refusal('database.away', 'The database does not answer right now. Nothing was changed; try again in a moment.', { cause: error });
+    return new Refusal(
+      'database.away',
+      'The database does not answer right now. Nothing was changed; try again in a moment.',
+      { cause: error },
+    );
   }
   // pg raises these two without a code.
   for (let cause = error, depth = 0; cause instanceof Error && depth < 5; cause = cause.cause, depth += 1) {
     if (/Connection terminated|timeout exceeded when trying to connect/.test(cause.message)) {
-      return new Refusal('database.away', 'The database does not answer right now. Nothing was changed; try again in a moment.', { cause: error });
+      return new Refusal(
+        'database.away',
+        'The database does not answer right now. Nothing was changed; try again in a moment.',
+        { cause: error },
+      );
     }
   }
   if (fault?.code === '40001' || fault?.code === '40P01') {
-    return new Refusal('conflict', 'Too many people at the same shelf at once. Nothing was changed; try again.', { cause: error });
+    return new Refusal('conflict', 'Too many people at the same shelf at once. Nothing was changed; try again.', {
+      cause: error,
+    });
   }
   return null;
 }

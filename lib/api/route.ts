@@ -22,9 +22,19 @@ export function route(useCase: UseCase): Handler {
       // Before the body is read: a stranger's megabytes are not worth parsing.
       if (!credentials && useCase.type !== 'open') throw new Refusal('signed-out', 'Sign in, or send a bearer token.');
       const input = { ...(await readInput(request, useCase)), ...(await params) };
-      const { output, replayed } = await perform(useCase, { credentials, input, requestId, idempotencyKey: request.headers.get('idempotency-key'), address: addressOf(request) });
+      const { output, replayed } = await perform(useCase, {
+        credentials,
+        input,
+        requestId,
+        idempotencyKey: request.headers.get('idempotency-key'),
+        address: addressOf(request),
+      });
       if (output instanceof Response) return output;
-      const headers = new Headers({ 'content-type': 'application/json', 'cache-control': 'no-store', 'x-request-id': requestId });
+      const headers = new Headers({
+        'content-type': 'application/json',
+        'cache-control': 'no-store',
+        'x-request-id': requestId,
+      });
       if (replayed) headers.set('idempotent-replayed', 'true');
       return new Response(JSON.stringify(output ?? null), { status: 200, headers });
     } catch (error) {
@@ -38,9 +48,14 @@ export function respondTo(error: unknown, requestId: string, instance: string, w
   const refusal = refusalFrom(error);
   if (!refusal) {
     log.error({ requestId, what, err: error }, 'bug');
-    return problemResponse(new Refusal('bug', `Something went wrong on our side. It is logged as ${requestId}.`), requestId, instance);
+    return problemResponse(
+      new Refusal('bug', `Something went wrong on our side. It is logged as ${requestId}.`),
+      requestId,
+      instance,
+    );
   }
-  if (refusal.code === 'database.away' || refusal.code === 'service.away') log.warn({ requestId, what, code: refusal.code, err: refusal.cause }, 'away');
+  if (refusal.code === 'database.away' || refusal.code === 'service.away')
+    log.warn({ requestId, what, code: refusal.code, err: refusal.cause }, 'away');
   else log.debug({ requestId, what, code: refusal.code }, 'refused');
   return problemResponse(refusal, requestId, instance);
 }
@@ -55,7 +70,8 @@ function refuseForeignOrigin(request: NextRequest, useCase: UseCase): void {
   if (useCase.type === 'query' || request.headers.has('authorization')) return;
   const origin = request.headers.get('origin');
   const site = request.headers.get('sec-fetch-site');
-  if (site !== null && site !== 'same-origin' && site !== 'none') throw new Refusal('not-allowed', 'This request came from another site.');
+  if (site !== null && site !== 'same-origin' && site !== 'none')
+    throw new Refusal('not-allowed', 'This request came from another site.');
   if (origin === null) return;
   const own = new URL(process.env.NEXTAUTH_URL ?? request.url).origin;
   if (origin !== own) throw new Refusal('not-allowed', 'This request came from another site.');
@@ -74,14 +90,16 @@ async function readInput(request: NextRequest, useCase: UseCase): Promise<Record
   }
   const body = await readBounded(request, JSON_LIMIT_BYTES);
   if (body.length === 0) return withVersion(request, input);
-  if (!type.startsWith('application/json')) throw new Refusal('input.unreadable', 'Send JSON (content-type: application/json).');
+  if (!type.startsWith('application/json'))
+    throw new Refusal('input.unreadable', 'Send JSON (content-type: application/json).');
   let parsed: unknown;
   try {
     parsed = JSON.parse(new TextDecoder('utf-8', { fatal: true }).decode(body));
   } catch (cause) {
     throw new Refusal('input.unreadable', 'The body is not readable JSON.', { cause });
   }
-  if (parsed === null || typeof parsed !== 'object' || Array.isArray(parsed)) throw new Refusal('input.unreadable', 'The body must be a JSON object.');
+  if (parsed === null || typeof parsed !== 'object' || Array.isArray(parsed))
+    throw new Refusal('input.unreadable', 'The body must be a JSON object.');
   return withVersion(request, { ...input, ...parsed });
 }
 
@@ -95,13 +113,16 @@ async function readForm(request: NextRequest, limitBytes: number): Promise<Recor
   const body = await readBounded(request, limitBytes);
   let form: FormData;
   try {
-    form = await new Response(body as BodyInit, { headers: { 'content-type': request.headers.get('content-type') ?? '' } }).formData();
+    form = await new Response(body as BodyInit, {
+      headers: { 'content-type': request.headers.get('content-type') ?? '' },
+    }).formData();
   } catch (cause) {
     throw new Refusal('input.unreadable', 'The form can’t be read.', { cause });
   }
   const input: Record<string, unknown> = {};
   for (const [name, value] of form.entries()) {
-    const read = typeof value === 'string' ? value : { name: value.name, bytes: new Uint8Array(await value.arrayBuffer()) };
+    const read =
+      typeof value === 'string' ? value : { name: value.name, bytes: new Uint8Array(await value.arrayBuffer()) };
     const earlier = input[name];
     input[name] = earlier === undefined ? read : Array.isArray(earlier) ? [...earlier, read] : [earlier, read];
   }
@@ -109,7 +130,8 @@ async function readForm(request: NextRequest, limitBytes: number): Promise<Recor
 }
 
 async function readBounded(request: NextRequest, limitBytes: number): Promise<Uint8Array> {
-  const tooLarge = () => new Refusal('too-large', `The body is larger than ${Math.floor(limitBytes / 1024)} KiB. Nothing was read.`);
+  const tooLarge = () =>
+    new Refusal('too-large', `The body is larger than ${Math.floor(limitBytes / 1024)} KiB. Nothing was read.`);
   if (Number(request.headers.get('content-length') ?? 0) > limitBytes) throw tooLarge();
   if (!request.body) return new Uint8Array();
   const chunks: Uint8Array[] = [];

@@ -21,7 +21,14 @@ export type Policy = readonly Role[] | 'everyone';
 
 /** Queues of the job process; `queue` names one and its payload is checked there. */
 export interface Job {
-  readonly queue: 'send-mail' | 'match-revision' | 'match-stock-changed' | 'read-upload' | 'payment-event' | 'send-order' | 'refund-payment';
+  readonly queue:
+    | 'send-mail'
+    | 'match-revision'
+    | 'match-stock-changed'
+    | 'read-upload'
+    | 'payment-event'
+    | 'send-order'
+    | 'refund-payment';
   readonly payload: Record<string, unknown>;
   readonly runAfter?: Date;
 }
@@ -64,37 +71,59 @@ interface Definition<Name extends string, At extends Endpoint, In extends z.ZodT
   readonly multipartLimitBytes?: number;
 }
 
-export interface Query<Name extends string = string, At extends Endpoint = Endpoint, In extends z.ZodType = z.ZodType, Out extends z.ZodType = z.ZodType>
-  extends Definition<Name, At, In, Out> {
+export interface Query<
+  Name extends string = string,
+  At extends Endpoint = Endpoint,
+  In extends z.ZodType = z.ZodType,
+  Out extends z.ZodType = z.ZodType,
+> extends Definition<Name, At, In, Out> {
   readonly type: 'query';
   run(context: QueryContext<z.output<In>>): Promise<z.input<Out>>;
 }
 
-export interface Command<Name extends string = string, At extends Endpoint = Endpoint, In extends z.ZodType = z.ZodType, Out extends z.ZodType = z.ZodType>
-  extends Definition<Name, At, In, Out> {
+export interface Command<
+  Name extends string = string,
+  At extends Endpoint = Endpoint,
+  In extends z.ZodType = z.ZodType,
+  Out extends z.ZodType = z.ZodType,
+> extends Definition<Name, At, In, Out> {
   readonly type: 'command';
   run(context: CommandContext<z.output<In>>): Promise<z.input<Out>>;
 }
 
-export interface Errand<Name extends string = string, At extends Endpoint = Endpoint, In extends z.ZodType = z.ZodType, Out extends z.ZodType = z.ZodType>
-  extends Definition<Name, At, In, Out> {
+export interface Errand<
+  Name extends string = string,
+  At extends Endpoint = Endpoint,
+  In extends z.ZodType = z.ZodType,
+  Out extends z.ZodType = z.ZodType,
+> extends Definition<Name, At, In, Out> {
   readonly type: 'errand';
   run(context: ErrandContext<z.output<In>>): Promise<z.input<Out>>;
 }
 
 /** What a person may do before signing in: ask for a link, accept an invitation. No workshop is known; `run` opens the auth scope itself. */
-export interface Open<Name extends string = string, At extends Endpoint = Endpoint, In extends z.ZodType = z.ZodType, Out extends z.ZodType = z.ZodType>
-  extends Omit<Definition<Name, At, In, Out>, 'roles'> {
+export interface Open<
+  Name extends string = string,
+  At extends Endpoint = Endpoint,
+  In extends z.ZodType = z.ZodType,
+  Out extends z.ZodType = z.ZodType,
+> extends Omit<Definition<Name, At, In, Out>, 'roles'> {
   readonly type: 'open';
   readonly roles: 'anyone';
-  run(context: { readonly input: z.output<In>; readonly requestId: string; readonly address: string }): Promise<z.input<Out>>;
+  run(context: {
+    readonly input: z.output<In>;
+    readonly requestId: string;
+    readonly address: string;
+  }): Promise<z.input<Out>>;
 }
 
 export type UseCase = Query | Command | Errand | Open;
 
 type Body<T> = Omit<T, 'type'>;
 
-export function query<Name extends string, At extends Endpoint, In extends z.ZodType, Out extends z.ZodType>(definition: Body<Query<Name, At, In, Out>>): Query<Name, At, In, Out> {
+export function query<Name extends string, At extends Endpoint, In extends z.ZodType, Out extends z.ZodType>(
+  definition: Body<Query<Name, At, In, Out>>,
+): Query<Name, At, In, Out> {
   return { ...definition, type: 'query' };
 }
 
@@ -104,10 +133,14 @@ export function command<Name extends string, At extends Endpoint, In extends z.Z
   return { ...definition, type: 'command' };
 }
 
-export function errand<Name extends string, At extends Endpoint, In extends z.ZodType, Out extends z.ZodType>(definition: Body<Errand<Name, At, In, Out>>): Errand<Name, At, In, Out> {
+export function errand<Name extends string, At extends Endpoint, In extends z.ZodType, Out extends z.ZodType>(
+  definition: Body<Errand<Name, At, In, Out>>,
+): Errand<Name, At, In, Out> {
   return { ...definition, type: 'errand' };
 }
 
-export function open<Name extends string, At extends Endpoint, In extends z.ZodType, Out extends z.ZodType>(definition: Omit<Open<Name, At, In, Out>, 'type' | 'roles'>): Open<Name, At, In, Out> {
+export function open<Name extends string, At extends Endpoint, In extends z.ZodType, Out extends z.ZodType>(
+  definition: Omit<Open<Name, At, In, Out>, 'type' | 'roles'>,
+): Open<Name, At, In, Out> {
   return { ...definition, type: 'open', roles: 'anyone' };
 }

@@ -13,8 +13,21 @@ export interface MailPayload extends Record<string, unknown> {
 }
 
 /** A mail in plain words with one link; `lines` stand above it. */
-export function letter(greeting: string, lines: readonly string[], link: string | null, after: readonly string[] = []): string {
-  return [`Hello ${greeting},`, '', ...lines, ...(link === null ? [] : ['', link]), ...(after.length ? ['', ...after] : []), '', 'Ohmstead'].join('\n');
+export function letter(
+  greeting: string,
+  lines: readonly string[],
+  link: string | null,
+  after: readonly string[] = [],
+): string {
+  return [
+    `Hello ${greeting},`,
+    '',
+    ...lines,
+    ...(link === null ? [] : ['', link]),
+    ...(after.length ? ['', ...after] : []),
+    '',
+    'Ohmstead',
+  ].join('\n');
 }
 
 export async function queueAuthMail(tx: Tx, mail: MailPayload): Promise<void> {

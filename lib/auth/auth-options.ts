@@ -48,9 +48,20 @@ export const authOptions: NextAuthOptions = {
   callbacks: {
     async jwt({ token, user, trigger, session }) {
       if (isSignedIn(user)) {
-        return { ...token, sub: user.id, personId: user.id, workshopId: user.workshopId, sessionEpoch: user.sessionEpoch };
+        return {
+          ...token,
+          sub: user.id,
+          personId: user.id,
+          workshopId: user.workshopId,
+          sessionEpoch: user.sessionEpoch,
+        };
       }
-      if (trigger === 'update' && typeof token.personId === 'string' && session && typeof session.workshopId === 'string') {
+      if (
+        trigger === 'update' &&
+        typeof token.personId === 'string' &&
+        session &&
+        typeof session.workshopId === 'string'
+      ) {
         const { personId } = token;
         const asked: string = session.workshopId;
         if (!/^[0-9a-f-]{36}$/.test(asked)) return token;
@@ -66,5 +77,9 @@ export const authOptions: NextAuthOptions = {
       return URL.canParse(url) && new URL(url).origin === new URL(baseUrl).origin ? url : baseUrl;
     },
   },
-  logger: { error: (code, detail) => log.warn({ code, err: detail instanceof Error ? detail : undefined }, 'next-auth'), warn: (code) => log.debug({ code }, 'next-auth'), debug: () => undefined },
+  logger: {
+    error: (code, detail) => log.warn({ code, err: detail instanceof Error ? detail : undefined }, 'next-auth'),
+    warn: (code) => log.debug({ code }, 'next-auth'),
+    debug: () => undefined,
+  },
 };

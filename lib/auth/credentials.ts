@@ -22,12 +22,22 @@ export async function credentialsOf(request: NextRequest): Promise<Credentials |
 /** Of the page being rendered. */
 export async function credentialsOfPage(): Promise<Credentials | null> {
   const [jar, sent] = await Promise.all([cookies(), headers()]);
-  const request = { cookies: Object.fromEntries(jar.getAll().map(({ name, value }) => [name, value])), headers: Object.fromEntries(sent.entries()) };
+  const request = {
+    cookies: Object.fromEntries(jar.getAll().map(({ name, value }) => [name, value])),
+    headers: Object.fromEntries(sent.entries()),
+  };
   return sessionCredentials(await getToken({ req: request as unknown as NextRequest }));
 }
 
 function sessionCredentials(token: JWT | string | null): Credentials | null {
-  if (!token || typeof token === 'string' || typeof token.personId !== 'string' || typeof token.workshopId !== 'string' || typeof token.sessionEpoch !== 'number') return null;
+  if (
+    !token ||
+    typeof token === 'string' ||
+    typeof token.personId !== 'string' ||
+    typeof token.workshopId !== 'string' ||
+    typeof token.sessionEpoch !== 'number'
+  )
+    return null;
   return { via: 'session', personId: token.personId, workshopId: token.workshopId, sessionEpoch: token.sessionEpoch };
 }
 

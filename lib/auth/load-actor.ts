@@ -23,17 +23,25 @@ export async function loadActor(tx: Tx, credentials: Credentials): Promise<Actor
     .from(membership)
     .innerJoin(person, eq(person.id, membership.personId))
     .innerJoin(workshop, eq(workshop.id, membership.workshopId))
-    .where(and(eq(membership.workshopId, credentials.workshopId), eq(membership.personId, credentials.personId), isNull(membership.endedAt)));
+    .where(
+      and(
+        eq(membership.workshopId, credentials.workshopId),
+        eq(membership.personId, credentials.personId),
+        isNull(membership.endedAt),
+      ),
+    );
   if (!row) throw new Refusal('signed-out', 'You are not a member of this workshop any more.');
   let mayWrite = true;
   if (credentials.via === 'session') {
-    if (row.sessionEpoch !== credentials.sessionEpoch) throw new Refusal('signed-out', 'This session was ended; sign in again.');
+    if (row.sessionEpoch !== credentials.sessionEpoch)
+      throw new Refusal('signed-out', 'This session was ended; sign in again.');
   } else {
     const [token] = await tx
       .select({ scope: apiToken.scope, expiresAt: apiToken.expiresAt, revokedAt: apiToken.revokedAt })
       .from(apiToken)
       .where(and(eq(apiToken.workshopId, credentials.workshopId), eq(apiToken.id, credentials.tokenId)));
-    if (!token || token.revokedAt !== null || token.expiresAt.getTime() <= Date.now()) throw new Refusal('signed-out', 'This API token is revoked or expired.');
+    if (!token || token.revokedAt !== null || token.expiresAt.getTime() <= Date.now())
+      throw new Refusal('signed-out', 'This API token is revoked or expired.');
     mayWrite = token.scope === 'write';
   }
   return {

@@ -2,7 +2,12 @@
 import 'server-only';
 import { Algorithm, hash, verify } from '@node-rs/argon2';
 
-const PARAMETERS = { algorithm: 2 satisfies Algorithm.Argon2id, memoryCost: 19_456, timeCost: 2, parallelism: 1 } as const;
+const PARAMETERS = {
+  algorithm: 2 satisfies Algorithm.Argon2id,
+  memoryCost: 19_456,
+  timeCost: 2,
+  parallelism: 1,
+} as const;
 
 export const SHORTEST_PASSWORD = 12;
 export const LONGEST_PASSWORD = 128;

@@ -13,7 +13,15 @@ let limiters: { account: RateLimiterPostgres; address: RateLimiterPostgres } | n
 
 function limiter(by: keyof typeof LIMITS): RateLimiterPostgres {
   const make = (keyPrefix: keyof typeof LIMITS) =>
-    new RateLimiterPostgres({ storeClient: rateLimitPool(), storeType: 'pool', tableName: 'rate_limit', tableCreated: true, keyPrefix, points: LIMITS[keyPrefix], duration: WINDOW_SECONDS });
+    new RateLimiterPostgres({
+      storeClient: rateLimitPool(),
+      storeType: 'pool',
+      tableName: 'rate_limit',
+      tableCreated: true,
+      keyPrefix,
+      points: LIMITS[keyPrefix],
+      duration: WINDOW_SECONDS,
+    });
   limiters ??= { account: make('account'), address: make('address') };
   return limiters[by];
 }
@@ -27,7 +35,10 @@ export async function countTry(what: 'sign-in' | 'mail' | 'token', account: stri
     await limiter('account').consume(hashed(what, account.toLowerCase()));
   } catch (error) {
     if (error instanceof RateLimiterRes) {
-      throw new Refusal('too-many', `Too many tries. Wait ${Math.max(1, Math.ceil(error.msBeforeNext / 60_000))} minutes and try again.`);
+      throw new Refusal(
+        'too-many',
+        `Too many tries. Wait ${Math.max(1, Math.ceil(error.msBeforeNext / 60_000))} minutes and try again.`,
+      );
     }
     throw error;
   }

@@ -19,7 +19,10 @@ export async function endSession(): Promise<void> {
 /** False where the person does not belong to that workshop; the session then stays as it is. */
 export async function moveSession(workshopId: string): Promise<boolean> {
   const [jar, sent] = await Promise.all([cookies(), headers()]);
-  const request = { cookies: Object.fromEntries(jar.getAll().map(({ name, value }) => [name, value])), headers: Object.fromEntries(sent.entries()) };
+  const request = {
+    cookies: Object.fromEntries(jar.getAll().map(({ name, value }) => [name, value])),
+    headers: Object.fromEntries(sent.entries()),
+  };
   const token = await getToken({ req: request as unknown as NextRequest });
   const secret = process.env.NEXTAUTH_SECRET;
   if (!token || !secret || typeof token.personId !== 'string') return false;
@@ -27,6 +30,12 @@ export async function moveSession(workshopId: string): Promise<boolean> {
   const moved = await withScope('auth', (tx) => sessionOf(tx, personId, workshopId));
   if (!moved || moved.sessionEpoch !== token.sessionEpoch) return false;
   const value = await encode({ token: { ...token, workshopId: moved.workshopId }, secret, maxAge: SESSION_SECONDS });
-  jar.set(cookieName(), value, { httpOnly: true, sameSite: 'lax', path: '/', secure: isSecure(), maxAge: SESSION_SECONDS });
+  jar.set(cookieName(), value, {
+    httpOnly: true,
+    sameSite: 'lax',
+    path: '/',
+    secure: isSecure(),
+    maxAge: SESSION_SECONDS,
+  });
   return true;
 }

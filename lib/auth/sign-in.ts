@@ -35,7 +35,14 @@ export async function signInByLink(token: string): Promise<SignedIn | null> {
     const [used] = await tx
       .update(oneTimeLink)
       .set({ usedAt: new Date() })
-      .where(and(eq(oneTimeLink.tokenHash, hashToken(token)), eq(oneTimeLink.purpose, 'sign-in'), isNull(oneTimeLink.usedAt), gt(oneTimeLink.expiresAt, new Date())))
+      .where(
+        and(
+          eq(oneTimeLink.tokenHash, hashToken(token)),
+          eq(oneTimeLink.purpose, 'sign-in'),
+          isNull(oneTimeLink.usedAt),
+          gt(oneTimeLink.expiresAt, new Date()),
+        ),
+      )
       .returning({ personId: oneTimeLink.personId });
     return used ? sessionOf(tx, used.personId) : null;
   });
@@ -44,10 +51,22 @@ export async function signInByLink(token: string): Promise<SignedIn | null> {
 /** The session of a person in the workshop asked for, or in the one they joined first; null where they belong to none. */
 export async function sessionOf(tx: Tx, personId: string, workshopId?: string): Promise<SignedIn | null> {
   const [row] = await tx
-    .select({ id: person.id, name: person.name, email: person.email, sessionEpoch: person.sessionEpoch, workshopId: membership.workshopId })
+    .select({
+      id: person.id,
+      name: person.name,
+      email: person.email,
+      sessionEpoch: person.sessionEpoch,
+      workshopId: membership.workshopId,
+    })
     .from(person)
     .innerJoin(membership, eq(membership.personId, person.id))
-    .where(and(eq(person.id, personId), isNull(membership.endedAt), workshopId === undefined ? undefined : eq(membership.workshopId, workshopId)))
+    .where(
+      and(
+        eq(person.id, personId),
+        isNull(membership.endedAt),
+        workshopId === undefined ? undefined : eq(membership.workshopId, workshopId),
+      ),
+    )
     .orderBy(asc(membership.createdAt))
     .limit(1);
   return row ?? null;

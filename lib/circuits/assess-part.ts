@@ -19,7 +19,9 @@ export const assessPart = query({
   output: candidateFields,
   async run({ tx, actor, input }) {
     const line = await lookAtLine(tx, actor.workshopId, input.lineId);
-    const [shown] = await describeCandidates(tx, actor.workshopId, [await weighOne(tx, actor.workshopId, line, input.partId)]);
+    const [shown] = await describeCandidates(tx, actor.workshopId, [
+      await weighOne(tx, actor.workshopId, line, input.partId),
+    ]);
     if (!shown) throw notFound('part');
     return shown;
   },
@@ -27,7 +29,9 @@ export const assessPart = query({
 
 /** Throws Refusal `not-found` for a part that is not here or retired. */
 export async function weighOne(tx: Tx, workshopId: string, line: LineInView, partId: string): Promise<Candidate> {
-  const known = await tx.execute(sql`select 1 from part where workshop_id = ${workshopId} and id = ${partId} and retired_at is null`);
+  const known = await tx.execute(
+    sql`select 1 from part where workshop_id = ${workshopId} and id = ${partId} and retired_at is null`,
+  );
   if (known.rows.length === 0) throw notFound('part');
   const asked = { spec: line.spec, use: line.use, needed: line.quantity, partIds: [partId] };
   const [found = []] = await findCandidates(tx, workshopId, line.railsVolts, [asked], Number.MAX_SAFE_INTEGER);

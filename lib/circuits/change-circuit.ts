@@ -25,8 +25,17 @@ export const changeCircuit = command({
     const own = and(eq(circuit.workshopId, actor.workshopId), eq(circuit.id, input.circuitId));
     const [before] = await tx.select().from(circuit).where(own).for('update');
     if (!before) throw notFound('circuit');
-    if (before.version !== input.version) throw new Refusal('version.stale', 'Somebody changed this circuit since you looked. Nothing of yours was written.', { more: { version: before.version } });
-    const after = { name: input.name ?? before.name, description: input.description ?? before.description, railsVolts: input.railsVolts ?? before.railsVolts };
+    if (before.version !== input.version)
+      throw new Refusal(
+        'version.stale',
+        'Somebody changed this circuit since you looked. Nothing of yours was written.',
+        { more: { version: before.version } },
+      );
+    const after = {
+      name: input.name ?? before.name,
+      description: input.description ?? before.description,
+      railsVolts: input.railsVolts ?? before.railsVolts,
+    };
     const [made] = await tx
       .update(circuit)
       .set({ ...after, version: sql`${circuit.version} + 1` })

@@ -28,7 +28,12 @@ const same = (a: ComparedLine, b: ComparedLine): boolean => a.specKey === b.spec
 export function compareByDesignator(before: readonly ComparedLine[], after: readonly ComparedLine[]): Difference[] {
   const [old, now] = [indexOf(before), indexOf(after)];
   const grouped = new Map<string, Difference & { designators: string[] }>();
-  const differ = (change: Difference['change'], designator: string, a: ComparedLine | null, b: ComparedLine | null): void => {
+  const differ = (
+    change: Difference['change'],
+    designator: string,
+    a: ComparedLine | null,
+    b: ComparedLine | null,
+  ): void => {
     const key = `${change}|${a === null ? '' : before.indexOf(a)}|${b === null ? '' : after.indexOf(b)}`;
     const group = grouped.get(key) ?? { change, designators: [], before: a, after: b };
     if (!designator.startsWith(NAMELESS)) group.designators.push(designator);

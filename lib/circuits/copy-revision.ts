@@ -23,10 +23,18 @@ export const copyRevision = command({
       .where(and(eq(revision.workshopId, workshopId), eq(revision.id, input.revisionId)))
       .for('share');
     if (!from) throw notFound('revision');
-    if (from.state !== 'frozen') throw new Refusal('state.refused', `Revision ${from.name} is a draft: change it as it is.`);
+    if (from.state !== 'frozen')
+      throw new Refusal('state.refused', `Revision ${from.name} is a draft: change it as it is.`);
     const [made] = await tx
       .insert(revision)
-      .values({ workshopId, circuitId: from.circuitId, name: input.name, uploadId: from.uploadId, reading: from.reading, createdBy: actor.personId })
+      .values({
+        workshopId,
+        circuitId: from.circuitId,
+        name: input.name,
+        uploadId: from.uploadId,
+        reading: from.reading,
+        createdBy: actor.personId,
+      })
       .returning({ id: revision.id, name: revision.name, version: revision.version });
     if (!made) throw new Error('the insert returned no row');
     await tx.execute(sql`

@@ -26,7 +26,12 @@ export const createCircuit = command({
   async run({ tx, actor, input, record }) {
     const [made] = await tx
       .insert(circuit)
-      .values({ workshopId: actor.workshopId, name: input.name, description: input.description, railsVolts: input.railsVolts })
+      .values({
+        workshopId: actor.workshopId,
+        name: input.name,
+        description: input.description,
+        railsVolts: input.railsVolts,
+      })
       .returning({ id: circuit.id, version: circuit.version });
     if (!made) throw new Error('the insert returned no row');
     record(made.id, { name: input.name });

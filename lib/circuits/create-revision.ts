@@ -28,7 +28,8 @@ export const revisionName = () => words(60);
 export const createRevision = errand({
   name: 'revisions.create',
   http: 'POST /revisions',
-  summary: 'Read a parts list into a new revision: a file in a form, the key of an uploaded file, or a pasted table. `freeze` freezes it at once where no question is open.',
+  summary:
+    'Read a parts list into a new revision: a file in a form, the key of an uploaded file, or a pasted table. `freeze` freezes it at once where no question is open.',
   roles: ['builder', 'lead'],
   multipartLimitBytes: MOST_LIST_BYTES + FORM_OVERHEAD_BYTES,
   input: z
@@ -43,7 +44,11 @@ export const createRevision = errand({
       pasted: z.string().max(MOST_LIST_BYTES).optional(),
       freeze: yes.default(false),
     })
-    .refine(({ file, uploadKey, uploadId, pasted }) => [file, uploadKey, uploadId, pasted].filter((one) => one !== undefined).length === 1, 'send one of file, uploadKey, uploadId and pasted'),
+    .refine(
+      ({ file, uploadKey, uploadId, pasted }) =>
+        [file, uploadKey, uploadId, pasted].filter((one) => one !== undefined).length === 1,
+      'send one of file, uploadKey, uploadId and pasted',
+    ),
   output: z.object({
     id: id(),
     name: z.string(),
@@ -66,15 +71,37 @@ export const createRevision = errand({
       return original;
     });
     const bytes = await bytesOf(kept);
-    const start = { workshopId, id: newId(), circuitId: input.circuitId, name: input.name, uploadId: kept.id, createdBy: actor.personId };
+    const start = {
+      workshopId,
+      id: newId(),
+      circuitId: input.circuitId,
+      name: input.name,
+      uploadId: kept.id,
+      createdBy: actor.personId,
+    };
     if (isLongList(bytes)) {
       await step(async ({ tx, record, enqueue }) => {
         await tx.insert(revision).values(start);
-        await tx.insert(progress).values({ workshopId, id: kept.id, what: `Reading ${kept.fileName}`, done: 0, total: bytes.length });
-        await enqueue({ queue: 'read-upload', payload: { uploadId: kept.id, revisionId: start.id, freezeBy: input.freeze ? actor.personId : null } });
+        await tx
+          .insert(progress)
+          .values({ workshopId, id: kept.id, what: `Reading ${kept.fileName}`, done: 0, total: bytes.length });
+        await enqueue({
+          queue: 'read-upload',
+          payload: { uploadId: kept.id, revisionId: start.id, freezeBy: input.freeze ? actor.personId : null },
+        });
         record(start.id, { name: input.name, reading: 'queued' });
       });
-      return { id: start.id, name: input.name, state: 'draft' as const, uploadId: kept.id, reading: 'queued' as const, lines: 0, notLines: 0, openQuestions: 0, questions: [] };
+      return {
+        id: start.id,
+        name: input.name,
+        state: 'draft' as const,
+        uploadId: kept.id,
+        reading: 'queued' as const,
+        lines: 0,
+        notLines: 0,
+        openQuestions: 0,
+        questions: [],
+      };
     }
     const read = await readList(bytes, { fileName: kept.fileName });
     if (!read.ok) {
@@ -88,8 +115,19 @@ export const createRevision = errand({
     return step(async ({ tx, record }) => {
       await refuseTaken(tx, workshopId, input.circuitId, input.name);
       await tx.insert(revision).values(start);
-      const written = await writeRevision(tx, { workshopId, revisionId: start.id, uploadId: kept.id, list: read.list, freezeBy: input.freeze ? actor.personId : null });
-      record(start.id, { name: input.name, lines: written.lines, openQuestions: written.openQuestions, state: written.state });
+      const written = await writeRevision(tx, {
+        workshopId,
+        revisionId: start.id,
+        uploadId: kept.id,
+        list: read.list,
+        freezeBy: input.freeze ? actor.personId : null,
+      });
+      record(start.id, {
+        name: input.name,
+        lines: written.lines,
+        openQuestions: written.openQuestions,
+        state: written.state,
+      });
       const questions = await listQuestions(tx, workshopId, start.id, MOST_QUESTIONS_SHOWN);
       return { id: start.id, name: input.name, uploadId: kept.id, reading: 'done' as const, ...written, questions };
     });
@@ -110,17 +148,31 @@ async function refuseTaken(tx: Tx, workshopId: string, circuitId: string, name: 
   if (taken) throw new Refusal('name.taken', `${into.name} has a revision ${name} already. Nothing was read.`);
 }
 
-type Sources = { readonly circuitId: string; readonly file?: { name: string; bytes: Uint8Array } | undefined; readonly uploadKey?: string | undefined; readonly uploadId?: string | undefined; readonly pasted?: string | undefined };
+type Sources = {
+  readonly circuitId: string;
+  readonly file?: { name: string; bytes: Uint8Array } | undefined;
+  readonly uploadKey?: string | undefined;
+  readonly uploadId?: string | undefined;
+  readonly pasted?: string | undefined;
+};
 type Kept = KeptOriginal & { readonly id: string; readonly sizeBytes: number };
 
 async function keepOriginal(tx: Tx, workshopId: string, personId: string, input: Sources): Promise<Kept> {
   if (input.file === undefined && input.pasted === undefined) return claimUpload(tx, workshopId, input);
   const content = input.file?.bytes ?? new TextEncoder().encode(input.pasted);
   const fileName = input.file?.name.trim() || 'pasted table';
-  if (content.length > MOST_LIST_BYTES) throw new Refusal('too-large', `${fileName} is larger than 50 MiB. Nothing was read.`);
+  if (content.length > MOST_LIST_BYTES)
+    throw new Refusal('too-large', `${fileName} is larger than 50 MiB. Nothing was read.`);
   const [row] = await tx
     .insert(upload)
-    .values({ workshopId, circuitId: input.circuitId, fileName, content, sizeBytes: content.length, uploadedBy: personId })
+    .values({
+      workshopId,
+      circuitId: input.circuitId,
+      fileName,
+      content,
+      sizeBytes: content.length,
+      uploadedBy: personId,
+    })
     .returning({ id: upload.id });
   if (!row) throw new Error('the insert returned no row');
   return { id: row.id, fileName, storeKey: null, content, sizeBytes: content.length };
@@ -131,7 +183,12 @@ async function claimUpload(tx: Tx, workshopId: string, input: Sources): Promise<
   const [row] = await tx
     .select()
     .from(upload)
-    .where(and(eq(upload.workshopId, workshopId), input.uploadId === undefined ? eq(upload.storeKey, input.uploadKey ?? '') : eq(upload.id, input.uploadId)))
+    .where(
+      and(
+        eq(upload.workshopId, workshopId),
+        input.uploadId === undefined ? eq(upload.storeKey, input.uploadKey ?? '') : eq(upload.id, input.uploadId),
+      ),
+    )
     .for('update');
   if (!row) throw notFound('upload');
   const [used] = await tx
@@ -139,7 +196,11 @@ async function claimUpload(tx: Tx, workshopId: string, input: Sources): Promise<
     .from(revision)
     .where(and(eq(revision.workshopId, workshopId), eq(revision.uploadId, row.id)))
     .limit(1);
-  if (used) throw new Refusal('state.refused', `${row.fileName} was read into revision ${used.name} already. Copy that revision, or send the file again.`);
+  if (used)
+    throw new Refusal(
+      'state.refused',
+      `${row.fileName} was read into revision ${used.name} already. Copy that revision, or send the file again.`,
+    );
   await moveUpload(tx, workshopId, row.id, ['try-again']);
   await tx
     .update(upload)
@@ -149,5 +210,10 @@ async function claimUpload(tx: Tx, workshopId: string, input: Sources): Promise<
 }
 
 export async function rejectUpload(tx: Tx, workshopId: string, uploadId: string, refusal: Refusal): Promise<void> {
-  await moveUpload(tx, workshopId, uploadId, ['reject'], { code: refusal.code, detail: refusal.detail, errors: refusal.errors ?? [], more: refusal.more ?? null });
+  await moveUpload(tx, workshopId, uploadId, ['reject'], {
+    code: refusal.code,
+    detail: refusal.detail,
+    errors: refusal.errors ?? [],
+    more: refusal.more ?? null,
+  });
 }

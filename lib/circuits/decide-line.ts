@@ -17,7 +17,8 @@ const NOT_REMEMBERED = '';
 export const decideLine = command({
   name: 'lines.decide',
   http: 'POST /lines/{lineId}/decision',
-  summary: 'Choose a part for a line, or none (null: buy what was asked for). A refused part can’t be chosen; one that asks, or whose figures move, needs a reason.',
+  summary:
+    'Choose a part for a line, or none (null: buy what was asked for). A refused part can’t be chosen; one that asks, or whose figures move, needs a reason.',
   roles: ['builder', 'lead'],
   input: z.strictObject({
     lineId: id(),
@@ -26,7 +27,13 @@ export const decideLine = command({
     /** Offer it again for lines that ask for the same. */
     remember: z.boolean().default(true),
   }),
-  output: z.object({ id: id(), lineId: id(), partId: id().nullable(), verdict: z.enum([...VERDICTS, 'none']), line: lineInView }),
+  output: z.object({
+    id: id(),
+    lineId: id(),
+    partId: id().nullable(),
+    verdict: z.enum([...VERDICTS, 'none']),
+    line: lineInView,
+  }),
   async run({ tx, actor, input, record }) {
     const { revision } = await lockLine(tx, actor.workshopId, input.lineId);
     const line = await lookAtLine(tx, actor.workshopId, input.lineId);
@@ -34,22 +41,39 @@ export const decideLine = command({
     const weighed = input.partId === null ? null : await weighOne(tx, actor.workshopId, line, input.partId);
     if (weighed?.verdict === 'refused') {
       const failed = weighed.checks.filter((check) => check.outcome === 'fail');
-      throw new Refusal('rule.forbids', `It may not stand in here: ${failed.map((check) => check.why).join(' ') || 'the checks refuse it.'} Nothing was decided.`, {
-        errors: failed.map((check) => ({ pointer: '/partId', code: check.check, detail: check.why })),
-        more: { verdict: weighed.verdict, checks: weighed.checks },
-      });
+      throw new Refusal(
+        'rule.forbids',
+        `It may not stand in here: ${failed.map((check) => check.why).join(' ') || 'the checks refuse it.'} Nothing was decided.`,
+        {
+          errors: failed.map((check) => ({ pointer: '/partId', code: check.check, detail: check.why })),
+          more: { verdict: weighed.verdict, checks: weighed.checks },
+        },
+      );
     }
     if (weighed?.verdict === 'ask' && input.reason === '') {
       const open = weighed.checks.filter((check) => check.outcome === 'unknown');
-      throw new Refusal('input.invalid', `Say why it will do, since the checks can’t: ${open.map((check) => check.why).join(' ')} Nothing was decided.`, {
-        errors: [{ pointer: '/reason', code: 'too_small', detail: 'a reason is needed' }],
-        more: { verdict: weighed.verdict, checks: weighed.checks },
-      });
+      throw new Refusal(
+        'input.invalid',
+        `Say why it will do, since the checks can’t: ${open.map((check) => check.why).join(' ')} Nothing was decided.`,
+        {
+          errors: [{ pointer: '/reason', code: 'too_small', detail: 'a reason is needed' }],
+          more: { verdict: weighed.verdict, checks: weighed.checks },
+        },
+      );
     }
     const verdict = weighed?.verdict ?? ('none' as const);
     const [made] = await tx
       .insert(decision)
-      .values({ workshopId: actor.workshopId, lineId: line.id, partId: input.partId, verdict, reason: input.reason, specKey: input.remember ? line.specKey : NOT_REMEMBERED, decidedBy: actor.personId, decidedAt: new Date() })
+      .values({
+        workshopId: actor.workshopId,
+        lineId: line.id,
+        partId: input.partId,
+        verdict,
+        reason: input.reason,
+        specKey: input.remember ? line.specKey : NOT_REMEMBERED,
+        decidedBy: actor.personId,
+        decidedAt: new Date(),
+      })
       .returning({ id: decision.id });
     if (!made) throw new Error('the insert returned no row');
     await matchLines(tx, actor.workshopId, revision.id, [line.id]);

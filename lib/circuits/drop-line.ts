@@ -21,7 +21,14 @@ export const dropLine = command({
     const draft = await lockDraft(tx, actor.workshopId, of.id);
     await removeLine(tx, actor.workshopId, gone.id);
     const kept = keptReading.parse(draft.reading);
-    const reading = { ...kept, notLineCount: kept.notLineCount + 1, notLines: [...kept.notLines, { row: gone.sourceRow, sheet: gone.sheet, why: 'taken out by hand', text: gone.text }] };
+    const reading = {
+      ...kept,
+      notLineCount: kept.notLineCount + 1,
+      notLines: [
+        ...kept.notLines,
+        { row: gone.sourceRow, sheet: gone.sheet, why: 'taken out by hand', text: gone.text },
+      ],
+    };
     await tx
       .update(revision)
       .set({ reading })

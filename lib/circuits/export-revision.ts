@@ -24,7 +24,14 @@ export const exportRevision = query({
       .where(and(eq(revision.workshopId, actor.workshopId), eq(revision.id, input.revisionId)));
     if (!of) throw notFound('revision');
     const lines = await tx
-      .select({ designators: line.designators, quantity: line.quantity, kind: line.kind, text: line.text, fitted: line.fitted, use: line.use })
+      .select({
+        designators: line.designators,
+        quantity: line.quantity,
+        kind: line.kind,
+        text: line.text,
+        fitted: line.fitted,
+        use: line.use,
+      })
       .from(line)
       .where(and(eq(line.workshopId, actor.workshopId), eq(line.revisionId, input.revisionId)))
       .orderBy(asc(line.position));

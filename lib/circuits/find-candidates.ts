@@ -50,7 +50,13 @@ interface FoundRow extends PartColumns, Record<string, unknown> {
 }
 
 /** @returns for each asked part its candidates, best first, at most `keep` of them */
-export async function findCandidates(tx: Tx, workshopId: string, railsVolts: readonly number[], asked: readonly Asked[], keep: number): Promise<Candidate[][]> {
+export async function findCandidates(
+  tx: Tx,
+  workshopId: string,
+  railsVolts: readonly number[],
+  asked: readonly Asked[],
+  keep: number,
+): Promise<Candidate[][]> {
   const answer: Candidate[][] = [];
   for (let from = 0; from < asked.length; from += ASKED_AT_ONCE) {
     const some = asked.slice(from, from + ASKED_AT_ONCE);
@@ -60,7 +66,15 @@ export async function findCandidates(tx: Tx, workshopId: string, railsVolts: rea
     for (const [n, one] of some.entries()) {
       const ranked = (offers[n] ?? []).map((row): Candidate => {
         const weighed = weighAll(one, row, railsVolts);
-        return { partId: row.id, free: row.free, remembered: row.remembered, verdict: weighed.verdict, checks: weighed.checks, deviationPercent: weighed.deviationPercent, outcomes: weighed.checks.map((check) => check.outcome) };
+        return {
+          partId: row.id,
+          free: row.free,
+          remembered: row.remembered,
+          verdict: weighed.verdict,
+          checks: weighed.checks,
+          deviationPercent: weighed.deviationPercent,
+          outcomes: weighed.checks.map((check) => check.outcome),
+        };
       });
       answer.push(ranked.sort(compareRank(one.needed)).slice(0, keep));
     }
@@ -77,7 +91,11 @@ function weighAll({ spec, use }: Asked, row: FoundRow, rails: readonly number[])
     const named = weighPart(readPartText(alternative, { kind: spec.kind }), offered, row.safety, { rails, use });
     if (named.verdict === 'same' || named.verdict === 'drop-in') {
       const why = `The list itself names ${alternative} as an alternative.`;
-      return { verdict: 'drop-in', checks: [pass('named-in-list', alternative, row.name, why), ...named.checks], deviationPercent: weighed.deviationPercent };
+      return {
+        verdict: 'drop-in',
+        checks: [pass('named-in-list', alternative, row.name, why), ...named.checks],
+        deviationPercent: weighed.deviationPercent,
+      };
     }
   }
   return weighed;
@@ -85,8 +103,16 @@ function weighAll({ spec, use }: Asked, row: FoundRow, rails: readonly number[])
 
 function searchOf({ spec, use, partIds }: Asked, n: number) {
   const named = [spec, ...spec.alternatives.map((text) => readPartText(text, { kind: spec.kind }))];
-  const keys = [...new Set(named.flatMap(({ partNumber }) => (partNumber === null ? [] : [partKeyOf(partNumber)])).filter((key) => key !== ''))];
-  const families = [...new Set(named.flatMap(({ family }) => (family === null ? [] : [...relatedFamilies(family), family])))];
+  const keys = [
+    ...new Set(
+      named
+        .flatMap(({ partNumber }) => (partNumber === null ? [] : [partKeyOf(partNumber)]))
+        .filter((key) => key !== ''),
+    ),
+  ];
+  const families = [
+    ...new Set(named.flatMap(({ family }) => (family === null ? [] : [...relatedFamilies(family), family]))),
+  ];
   const value = spec.value === null ? null : toNumber(spec.value);
   const bulk = spec.kind === 'capacitor' && (use === 'decoupling' || use === 'power');
   const near = value !== null && value > 0 && NEAR_KINDS.includes(spec.kind);

@@ -23,14 +23,30 @@ export const freezeRevision = command({
     const draft = await lockDraft(tx, actor.workshopId, input.revisionId, input.version);
     const open = await listQuestions(tx, actor.workshopId, draft.id, MOST_NAMED);
     if (open.length > 0) {
-      const count = open.length === MOST_NAMED ? `${MOST_NAMED} or more questions are` : open.length === 1 ? 'One question is' : `${open.length} questions are`;
-      throw new Refusal('list.unsettled', `${count} open in revision ${draft.name}. Answer them first; nothing was changed.`, {
-        errors: open.map((one) => ({ pointer: `${one.sheet === null ? '' : `sheet ${one.sheet}, `}row ${one.row}`, code: one.code, detail: one.ask })),
-        more: { questions: open },
-      });
+      const count =
+        open.length === MOST_NAMED
+          ? `${MOST_NAMED} or more questions are`
+          : open.length === 1
+            ? 'One question is'
+            : `${open.length} questions are`;
+      throw new Refusal(
+        'list.unsettled',
+        `${count} open in revision ${draft.name}. Answer them first; nothing was changed.`,
+        {
+          errors: open.map((one) => ({
+            pointer: `${one.sheet === null ? '' : `sheet ${one.sheet}, `}row ${one.row}`,
+            code: one.code,
+            detail: one.ask,
+          })),
+          more: { questions: open },
+        },
+      );
     }
-    const lines = await tx.execute(sql`select 1 from line where workshop_id = ${actor.workshopId} and revision_id = ${draft.id} limit 1`);
-    if (lines.rows.length === 0) throw new Refusal('list.unsettled', `Revision ${draft.name} has no line left to freeze.`);
+    const lines = await tx.execute(
+      sql`select 1 from line where workshop_id = ${actor.workshopId} and revision_id = ${draft.id} limit 1`,
+    );
+    if (lines.rows.length === 0)
+      throw new Refusal('list.unsettled', `Revision ${draft.name} has no line left to freeze.`);
     const [made] = await tx
       .update(revision)
       .set({ state: 'frozen', frozenAt: sql`now()`, frozenBy: actor.personId, version: sql`${revision.version} + 1` })

@@ -27,7 +27,17 @@ const detail = z.object({
       openQuestions: z.number().int(),
     }),
   ),
-  batches: z.array(z.object({ id: id(), number: z.string(), revisionId: id(), revisionName: z.string(), units: z.number().int(), state: z.enum(BATCH_STATES), neededBy: z.string().nullable() })),
+  batches: z.array(
+    z.object({
+      id: id(),
+      number: z.string(),
+      revisionId: id(),
+      revisionName: z.string(),
+      units: z.number().int(),
+      state: z.enum(BATCH_STATES),
+      neededBy: z.string().nullable(),
+    }),
+  ),
   /** Originals that could not be read; they are kept. */
   rejected: z.array(z.object({ id: id(), fileName: z.string(), createdAt: instant(), problem: z.unknown() })),
 });

@@ -39,9 +39,15 @@ const MOST_QUESTIONS = 1_000;
 export const readingOfRevision = query({
   name: 'revisions.reading',
   http: 'GET /revisions/{revisionId}/reading',
-  summary: 'The table as read: columns with their roles and reasons, each row beside what was understood, rows that are no parts, open questions.',
+  summary:
+    'The table as read: columns with their roles and reasons, each row beside what was understood, rows that are no parts, open questions.',
   roles: 'everyone',
-  input: z.strictObject({ revisionId: id(), sheet: z.string().max(200).optional(), from: z.coerce.number().int().min(1).default(1), size: z.coerce.number().int().min(1).max(MOST_ROWS).default(MOST_ROWS) }),
+  input: z.strictObject({
+    revisionId: id(),
+    sheet: z.string().max(200).optional(),
+    from: z.coerce.number().int().min(1).default(1),
+    size: z.coerce.number().int().min(1).max(MOST_ROWS).default(MOST_ROWS),
+  }),
   output: z.object({
     revisionId: id(),
     version: z.number().int(),
@@ -49,14 +55,27 @@ export const readingOfRevision = query({
     fileName: z.string().nullable(),
     format: z.string(),
     sheets: z.array(z.string()),
-    tables: z.array(z.object({ sheet: z.string().nullable(), columns: z.array(columnReading), rows: z.array(readRow), rowCount: z.number().int(), rowsKept: z.number().int() })),
+    tables: z.array(
+      z.object({
+        sheet: z.string().nullable(),
+        columns: z.array(columnReading),
+        rows: z.array(readRow),
+        rowCount: z.number().int(),
+        rowsKept: z.number().int(),
+      }),
+    ),
     notLines: z.array(notLine),
     questions: z.array(questionFields),
   }),
   async run({ tx, actor, input }) {
     const { workshopId } = actor;
     const [row] = await tx
-      .select({ version: revision.version, state: revision.state, reading: revision.reading, fileName: upload.fileName })
+      .select({
+        version: revision.version,
+        state: revision.state,
+        reading: revision.reading,
+        fileName: upload.fileName,
+      })
       .from(revision)
       .leftJoin(upload, and(eq(upload.workshopId, revision.workshopId), eq(upload.id, revision.uploadId)))
       .where(and(eq(revision.workshopId, workshopId), eq(revision.id, input.revisionId)));
@@ -65,9 +84,17 @@ export const readingOfRevision = query({
     const questions = await listQuestions(tx, workshopId, input.revisionId, MOST_QUESTIONS);
     const shown = kept.tables
       .filter((table) => input.sheet === undefined || table.sheet === input.sheet)
-      .map((table) => ({ ...table, rowsKept: table.rows.length, rows: table.rows.slice(input.from - 1, input.from - 1 + input.size) }));
+      .map((table) => ({
+        ...table,
+        rowsKept: table.rows.length,
+        rows: table.rows.slice(input.from - 1, input.from - 1 + input.size),
+      }));
     const rowNumbers = shown.flatMap((table) => table.rows.map((one) => one.row));
-    const lines = await tx.execute<{ place_sheet: string | null; place_row: number; line: z.input<typeof understood> }>(sql`
+    const lines = await tx.execute<{
+      place_sheet: string | null;
+      place_row: number;
+      line: z.input<typeof understood>;
+    }>(sql`
       select l.sheet as place_sheet, l.source_row as place_row,
              json_build_object('id', l.id, 'designators', l.designators, 'quantity', l.quantity, 'fitted', l.fitted, 'kind', l.kind, 'text', l.text, 'use', l.use, 'spec', l.spec) as line
         from line l where l.workshop_id = ${workshopId} and l.revision_id = ${input.revisionId}
@@ -88,9 +115,25 @@ export const readingOfRevision = query({
       ...table,
       rows: table.rows.map(({ row: at, cells }) => {
         const place = placeOf(table.sheet, at);
-        return { row: at, cells, lines: linesByPlace.get(place) ?? [], notLine: whyByPlace.get(place) ?? null, questionIds: askedByPlace.get(place) ?? [] };
+        return {
+          row: at,
+          cells,
+          lines: linesByPlace.get(place) ?? [],
+          notLine: whyByPlace.get(place) ?? null,
+          questionIds: askedByPlace.get(place) ?? [],
+        };
       }),
     }));
-    return { revisionId: input.revisionId, version: row.version, state: row.state === 'frozen' ? ('frozen' as const) : ('draft' as const), fileName: row.fileName, format: kept.format, sheets: kept.sheets, tables, notLines: kept.notLines, questions };
+    return {
+      revisionId: input.revisionId,
+      version: row.version,
+      state: row.state === 'frozen' ? ('frozen' as const) : ('draft' as const),
+      fileName: row.fileName,
+      format: kept.format,
+      sheets: kept.sheets,
+      tables,
+      notLines: kept.notLines,
+      questions,
+    };
   },
 });

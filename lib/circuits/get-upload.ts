@@ -25,7 +25,14 @@ export const getUpload = query({
     createdAt: instant(),
     /** Why it was refused: code, detail, errors with row and column, more. */
     problem: z.unknown(),
-    progress: z.object({ what: z.string(), done: z.number(), total: z.number().nullable(), state: z.enum(['running', 'done', 'failed', 'cancelled']) }).nullable(),
+    progress: z
+      .object({
+        what: z.string(),
+        done: z.number(),
+        total: z.number().nullable(),
+        state: z.enum(['running', 'done', 'failed', 'cancelled']),
+      })
+      .nullable(),
   }),
   async run({ tx, actor, input }) {
     const [row] = await tx
@@ -47,7 +54,12 @@ export const getUpload = query({
       revisionId: row.revisionId,
       createdAt: row.upload.createdAt.toISOString(),
       problem: row.upload.problem,
-      progress: row.progress && { what: row.progress.what, done: row.progress.done, total: row.progress.total, state: runs.parse(row.progress.state) },
+      progress: row.progress && {
+        what: row.progress.what,
+        done: row.progress.done,
+        total: row.progress.total,
+        state: runs.parse(row.progress.state),
+      },
     };
   },
 });

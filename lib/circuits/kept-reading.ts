@@ -20,7 +20,12 @@ export const tableReading = z.object({
   rowCount: z.number().int(),
 });
 
-export const notLine = z.object({ row: z.number().int(), sheet: z.string().nullable(), why: z.string(), text: z.string() });
+export const notLine = z.object({
+  row: z.number().int(),
+  sheet: z.string().nullable(),
+  why: z.string(),
+  text: z.string(),
+});
 
 export const columnCorrection = z.object({ sheet: z.string().nullable(), index: z.number().int(), role: z.string() });
 

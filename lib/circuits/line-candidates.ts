@@ -12,7 +12,14 @@ import { binsOf, VERDICTS } from './line-standing';
 
 const MOST_SHOWN = 24;
 
-export const checkFields = z.object({ check: z.string(), wanted: z.string(), offered: z.string(), outcome: z.enum(['pass', 'note', 'fail', 'unknown']), why: z.string(), changes: z.boolean() });
+export const checkFields = z.object({
+  check: z.string(),
+  wanted: z.string(),
+  offered: z.string(),
+  outcome: z.enum(['pass', 'note', 'fail', 'unknown']),
+  why: z.string(),
+  changes: z.boolean(),
+});
 
 export const candidateFields = z.object({
   part: partFacts,
@@ -26,7 +33,14 @@ export const candidateFields = z.object({
   remembered: z.boolean(),
 });
 
-export const decisionFields = z.object({ partId: id().nullable(), partName: z.string().nullable(), verdict: z.string(), reason: z.string(), by: z.string(), at: instant() });
+export const decisionFields = z.object({
+  partId: id().nullable(),
+  partName: z.string().nullable(),
+  verdict: z.string(),
+  reason: z.string(),
+  by: z.string(),
+  at: instant(),
+});
 
 const sheet = z.object({
   line: lineInView,
@@ -42,28 +56,63 @@ const sheet = z.object({
 export const lineCandidates = query({
   name: 'lines.candidates',
   http: 'GET /lines/{lineId}/candidates',
-  summary: 'Everything on the shelf that comes into question for a line, each with all checks and their reasons, best first.',
+  summary:
+    'Everything on the shelf that comes into question for a line, each with all checks and their reasons, best first.',
   roles: 'everyone',
   input: z.strictObject({ lineId: id() }),
   output: sheet,
   async run({ tx, actor, input }) {
     const line = await lookAtLine(tx, actor.workshopId, input.lineId);
-    const [found = []] = await findCandidates(tx, actor.workshopId, line.railsVolts, [{ spec: line.spec, use: line.use, needed: line.quantity }], MOST_SHOWN);
+    const [found = []] = await findCandidates(
+      tx,
+      actor.workshopId,
+      line.railsVolts,
+      [{ spec: line.spec, use: line.use, needed: line.quantity }],
+      MOST_SHOWN,
+    );
     const candidates = await describeCandidates(tx, actor.workshopId, found);
-    const instead = candidates.find((one) => one.verdict !== 'refused' && one.verdict !== 'ask' && one.free > 0) ?? candidates.find((one) => one.verdict === 'ask' && one.free > 0);
-    return { line, candidates, insteadPartId: instead?.part.id ?? null, decisions: await decisionsOf(tx, actor.workshopId, line.id), remembered: await rememberedFor(tx, actor.workshopId, line) };
+    const instead =
+      candidates.find((one) => one.verdict !== 'refused' && one.verdict !== 'ask' && one.free > 0) ??
+      candidates.find((one) => one.verdict === 'ask' && one.free > 0);
+    return {
+      line,
+      candidates,
+      insteadPartId: instead?.part.id ?? null,
+      decisions: await decisionsOf(tx, actor.workshopId, line.id),
+      remembered: await rememberedFor(tx, actor.workshopId, line),
+    };
   },
 });
 
-export async function describeCandidates(tx: Tx, workshopId: string, found: readonly Candidate[]): Promise<z.input<typeof candidateFields>[]> {
-  const shown = await tx.execute<{ id: string; part: z.input<typeof partFacts>; bins: z.input<typeof candidateFields>['bins'] }>(sql`
+export async function describeCandidates(
+  tx: Tx,
+  workshopId: string,
+  found: readonly Candidate[],
+): Promise<z.input<typeof candidateFields>[]> {
+  const shown = await tx.execute<{
+    id: string;
+    part: z.input<typeof partFacts>;
+    bins: z.input<typeof candidateFields>['bins'];
+  }>(sql`
     select p.id, ${partFactsJson('p')} as part, ${binsOf(sql`p.id`)} as bins
       from part p join lateral (select p.workshop_id) l on true
      where p.workshop_id = ${workshopId} and p.id in (select jsonb_array_elements_text(${JSON.stringify(found.map((one) => one.partId))}::jsonb)::uuid)`);
   const byId = new Map(shown.rows.map((row) => [row.id, row]));
   return found.flatMap((one) => {
     const row = byId.get(one.partId);
-    return row ? [{ part: row.part, free: one.free, bins: row.bins, verdict: one.verdict, checks: [...one.checks], deviationPercent: one.deviationPercent, remembered: one.remembered }] : [];
+    return row
+      ? [
+          {
+            part: row.part,
+            free: one.free,
+            bins: row.bins,
+            verdict: one.verdict,
+            checks: [...one.checks],
+            deviationPercent: one.deviationPercent,
+            remembered: one.remembered,
+          },
+        ]
+      : [];
   });
 }
 
@@ -77,8 +126,16 @@ async function decisionsOf(tx: Tx, workshopId: string, lineId: string): Promise<
   return found.rows.map((row) => row.decision);
 }
 
-async function rememberedFor(tx: Tx, workshopId: string, line: LineInView): Promise<z.input<typeof sheet>['remembered']> {
-  const found = await tx.execute<{ decision: z.input<typeof decisionFields>; circuitName: string; revisionName: string }>(sql`
+async function rememberedFor(
+  tx: Tx,
+  workshopId: string,
+  line: LineInView,
+): Promise<z.input<typeof sheet>['remembered']> {
+  const found = await tx.execute<{
+    decision: z.input<typeof decisionFields>;
+    circuitName: string;
+    revisionName: string;
+  }>(sql`
     select ${decisionJson} as decision, c.name as "circuitName", r.name as "revisionName"
       from decision d
       left join part p on p.workshop_id = d.workshop_id and p.id = d.part_id

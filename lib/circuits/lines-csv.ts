@@ -12,7 +12,14 @@ export interface CsvLine {
 const HEADING = ['Designators', 'Quantity', 'Value', 'Kind', 'Fitted', 'Use'];
 
 export function linesCsv(lines: readonly CsvLine[]): string {
-  const rows = lines.map((one) => [one.designators.join(' '), String(one.quantity), one.text, one.kind, one.fitted ? 'yes' : 'not fitted', one.use ?? '']);
+  const rows = lines.map((one) => [
+    one.designators.join(' '),
+    String(one.quantity),
+    one.text,
+    one.kind,
+    one.fitted ? 'yes' : 'not fitted',
+    one.use ?? '',
+  ]);
   return [HEADING, ...rows].map((row) => `${row.map(cell).join(',')}\r\n`).join('');
 }
 

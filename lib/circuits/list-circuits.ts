@@ -10,7 +10,9 @@ const circuitRow = z.object({
   name: z.string(),
   description: z.string(),
   railsVolts: z.array(z.number()),
-  newestRevision: z.object({ id: id(), name: z.string(), state: z.enum(['draft', 'frozen']), createdAt: instant() }).nullable(),
+  newestRevision: z
+    .object({ id: id(), name: z.string(), state: z.enum(['draft', 'frozen']), createdAt: instant() })
+    .nullable(),
   revisions: z.number().int(),
   batchesUnderWay: z.number().int(),
 });
@@ -41,6 +43,11 @@ export const listCircuits = query({
        where c.workshop_id = ${actor.workshopId} and c.name ilike ${pattern}
        order by c.name
        limit ${input.size} offset ${(input.page - 1) * input.size}`);
-    return { rows: found.rows.map(({ row }) => row), total: found.rows[0]?.total ?? 0, page: input.page, size: input.size };
+    return {
+      rows: found.rows.map(({ row }) => row),
+      total: found.rows[0]?.total ?? 0,
+      page: input.page,
+      size: input.size,
+    };
   },
 });

@@ -35,13 +35,23 @@ const lineRow = z.object({
   chosen: z.object({ part: partFacts, free: z.number().int(), bins: z.array(binFree) }).nullable(),
   decision: z.object({ partId: id().nullable(), reason: z.string(), by: z.string(), at: instant() }).nullable(),
   /** The best candidate where nothing is chosen, with the first check that speaks against it or asks for a hand. */
-  best: z.object({ part: partFacts, free: z.number().int(), bins: z.array(binFree), verdict: z.enum(VERDICTS), deviationPercent: z.number().nullable(), because: z.string().nullable() }).nullable(),
+  best: z
+    .object({
+      part: partFacts,
+      free: z.number().int(),
+      bins: z.array(binFree),
+      verdict: z.enum(VERDICTS),
+      deviationPercent: z.number().nullable(),
+      because: z.string().nullable(),
+    })
+    .nullable(),
 });
 
 export const listLines = query({
   name: 'lines.list',
   http: 'GET /revisions/{revisionId}/lines',
-  summary: 'Lines of a revision with need, free stock, verdict and the part that would be taken. `units` is how many circuits are to be made.',
+  summary:
+    'Lines of a revision with need, free stock, verdict and the part that would be taken. `units` is how many circuits are to be made.',
   roles: 'everyone',
   input: z.strictObject({
     revisionId: id(),
@@ -54,12 +64,20 @@ export const listLines = query({
   output: pageOf(lineRow),
   async run({ tx, actor, input }) {
     const { workshopId } = actor;
-    const known = await tx.execute(sql`select 1 from revision where workshop_id = ${workshopId} and id = ${input.revisionId}`);
+    const known = await tx.execute(
+      sql`select 1 from revision where workshop_id = ${workshopId} and id = ${input.revisionId}`,
+    );
     if (known.rows.length === 0) throw notFound('revision');
     const wanted = [
-      input.standing ? sql`s.standing in (select jsonb_array_elements_text(${JSON.stringify(input.standing)}::jsonb))` : sql`true`,
-      input.verdict ? sql`s.verdict in (select jsonb_array_elements_text(${JSON.stringify(input.verdict)}::jsonb))` : sql`true`,
-      input.search ? sql`(l.text ilike ${`%${input.search.replace(/[\\%_]/g, '\\$&')}%`} or upper(${input.search}) = any(l.designators))` : sql`true`,
+      input.standing
+        ? sql`s.standing in (select jsonb_array_elements_text(${JSON.stringify(input.standing)}::jsonb))`
+        : sql`true`,
+      input.verdict
+        ? sql`s.verdict in (select jsonb_array_elements_text(${JSON.stringify(input.verdict)}::jsonb))`
+        : sql`true`,
+      input.search
+        ? sql`(l.text ilike ${`%${input.search.replace(/[\\%_]/g, '\\$&')}%`} or upper(${input.search}) = any(l.designators))`
+        : sql`true`,
     ];
     const found = await tx.execute<{ row: z.input<typeof lineRow>; total: number }>(sql`
       with ${stood(workshopId, input.revisionId, input.units)},
@@ -81,6 +99,11 @@ export const listLines = query({
                    from part p where p.workshop_id = l.workshop_id and p.id = s.best_id) end) as row
         from page s join line l on l.workshop_id = ${workshopId} and l.id = s.id
        order by s.position`);
-    return { rows: found.rows.map(({ row }) => row), total: found.rows[0]?.total ?? 0, page: input.page, size: input.size };
+    return {
+      rows: found.rows.map(({ row }) => row),
+      total: found.rows[0]?.total ?? 0,
+      page: input.page,
+      size: input.size,
+    };
   },
 });

@@ -18,7 +18,12 @@ export const questionFields = z.object({
   text: z.string(),
 });
 
-export async function listQuestions(tx: Tx, workshopId: string, revisionId: string, most: number): Promise<z.input<typeof questionFields>[]> {
+export async function listQuestions(
+  tx: Tx,
+  workshopId: string,
+  revisionId: string,
+  most: number,
+): Promise<z.input<typeof questionFields>[]> {
   const found = await tx.execute<{ question: z.input<typeof questionFields> }>(sql`
     select json_build_object('id', q.id, 'lineId', q.line_id, 'sheet', q.sheet, 'row', q.source_row, 'code', q.code, 'ask', q.ask, 'options', q.options,
              'designators', coalesce(l.designators, '{}'), 'text', coalesce(l.text, '')) as question

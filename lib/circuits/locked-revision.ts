@@ -5,10 +5,18 @@ import type { Tx } from '@/db/client';
 import { line, revision, upload } from '@/db/schema/circuits';
 import { notFound, Refusal } from '@/lib/api/problem';
 
-export type LockedRevision = Pick<typeof revision.$inferSelect, 'id' | 'workshopId' | 'circuitId' | 'name' | 'uploadId' | 'version' | 'reading'> & { readonly state: 'draft' | 'frozen' };
+export type LockedRevision = Pick<
+  typeof revision.$inferSelect,
+  'id' | 'workshopId' | 'circuitId' | 'name' | 'uploadId' | 'version' | 'reading'
+> & { readonly state: 'draft' | 'frozen' };
 
 /** @param version what the person saw; another one now is refused with the current */
-export async function lockRevision(tx: Tx, workshopId: string, revisionId: string, version?: number): Promise<LockedRevision> {
+export async function lockRevision(
+  tx: Tx,
+  workshopId: string,
+  revisionId: string,
+  version?: number,
+): Promise<LockedRevision> {
   const [row] = await tx
     .select()
     .from(revision)
@@ -16,21 +24,32 @@ export async function lockRevision(tx: Tx, workshopId: string, revisionId: strin
     .for('update');
   if (!row) throw notFound('revision');
   if (version !== undefined && row.version !== version) {
-    throw new Refusal('version.stale', `Somebody changed revision ${row.name} since you looked. Nothing of yours was written; look at it again.`, { more: { version: row.version } });
+    throw new Refusal(
+      'version.stale',
+      `Somebody changed revision ${row.name} since you looked. Nothing of yours was written; look at it again.`,
+      { more: { version: row.version } },
+    );
   }
   return { ...row, state: row.state === 'frozen' ? 'frozen' : 'draft' };
 }
 
 /** Locks it and refuses where it may not change: frozen, or its list is still being read. */
-export async function lockDraft(tx: Tx, workshopId: string, revisionId: string, version?: number): Promise<LockedRevision> {
+export async function lockDraft(
+  tx: Tx,
+  workshopId: string,
+  revisionId: string,
+  version?: number,
+): Promise<LockedRevision> {
   const locked = await lockRevision(tx, workshopId, revisionId, version);
-  if (locked.state === 'frozen') throw new Refusal('state.refused', `Revision ${locked.name} is frozen and never changes: make a new one.`);
+  if (locked.state === 'frozen')
+    throw new Refusal('state.refused', `Revision ${locked.name} is frozen and never changes: make a new one.`);
   if (locked.uploadId !== null) {
     const [from] = await tx
       .select({ state: upload.state })
       .from(upload)
       .where(and(eq(upload.workshopId, workshopId), eq(upload.id, locked.uploadId)));
-    if (from?.state === 'received') throw new Refusal('state.refused', `The list of revision ${locked.name} is still being read.`);
+    if (from?.state === 'received')
+      throw new Refusal('state.refused', `The list of revision ${locked.name} is still being read.`);
   }
   return locked;
 }

@@ -24,13 +24,23 @@ interface Group {
   readonly needed: number;
 }
 
-const groupRow = z.object({ spec_key: z.string(), use: z.enum(USES).nullable(), spec: partSpecSchema, needed: z.number() });
+const groupRow = z.object({
+  spec_key: z.string(),
+  use: z.enum(USES).nullable(),
+  spec: partSpecSchema,
+  needed: z.number(),
+});
 
 /**
  * Writes the candidates of all lines, or of the given ones and those alike, of one revision.
  * @returns how many different specifications were weighed
  */
-export async function matchLines(tx: Tx, workshopId: string, revisionId: string, lineIds: readonly string[] | null = null): Promise<number> {
+export async function matchLines(
+  tx: Tx,
+  workshopId: string,
+  revisionId: string,
+  lineIds: readonly string[] | null = null,
+): Promise<number> {
   if (lineIds?.length === 0) return 0;
   const [found] = (
     await tx.execute<{ rails: number[] }>(sql`
@@ -38,7 +48,10 @@ export async function matchLines(tx: Tx, workshopId: string, revisionId: string,
        where r.workshop_id = ${workshopId} and r.id = ${revisionId}`)
   ).rows;
   if (!found) return 0;
-  const chosen = lineIds === null ? sql`true` : sql`l.id in (select jsonb_array_elements_text(${JSON.stringify(lineIds)}::jsonb)::uuid)`;
+  const chosen =
+    lineIds === null
+      ? sql`true`
+      : sql`l.id in (select jsonb_array_elements_text(${JSON.stringify(lineIds)}::jsonb)::uuid)`;
   // A line that is not fitted needs no part; its candidates would only be noise.
   const grouped = await tx.execute(sql`
     select l.spec_key, l.use, (array_agg(l.spec order by l.position))[1] as spec, max(l.quantity) as needed
@@ -47,8 +60,12 @@ export async function matchLines(tx: Tx, workshopId: string, revisionId: string,
   await tx.execute(sql`
     delete from candidate k using line l
      where k.workshop_id = ${workshopId} and l.workshop_id = k.workshop_id and l.id = k.line_id and l.revision_id = ${revisionId}
-       and ${lineIds === null ? sql`true` : sql`(${chosen} or (l.spec_key, coalesce(l.use, '')) in (
-         select l.spec_key, coalesce(l.use, '') from line l where l.workshop_id = ${workshopId} and l.revision_id = ${revisionId} and ${chosen}))`}`);
+       and ${
+         lineIds === null
+           ? sql`true`
+           : sql`(${chosen} or (l.spec_key, coalesce(l.use, '')) in (
+         select l.spec_key, coalesce(l.use, '') from line l where l.workshop_id = ${workshopId} and l.revision_id = ${revisionId} and ${chosen}))`
+       }`);
   const groups = grouped.rows.map((row): Group => {
     const { spec_key: specKey, use, spec, needed } = groupRow.parse(row);
     return { specKey, use, spec, needed };
@@ -59,7 +76,13 @@ export async function matchLines(tx: Tx, workshopId: string, revisionId: string,
   return groups.length;
 }
 
-async function writeCandidates(tx: Tx, workshopId: string, revisionId: string, rails: readonly number[], groups: readonly Group[]): Promise<void> {
+async function writeCandidates(
+  tx: Tx,
+  workshopId: string,
+  revisionId: string,
+  rails: readonly number[],
+  groups: readonly Group[],
+): Promise<void> {
   const candidates = await findCandidates(tx, workshopId, rails, groups, KEPT_A_LINE);
   const rows = groups.flatMap((group, n) =>
     (candidates[n] ?? []).map((one, place) => ({
@@ -97,7 +120,10 @@ export async function matchStockChanged({ workshopId, payload }: HandledJob): Pr
     const changed = await tx.execute<{ id: string; family: string | null }>(sql`
       select id, family from part where workshop_id = ${workshopId} and id in (select jsonb_array_elements_text(${JSON.stringify(partIds)}::jsonb)::uuid)`);
     if (changed.rows.length === 0) return;
-    const parts = changed.rows.map(({ id, family }) => ({ id, families: family === null ? [] : [...relatedFamilies(family), family] }));
+    const parts = changed.rows.map(({ id, family }) => ({
+      id,
+      families: family === null ? [] : [...relatedFamilies(family), family],
+    }));
     const touched = await tx.execute<{ revision_id: string; lines: string[] }>(sql`
       select l.revision_id, json_agg(distinct l.id) as lines
         from jsonb_to_recordset(${JSON.stringify(parts)}::jsonb) as a(id uuid, families text[])

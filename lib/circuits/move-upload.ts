@@ -6,7 +6,13 @@ import { upload } from '@/db/schema/circuits';
 import { UPLOAD_STATES, type UploadAct, type UploadState, uploadStateAfter } from './upload-states';
 
 /** @param problem what is kept of a refusal; null clears an earlier one */
-export async function moveUpload(tx: Tx, workshopId: string, uploadId: string, acts: readonly UploadAct[], problem: unknown = null): Promise<void> {
+export async function moveUpload(
+  tx: Tx,
+  workshopId: string,
+  uploadId: string,
+  acts: readonly UploadAct[],
+  problem: unknown = null,
+): Promise<void> {
   const own = and(eq(upload.workshopId, workshopId), eq(upload.id, uploadId));
   const [row] = await tx.select({ state: upload.state }).from(upload).where(own).for('update');
   let state: UploadState | undefined = UPLOAD_STATES.find((one) => one === row?.state);
@@ -20,7 +26,12 @@ export async function moveUpload(tx: Tx, workshopId: string, uploadId: string, a
 }
 
 /** Once no question is open: `settle` where that has not been noted yet, then the given acts. */
-export async function settleUpload(tx: Tx, workshopId: string, uploadId: string, then: readonly UploadAct[]): Promise<void> {
+export async function settleUpload(
+  tx: Tx,
+  workshopId: string,
+  uploadId: string,
+  then: readonly UploadAct[],
+): Promise<void> {
   const [row] = await tx
     .select({ state: upload.state })
     .from(upload)

@@ -3,9 +3,38 @@ import { z } from 'zod';
 import { PART_KINDS, type PartSpec, UNITS } from '@/lib/electronics/part-spec';
 import { toDecimal } from '@/lib/electronics/quantity';
 
-const DIELECTRICS = ['C0G', 'X5R', 'X6S', 'X7R', 'X7S', 'X8R', 'Y5V', 'Y5U', 'Z5U', 'ceramic', 'film', 'polyester', 'polypropylene', 'polystyrene', 'polycarbonate', 'mica', 'aluminium', 'aluminium-bipolar', 'polymer', 'tantalum'] as const;
+const DIELECTRICS = [
+  'C0G',
+  'X5R',
+  'X6S',
+  'X7R',
+  'X7S',
+  'X8R',
+  'Y5V',
+  'Y5U',
+  'Z5U',
+  'ceramic',
+  'film',
+  'polyester',
+  'polypropylene',
+  'polystyrene',
+  'polycarbonate',
+  'mica',
+  'aluminium',
+  'aluminium-bipolar',
+  'polymer',
+  'tantalum',
+] as const;
 const TAPERS = ['linear', 'log', 'reverse-log', 'letter-A', 'letter-B', 'letter-C', 'other'] as const;
-const TECHNOLOGIES = ['carbon-film', 'carbon-composition', 'metal-film', 'metal-oxide', 'wirewound', 'thick-film', 'thin-film'] as const;
+const TECHNOLOGIES = [
+  'carbon-film',
+  'carbon-composition',
+  'metal-film',
+  'metal-oxide',
+  'wirewound',
+  'thick-film',
+  'thin-film',
+] as const;
 const MOUNTINGS = ['through-hole', 'surface', 'panel'] as const;
 
 export const partSpecSchema = z.object({
@@ -39,7 +68,18 @@ export const partKeyOf = (partNumber: string): string => partNumber.replace(/[^A
  * spelling (`4k7`, `4.7 kΩ`) have one key; what was not understood is told apart by its text.
  */
 export function specKeyOf(spec: PartSpec): string {
-  const { kind, value, tolerancePercent, ratedVolts, ratedWatts, ratedAmperes, dielectric, technology, taper, mounting } = spec;
+  const {
+    kind,
+    value,
+    tolerancePercent,
+    ratedVolts,
+    ratedWatts,
+    ratedAmperes,
+    dielectric,
+    technology,
+    taper,
+    mounting,
+  } = spec;
   const words = spec.text.normalize('NFKC').toUpperCase();
   const named = spec.partNumber !== null || spec.family !== null || value !== null;
   return [
@@ -52,7 +92,9 @@ export function specKeyOf(spec: PartSpec): string {
     mounting ?? '',
     spec.package ?? '',
     spec.partNumber === null ? (spec.family ?? '') : partKeyOf(spec.partNumber),
-    named ? [...new Set(words.match(TELLING_WORDS) ?? [])].sort().join(' ') : words.replace(/\s+/g, ' ').trim().slice(0, 300),
+    named
+      ? [...new Set(words.match(TELLING_WORDS) ?? [])].sort().join(' ')
+      : words.replace(/\s+/g, ' ').trim().slice(0, 300),
   ].join('|');
 }
 

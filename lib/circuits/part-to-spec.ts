@@ -33,7 +33,8 @@ const units = z.enum(UNITS);
 const { dielectric, technology, taper, mounting } = partSpecSchema.shape;
 
 /** Words that the catalogue has but the checks don't know count as not said, so that the checks ask instead of guessing. */
-const known = <Schema extends z.ZodType>(schema: Schema, given: unknown): z.output<Schema> | null => schema.safeParse(given).data ?? null;
+const known = <Schema extends z.ZodType>(schema: Schema, given: unknown): z.output<Schema> | null =>
+  schema.safeParse(given).data ?? null;
 
 export function partToSpec(part: PartColumns): PartSpec {
   const unit = known(units, part.unit);

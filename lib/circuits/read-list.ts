@@ -18,21 +18,34 @@ export interface ReadListOptions {
   readonly signal?: AbortSignal;
 }
 
-export async function readList(bytes: Uint8Array, options: ReadListOptions): Promise<{ ok: true; list: ReadList } | { ok: false; problem: PartsListProblem }> {
+export async function readList(
+  bytes: Uint8Array,
+  options: ReadListOptions,
+): Promise<{ ok: true; list: ReadList } | { ok: false; problem: PartsListProblem }> {
   const read = await readPartsList(bytes, options);
   return read.ok ? { ok: true, list: listOf(read, options.columnRoles ?? []) } : { ok: false, problem: read };
 }
 
 function listOf(read: PartsListReading, columnRoles: readonly ColumnCorrection[]): ReadList {
-  const lines = read.lines.map((line): LineDraft => ({
-    sheet: line.sheet ?? null,
-    sourceRow: line.row,
-    designators: line.designators,
-    quantity: line.quantity ?? Math.max(1, line.designators.length),
-    spec: line.spec,
-    use: useIn(line.text),
-  }));
-  const questions = read.questions.map((asked): QuestionDraft => ({ sheet: asked.sheet ?? null, sourceRow: asked.row, code: asked.code, ask: asked.ask, options: asked.options }));
+  const lines = read.lines.map(
+    (line): LineDraft => ({
+      sheet: line.sheet ?? null,
+      sourceRow: line.row,
+      designators: line.designators,
+      quantity: line.quantity ?? Math.max(1, line.designators.length),
+      spec: line.spec,
+      use: useIn(line.text),
+    }),
+  );
+  const questions = read.questions.map(
+    (asked): QuestionDraft => ({
+      sheet: asked.sheet ?? null,
+      sourceRow: asked.row,
+      code: asked.code,
+      ask: asked.ask,
+      options: asked.options,
+    }),
+  );
   return { lines, questions, reading: keptOf(read, columnRoles) };
 }
 
@@ -42,24 +55,55 @@ function keptOf(read: PartsListReading, columnRoles: readonly ColumnCorrection[]
     format: read.format,
     sheets: [...read.sheets],
     tables: read.tables.map((table) => {
-      const rows = table.rows.slice(0, room).map(({ row, cells }) => ({ row, cells: cells.map((cell) => cell.slice(0, MOST_KEPT_CELL_CHARACTERS)) }));
+      const rows = table.rows
+        .slice(0, room)
+        .map(({ row, cells }) => ({ row, cells: cells.map((cell) => cell.slice(0, MOST_KEPT_CELL_CHARACTERS)) }));
       room -= rows.length;
-      return { sheet: table.sheet ?? null, columns: table.columns.map((column) => ({ ...column })), rows, rowCount: table.rows.length };
+      return {
+        sheet: table.sheet ?? null,
+        columns: table.columns.map((column) => ({ ...column })),
+        rows,
+        rowCount: table.rows.length,
+      };
     }),
-    notLines: read.notLines.slice(0, MOST_KEPT_ROWS).map(({ row, sheet, why, text }) => ({ row, sheet: sheet ?? null, why, text: text.slice(0, MOST_KEPT_CELL_CHARACTERS) })),
+    notLines: read.notLines
+      .slice(0, MOST_KEPT_ROWS)
+      .map(({ row, sheet, why, text }) => ({
+        row,
+        sheet: sheet ?? null,
+        why,
+        text: text.slice(0, MOST_KEPT_CELL_CHARACTERS),
+      })),
     notLineCount: read.notLines.length,
     columnRoles: [...columnRoles],
   };
 }
 
 /** What the person is told, with the place and the cure; the file itself is kept. */
-export function refusalOfList(problem: PartsListProblem, kept: { readonly id: string; readonly fileName: string }): Refusal {
-  const place = [problem.sheet ? `sheet ${problem.sheet}` : null, problem.row ? `row ${problem.row}` : null, problem.column ? `column ${problem.column}` : null].filter((one) => one !== null).join(', ');
+export function refusalOfList(
+  problem: PartsListProblem,
+  kept: { readonly id: string; readonly fileName: string },
+): Refusal {
+  const place = [
+    problem.sheet ? `sheet ${problem.sheet}` : null,
+    problem.row ? `row ${problem.row}` : null,
+    problem.column ? `column ${problem.column}` : null,
+  ]
+    .filter((one) => one !== null)
+    .join(', ');
   const error: FieldProblem = { pointer: place, code: problem.code, detail: problem.detail };
   const detail = `${place === '' ? '' : `${place[0]?.toUpperCase()}${place.slice(1)}: `}${problem.detail} ${problem.cure} Nothing was changed; ${kept.fileName} is kept.`;
   return new Refusal('list.unreadable', detail, {
     errors: [error],
-    more: { uploadId: kept.id, fileName: kept.fileName, code: problem.code, sheet: problem.sheet ?? null, row: problem.row ?? null, column: problem.column ?? null, cure: problem.cure },
+    more: {
+      uploadId: kept.id,
+      fileName: kept.fileName,
+      code: problem.code,
+      sheet: problem.sheet ?? null,
+      row: problem.row ?? null,
+      column: problem.column ?? null,
+      cure: problem.cure,
+    },
   });
 }
 

@@ -39,22 +39,53 @@ export async function readUpload({ id: jobId, workshopId, payload }: HandledJob)
   try {
     const read = await readList(bytes, { fileName: original.fileName, onProgress: bar.reading, signal: bar.signal });
     if (!read.ok) {
-      await giveUp(workshopId, uploadId, revisionId, refusalOfList(read.problem, { id: uploadId, fileName: original.fileName }), 'failed');
+      await giveUp(
+        workshopId,
+        uploadId,
+        revisionId,
+        refusalOfList(read.problem, { id: uploadId, fileName: original.fileName }),
+        'failed',
+      );
       return;
     }
     await bar.refuseCancelled();
     const total = read.list.lines.length;
     await withWorkshop(workshopId, async (tx) => {
-      const written = await writeRevision(tx, { workshopId, revisionId, uploadId, list: read.list, freezeBy, progress: (done) => bar.writing(done, total) });
+      const written = await writeRevision(tx, {
+        workshopId,
+        revisionId,
+        uploadId,
+        list: read.list,
+        freezeBy,
+        progress: (done) => bar.writing(done, total),
+      });
       await tx
         .update(progress)
         .set({ state: 'done', done: bytes.length, updatedAt: new Date() })
         .where(and(eq(progress.workshopId, workshopId), eq(progress.id, uploadId)));
-      await tx.insert(auditEvent).values({ workshopId, personId: start.createdBy, command: 'revisions.read', subjectId: revisionId, detail: { ...written }, requestId: jobId });
+      await tx
+        .insert(auditEvent)
+        .values({
+          workshopId,
+          personId: start.createdBy,
+          command: 'revisions.read',
+          subjectId: revisionId,
+          detail: { ...written },
+          requestId: jobId,
+        });
     });
   } catch (error) {
     if (!(error instanceof ReadingCancelled)) throw error;
-    await giveUp(workshopId, uploadId, revisionId, new Refusal('state.refused', `Reading ${original.fileName} was stopped. The file is kept; nothing else was changed.`), 'cancelled');
+    await giveUp(
+      workshopId,
+      uploadId,
+      revisionId,
+      new Refusal(
+        'state.refused',
+        `Reading ${original.fileName} was stopped. The file is kept; nothing else was changed.`,
+      ),
+      'cancelled',
+    );
   } finally {
     await bar.stop();
   }
@@ -63,13 +94,28 @@ export async function readUpload({ id: jobId, workshopId, payload }: HandledJob)
 class ReadingCancelled extends Error {}
 
 /** The revision that waited for its lines goes; the upload says why. */
-async function giveUp(workshopId: string, uploadId: string, revisionId: string, refusal: Refusal, state: 'failed' | 'cancelled'): Promise<void> {
+async function giveUp(
+  workshopId: string,
+  uploadId: string,
+  revisionId: string,
+  refusal: Refusal,
+  state: 'failed' | 'cancelled',
+): Promise<void> {
   await withWorkshop(workshopId, async (tx) => {
     await tx.delete(revision).where(and(eq(revision.workshopId, workshopId), eq(revision.id, revisionId)));
     await rejectUpload(tx, workshopId, uploadId, refusal);
     await tx
       .update(progress)
-      .set({ state, problem: { code: refusal.code, detail: refusal.detail, errors: refusal.errors ?? [], more: refusal.more ?? null }, updatedAt: new Date() })
+      .set({
+        state,
+        problem: {
+          code: refusal.code,
+          detail: refusal.detail,
+          errors: refusal.errors ?? [],
+          more: refusal.more ?? null,
+        },
+        updatedAt: new Date(),
+      })
       .where(and(eq(progress.workshopId, workshopId), eq(progress.id, uploadId)));
   });
 }
@@ -88,7 +134,10 @@ function progressBar(workshopId: string, uploadId: string, totalBytes: number) {
     const rows = await withWorkshop(workshopId, (tx) =>
       tx
         .update(progress)
-        .set({ done: sql`case when state = 'running' then ${Math.floor(totalBytes * share)}::bigint else done end`, updatedAt: new Date() })
+        .set({
+          done: sql`case when state = 'running' then ${Math.floor(totalBytes * share)}::bigint else done end`,
+          updatedAt: new Date(),
+        })
         .where(and(eq(progress.workshopId, workshopId), eq(progress.id, uploadId)))
         .returning({ state: progress.state }),
     );

@@ -13,7 +13,11 @@ import { loadActor } from '@/lib/auth/load-actor';
 import type { StoredUpload, UploadCalls } from '@/lib/services/uploads';
 import { MOST_LIST_BYTES } from './upload-bytes';
 
-export async function authoriseUpload(request: NextRequest, file: { readonly name: string; readonly size: number }, circuitId: string | null): ReturnType<UploadCalls['authorise']> {
+export async function authoriseUpload(
+  request: NextRequest,
+  file: { readonly name: string; readonly size: number },
+  circuitId: string | null,
+): ReturnType<UploadCalls['authorise']> {
   const credentials = await credentialsOf(request);
   if (!credentials) return { ok: false, message: 'Sign in first.' };
   if (file.size > MOST_LIST_BYTES) return { ok: false, message: 'A parts list may have 50 MB. Nothing was sent.' };
@@ -22,7 +26,8 @@ export async function authoriseUpload(request: NextRequest, file: { readonly nam
       credentials.workshopId,
       async (tx) => {
         const actor = await loadActor(tx, credentials);
-        if (!actor.mayWrite || !actor.roles.some((role) => role === 'builder' || role === 'lead')) return { ok: false, message: 'Sending a parts list needs the role builder or lead.' };
+        if (!actor.mayWrite || !actor.roles.some((role) => role === 'builder' || role === 'lead'))
+          return { ok: false, message: 'Sending a parts list needs the role builder or lead.' };
         if (circuitId !== null) {
           const [into] = await tx
             .select({ id: circuit.id })
@@ -45,11 +50,27 @@ export async function receiveUpload(file: StoredUpload): Promise<{ uploadId: str
   return withWorkshop(workshopId, async (tx) => {
     const [made] = await tx
       .insert(upload)
-      .values({ workshopId, circuitId: file.circuitId, fileName: file.name, storeKey: file.key, sizeBytes: file.size, uploadedBy: personId })
+      .values({
+        workshopId,
+        circuitId: file.circuitId,
+        fileName: file.name,
+        storeKey: file.key,
+        sizeBytes: file.size,
+        uploadedBy: personId,
+      })
       .onConflictDoNothing({ target: [upload.workshopId, upload.storeKey] })
       .returning({ id: upload.id });
     if (made) {
-      await tx.insert(auditEvent).values({ workshopId, personId, command: 'uploads.receive', subjectId: made.id, detail: { fileName: file.name, bytes: file.size }, requestId: newRequestId() });
+      await tx
+        .insert(auditEvent)
+        .values({
+          workshopId,
+          personId,
+          command: 'uploads.receive',
+          subjectId: made.id,
+          detail: { fileName: file.name, bytes: file.size },
+          requestId: newRequestId(),
+        });
       return { uploadId: made.id };
     }
     const [there] = await tx

@@ -9,7 +9,15 @@ export function relatedFamilies(familyId: string): readonly string[] {
   const kept = known.get(familyId);
   if (kept) return kept;
   const wanted = findFamily(familyId);
-  const related = wanted === null ? [] : [wanted.id, ...listFamilies(wanted.group).filter((other) => other.id !== wanted.id && doesTheSameJob(wanted, other)).map((other) => other.id)];
+  const related =
+    wanted === null
+      ? []
+      : [
+          wanted.id,
+          ...listFamilies(wanted.group)
+            .filter((other) => other.id !== wanted.id && doesTheSameJob(wanted, other))
+            .map((other) => other.id),
+        ];
   known.set(familyId, related);
   return related;
 }
@@ -17,8 +25,10 @@ export function relatedFamilies(familyId: string): readonly string[] {
 function doesTheSameJob(a: Family, b: Family): boolean {
   if ('unitFunction' in a && 'unitFunction' in b) return a.unitFunction === b.unitFunction;
   if (a.group === 'op-amp' && b.group === 'op-amp') return a.units === b.units;
-  if (a.group === 'regulator' && b.group === 'regulator') return a.polarity === b.polarity && a.outputVolts === b.outputVolts;
-  if (a.group === 'bipolar' && b.group === 'bipolar') return a.polarity === b.polarity && a.darlington === b.darlington && a.matchedPair === b.matchedPair;
+  if (a.group === 'regulator' && b.group === 'regulator')
+    return a.polarity === b.polarity && a.outputVolts === b.outputVolts;
+  if (a.group === 'bipolar' && b.group === 'bipolar')
+    return a.polarity === b.polarity && a.darlington === b.darlington && a.matchedPair === b.matchedPair;
   if ((a.group === 'jfet' || a.group === 'mosfet') && a.group === b.group) return a.channel === b.channel;
   if (a.group === 'diode' && b.group === 'diode') return a.diodeType.value === b.diodeType.value;
   if (a.group === 'zener' && b.group === 'zener') return a.zenerVolts.value === b.zenerVolts.value;

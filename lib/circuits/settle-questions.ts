@@ -9,14 +9,22 @@ export interface Standing {
   readonly earlier?: ReadonlyMap<string, string>;
 }
 
-export const questionPlace = (question: { readonly sheet: string | null; readonly sourceRow: number; readonly code: string }): string => `${question.sheet ?? ''}\u0000${question.sourceRow}\u0000${question.code}`;
+export const questionPlace = (question: {
+  readonly sheet: string | null;
+  readonly sourceRow: number;
+  readonly code: string;
+}): string => `${question.sheet ?? ''}\u0000${question.sourceRow}\u0000${question.code}`;
 
 export interface Settled {
   readonly lines: LineDraft[];
   readonly open: QuestionDraft[];
 }
 
-export function settleQuestions(lines: readonly LineDraft[], questions: readonly QuestionDraft[], standing: Standing): Settled {
+export function settleQuestions(
+  lines: readonly LineDraft[],
+  questions: readonly QuestionDraft[],
+  standing: Standing,
+): Settled {
   const placeOfLine = new Map(lines.map((line, place) => [`${line.sheet ?? ''}\u0000${line.sourceRow}`, place]));
   const settled = [...lines];
   const open: QuestionDraft[] = [];
@@ -31,7 +39,8 @@ export function settleQuestions(lines: readonly LineDraft[], questions: readonly
     }
     const applied = applyAnswer(line, question.code, answer);
     if (!applied.ok) open.push(question);
-    else if (applied.line.isPart) settled[place] = { ...line, quantity: applied.line.quantity, spec: applied.line.spec };
+    else if (applied.line.isPart)
+      settled[place] = { ...line, quantity: applied.line.quantity, spec: applied.line.spec };
     else gone.add(place);
   }
   return { lines: gone.size === 0 ? settled : settled.filter((_, place) => !gone.has(place)), open };

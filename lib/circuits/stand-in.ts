@@ -19,8 +19,19 @@ export const standIn = query({
   http: 'GET /stand-in',
   summary: 'May one part stand in for another? Both as people write them; rails like "+12,-12" or "±12".',
   roles: 'everyone',
-  input: z.strictObject({ wanted: partText(), offered: partText(), rails: z.string().trim().max(100).optional(), use: z.enum(USES).optional(), kind: z.enum(PART_KINDS).optional() }),
-  output: z.object({ verdict: z.enum(VERDICTS), checks: z.array(checkFields), wanted: partSpecSchema, offered: partSpecSchema }),
+  input: z.strictObject({
+    wanted: partText(),
+    offered: partText(),
+    rails: z.string().trim().max(100).optional(),
+    use: z.enum(USES).optional(),
+    kind: z.enum(PART_KINDS).optional(),
+  }),
+  output: z.object({
+    verdict: z.enum(VERDICTS),
+    checks: z.array(checkFields),
+    wanted: partSpecSchema,
+    offered: partSpecSchema,
+  }),
   async run({ input }) {
     const wanted = understood(input.wanted, input.kind, 'wanted');
     const offered = understood(input.offered, input.kind, 'offered');
@@ -43,7 +54,10 @@ function railsIn(text: string | undefined): number[] {
   try {
     return readRails(text);
   } catch (error) {
-    if (error instanceof RailsError) throw new Refusal('input.invalid', error.message, { errors: [{ pointer: '/rails', code: error.problem, detail: error.message }] });
+    if (error instanceof RailsError)
+      throw new Refusal('input.invalid', error.message, {
+        errors: [{ pointer: '/rails', code: error.problem, detail: error.message }],
+      });
     throw error;
   }
 }

@@ -15,7 +15,13 @@ export interface StoredLines {
 export const placeOf = (sheet: string | null, row: number): string => `${row}\u0000${sheet ?? ''}`;
 
 /** @param progress called after each statement with how many lines are in */
-export async function storeLines(tx: Tx, workshopId: string, revisionId: string, drafts: readonly LineDraft[], progress?: (done: number) => Promise<void>): Promise<StoredLines> {
+export async function storeLines(
+  tx: Tx,
+  workshopId: string,
+  revisionId: string,
+  drafts: readonly LineDraft[],
+  progress?: (done: number) => Promise<void>,
+): Promise<StoredLines> {
   const idByPlace = new Map<string, string>();
   for (let from = 0; from < drafts.length; from += ROWS_AT_ONCE) {
     const rows = drafts.slice(from, from + ROWS_AT_ONCE).map((draft, place) => {
@@ -30,7 +36,12 @@ export async function storeLines(tx: Tx, workshopId: string, revisionId: string,
   return { idByPlace };
 }
 
-export async function insertLines(tx: Tx, workshopId: string, revisionId: string, rows: readonly ReturnType<typeof lineRowOf>[]): Promise<void> {
+export async function insertLines(
+  tx: Tx,
+  workshopId: string,
+  revisionId: string,
+  rows: readonly ReturnType<typeof lineRowOf>[],
+): Promise<void> {
   await tx.execute(sql`
     insert into line (workshop_id, id, revision_id, position, sheet, source_row, designators, quantity, fitted, kind, text, spec, part_number, family, value, unit, use, spec_key)
     select ${workshopId}::uuid, r.id, ${revisionId}::uuid, r.position, r.sheet, r.source_row, r.designators, r.quantity, r.fitted, r.kind, r.text, r.spec, r.part_number, r.family, r.value, r.unit, r.use, r.spec_key
@@ -38,7 +49,13 @@ export async function insertLines(tx: Tx, workshopId: string, revisionId: string
         as r(id uuid, position int, sheet text, source_row int, designators text[], quantity int, fitted boolean, kind text, text text, spec jsonb, part_number text, family text, value numeric, unit text, use text, spec_key text)`);
 }
 
-export async function storeQuestions(tx: Tx, workshopId: string, revisionId: string, drafts: readonly QuestionDraft[], lines: StoredLines): Promise<void> {
+export async function storeQuestions(
+  tx: Tx,
+  workshopId: string,
+  revisionId: string,
+  drafts: readonly QuestionDraft[],
+  lines: StoredLines,
+): Promise<void> {
   for (let from = 0; from < drafts.length; from += ROWS_AT_ONCE) {
     const rows = drafts.slice(from, from + ROWS_AT_ONCE).map((draft) => ({
       id: newId(),

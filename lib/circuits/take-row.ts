@@ -40,17 +40,39 @@ export const takeRowAsLine = command({
     const passed = kept.notLines.find((one) => one.row === input.row && one.sheet === input.sheet);
     if (!passed) throw notFound('row that is no part');
     const text = input.text ?? passed.text.trim();
-    if (text === '') throw new Refusal('input.invalid', `Row ${input.row} is empty: say what part it stands for.`, { errors: [{ pointer: '/text', code: 'too_small', detail: 'is empty' }] });
+    if (text === '')
+      throw new Refusal('input.invalid', `Row ${input.row} is empty: say what part it stands for.`, {
+        errors: [{ pointer: '/text', code: 'too_small', detail: 'is empty' }],
+      });
     const spec = readPartText(text, { kind: input.kind ?? null });
-    const last = await tx.execute<{ position: number }>(sql`select coalesce(max(position), 0) as position from line where workshop_id = ${actor.workshopId} and revision_id = ${draft.id}`);
+    const last = await tx.execute<{ position: number }>(
+      sql`select coalesce(max(position), 0) as position from line where workshop_id = ${actor.workshopId} and revision_id = ${draft.id}`,
+    );
     const lineId = newId();
     const quantity = input.quantity ?? Math.max(1, input.designators.length);
     await insertLines(tx, actor.workshopId, draft.id, [
-      lineRowOf({ sheet: input.sheet, sourceRow: input.row, designators: input.designators, quantity, spec: { ...spec, doubts: [] }, use: useIn(text) }, lineId, (last.rows[0]?.position ?? 0) + 1),
+      lineRowOf(
+        {
+          sheet: input.sheet,
+          sourceRow: input.row,
+          designators: input.designators,
+          quantity,
+          spec: { ...spec, doubts: [] },
+          use: useIn(text),
+        },
+        lineId,
+        (last.rows[0]?.position ?? 0) + 1,
+      ),
     ]);
     await tx
       .update(revision)
-      .set({ reading: { ...kept, notLineCount: Math.max(0, kept.notLineCount - 1), notLines: kept.notLines.filter((one) => one !== passed) } })
+      .set({
+        reading: {
+          ...kept,
+          notLineCount: Math.max(0, kept.notLineCount - 1),
+          notLines: kept.notLines.filter((one) => one !== passed),
+        },
+      })
       .where(and(eq(revision.workshopId, actor.workshopId), eq(revision.id, draft.id)));
     await matchLines(tx, actor.workshopId, draft.id, [lineId]);
     record(lineId, { revisionId: draft.id, row: input.row, text });

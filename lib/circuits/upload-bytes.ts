@@ -18,9 +18,19 @@ export async function bytesOf({ fileName, storeKey, content }: KeptOriginal): Pr
   if (storeKey === null) throw new Error('an upload has neither bytes nor a key');
   const fetched = await fetchUpload(storeKey);
   if (fetched.ok) return fetched.bytes;
-  if (fetched.reason === 'not-found') throw new Refusal('not-found', `The upload store has no file for ${fileName} any more. Send it again.`, { inner: fetched.message });
-  if (fetched.reason === 'too-large') throw new Refusal('too-large', `${fileName} is larger than a parts list may be. Nothing was read.`, { inner: fetched.message });
-  throw new Refusal('service.away', `The upload store does not answer right now. ${fileName} is kept there; try again in a moment.`, { inner: fetched.message });
+  if (fetched.reason === 'not-found')
+    throw new Refusal('not-found', `The upload store has no file for ${fileName} any more. Send it again.`, {
+      inner: fetched.message,
+    });
+  if (fetched.reason === 'too-large')
+    throw new Refusal('too-large', `${fileName} is larger than a parts list may be. Nothing was read.`, {
+      inner: fetched.message,
+    });
+  throw new Refusal(
+    'service.away',
+    `The upload store does not answer right now. ${fileName} is kept there; try again in a moment.`,
+    { inner: fetched.message },
+  );
 }
 
 /** An attachment under the name that it came with (RFC 6266, RFC 5987). */

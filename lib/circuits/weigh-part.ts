@@ -14,9 +14,15 @@ export interface Weighed extends Assessment {
 export function weighPart(wanted: PartSpec, offered: PartSpec, safety: boolean, context: StandInContext): Weighed {
   const found = assess(wanted, offered, { ...context, mounting: context.mounting ?? wanted.mounting });
   const deviationPercent = deviationOf(wanted, offered);
-  if (found.verdict === 'drop-in' && isAskedFor(wanted, offered)) return { ...found, verdict: 'same', deviationPercent };
+  if (found.verdict === 'drop-in' && isAskedFor(wanted, offered))
+    return { ...found, verdict: 'same', deviationPercent };
   if (safety && found.verdict !== 'same' && found.verdict !== 'refused') {
-    const mark = fail('safety', wanted.text, offered.text, 'The workshop keeps it as a mains or isolation part: it stands in for nothing. The local electrical code and a licensed person decide.');
+    const mark = fail(
+      'safety',
+      wanted.text,
+      offered.text,
+      'The workshop keeps it as a mains or isolation part: it stands in for nothing. The local electrical code and a licensed person decide.',
+    );
     return { verdict: 'refused', checks: [...found.checks, mark], deviationPercent };
   }
   return { ...found, deviationPercent };
@@ -30,11 +36,25 @@ function deviationOf({ value: asked }: PartSpec, { value: offered }: PartSpec): 
 /** Everything that was asked is said of the part: `100k 1 %` is answered by a `100k 1 % 0.25 W`, `TL072` by a `TL072CP`. */
 function isAskedFor(wanted: PartSpec, offered: PartSpec): boolean {
   if (wanted.doubts.length > 0 || (wanted.value === null && wanted.partNumber === null)) return false;
-  const fields = ['tolerancePercent', 'ratedVolts', 'ratedWatts', 'ratedAmperes', 'dielectric', 'technology', 'taper', 'mounting', 'package'] as const;
+  const fields = [
+    'tolerancePercent',
+    'ratedVolts',
+    'ratedWatts',
+    'ratedAmperes',
+    'dielectric',
+    'technology',
+    'taper',
+    'mounting',
+    'package',
+  ] as const;
   if (fields.some((field) => wanted[field] !== null && wanted[field] !== offered[field])) return false;
   if (wanted.value !== null && deviationOf(wanted, offered) !== 0) return false;
   if (wanted.partNumber === null) return true;
-  return offered.partNumber !== null && wanted.family === offered.family && partKeyOf(offered.partNumber).includes(partKeyOf(wanted.partNumber));
+  return (
+    offered.partNumber !== null &&
+    wanted.family === offered.family &&
+    partKeyOf(offered.partNumber).includes(partKeyOf(wanted.partNumber))
+  );
 }
 
 const ORDER: Readonly<Record<Verdict, number>> = { same: 0, 'drop-in': 1, 'with-effect': 2, ask: 3, refused: 4 };

@@ -33,8 +33,14 @@ interface Writing {
 /** The revision row exists, as a draft without lines. */
 export async function writeRevision(tx: Tx, writing: Writing): Promise<WrittenRevision> {
   const { workshopId, revisionId, uploadId, list } = writing;
-  const [setting] = await tx.select({ taperConvention: workshop.taperConvention }).from(workshop).where(eq(workshop.id, workshopId));
-  const standing: Standing = { taperConvention: setting?.taperConvention ?? 'ask', ...(writing.earlier ? { earlier: writing.earlier } : {}) };
+  const [setting] = await tx
+    .select({ taperConvention: workshop.taperConvention })
+    .from(workshop)
+    .where(eq(workshop.id, workshopId));
+  const standing: Standing = {
+    taperConvention: setting?.taperConvention ?? 'ask',
+    ...(writing.earlier ? { earlier: writing.earlier } : {}),
+  };
   const { lines, open } = settleQuestions(list.lines, list.questions, standing);
   await tx
     .update(revision)
@@ -44,12 +50,21 @@ export async function writeRevision(tx: Tx, writing: Writing): Promise<WrittenRe
   await storeQuestions(tx, workshopId, revisionId, open, stored);
   await matchLines(tx, workshopId, revisionId);
   const freezes = writing.freezeBy !== null && open.length === 0 && lines.length > 0;
-  await moveUpload(tx, workshopId, uploadId, [writing.again === true ? 'read-again' : 'read', ...(open.length === 0 && writing.again !== true ? (['settle'] as const) : []), ...(freezes ? (['freeze'] as const) : [])]);
+  await moveUpload(tx, workshopId, uploadId, [
+    writing.again === true ? 'read-again' : 'read',
+    ...(open.length === 0 && writing.again !== true ? (['settle'] as const) : []),
+    ...(freezes ? (['freeze'] as const) : []),
+  ]);
   if (freezes) {
     await tx
       .update(revision)
       .set({ state: 'frozen', frozenAt: sql`now()`, frozenBy: writing.freezeBy })
       .where(and(eq(revision.workshopId, workshopId), eq(revision.id, revisionId)));
   }
-  return { lines: lines.length, notLines: list.reading.notLineCount, openQuestions: open.length, state: freezes ? 'frozen' : 'draft' };
+  return {
+    lines: lines.length,
+    notLines: list.reading.notLineCount,
+    openQuestions: open.length,
+    state: freezes ? 'frozen' : 'draft',
+  };
 }

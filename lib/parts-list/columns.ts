@@ -51,7 +51,12 @@ export function segmentsOf(rows: readonly TableRow[], fixed: Readonly<Record<num
   }
   const [before, ...headed] = segments;
   const leading = before && before.rows.length > 0 ? [before] : [];
-  return [...(headed.length > 0 ? leading.map((segment) => ({ ...segment, columns: [] as Column[] })) : leading.map((segment) => ({ ...segment, columns: columnsOf(null, segment.rows, fixed) }))), ...headed.map((segment) => ({ ...segment, columns: columnsOf(segment.heading, segment.rows, fixed) }))];
+  return [
+    ...(headed.length > 0
+      ? leading.map((segment) => ({ ...segment, columns: [] as Column[] }))
+      : leading.map((segment) => ({ ...segment, columns: columnsOf(null, segment.rows, fixed) }))),
+    ...headed.map((segment) => ({ ...segment, columns: columnsOf(segment.heading, segment.rows, fixed) })),
+  ];
 }
 
 interface Content {
@@ -66,8 +71,12 @@ interface Content {
 }
 
 function contentOf(index: number, rows: readonly TableRow[]): Content {
-  const cells = rows.slice(0, SAMPLE_ROWS).map((row) => row.cells[index] ?? '').filter((cell) => cell !== '');
-  const count = (test: (cell: string) => boolean) => (cells.length === 0 ? 0 : cells.filter(test).length / cells.length);
+  const cells = rows
+    .slice(0, SAMPLE_ROWS)
+    .map((row) => row.cells[index] ?? '')
+    .filter((cell) => cell !== '');
+  const count = (test: (cell: string) => boolean) =>
+    cells.length === 0 ? 0 : cells.filter(test).length / cells.length;
   const numbers = cells.map(Number);
   return {
     filled: rows.length === 0 ? 0 : cells.length / Math.min(rows.length, SAMPLE_ROWS),
@@ -77,16 +86,29 @@ function contentOf(index: number, rows: readonly TableRow[]): Content {
     families: count((cell) => /[A-Za-z]/.test(cell) && familyOf(cell) !== null),
     volts: count((cell) => /^\d+(?:[.,]\d+)?\s*V(?:DC)?$/i.test(cell)),
     distinct: new Set(cells).size,
-    ascending: cells.length > 2 && numbers.every((value, place) => Number.isInteger(value) && (place === 0 || value === (numbers[place - 1] ?? 0) + 1)),
+    ascending:
+      cells.length > 2 &&
+      numbers.every(
+        (value, place) => Number.isInteger(value) && (place === 0 || value === (numbers[place - 1] ?? 0) + 1),
+      ),
   };
 }
 
 function looksLikeValue(cell: string): boolean {
   const first = tidyValueText(cell).split(/[\s/,;(]/)[0] ?? '';
-  return !/^\d+$/.test(first) && (readQuantity(first, null) !== null || readQuantity(first, 'resistor') !== null || /^\d+(?:[.,]\d+)?[pnu]F?$/i.test(first));
+  return (
+    !/^\d+$/.test(first) &&
+    (readQuantity(first, null) !== null ||
+      readQuantity(first, 'resistor') !== null ||
+      /^\d+(?:[.,]\d+)?[pnu]F?$/i.test(first))
+  );
 }
 
-function columnsOf(heading: TableRow | null, rows: readonly TableRow[], fixed: Readonly<Record<number, Role>> | null): Column[] {
+function columnsOf(
+  heading: TableRow | null,
+  rows: readonly TableRow[],
+  fixed: Readonly<Record<number, Role>> | null,
+): Column[] {
   const width = Math.max(heading?.cells.length ?? 0, ...rows.slice(0, SAMPLE_ROWS).map((row) => row.cells.length));
   const data = rows.filter((row) => row.cells.filter((cell) => cell !== '').length > 1);
   const columns = Array.from({ length: Math.min(width, 200) }, (_, index) => {
@@ -104,42 +126,104 @@ function columnsOf(heading: TableRow | null, rows: readonly TableRow[], fixed: R
   if (![...roles.values()].some((one) => one.role === 'designators')) {
     const byContent = free()
       .filter((column) => column.content.designators >= 0.5 && column.content.filled >= 0.15)
-      .sort((a, b) => Number(b.hint === 'designators') - Number(a.hint === 'designators') || b.content.designators * b.content.filled - a.content.designators * a.content.filled)[0];
-    const byWords = free().find((column) => column.hint === 'designators' && column.content.filled > 0 && column.content.whole < 0.8);
-    const chosen = byContent && (byContent.hint === 'designators' || !byWords || byWords.content.designators < 0.3) ? byContent : byWords;
-    if (chosen) give(chosen.index, 'designators', chosen.content.designators >= 0.5 ? `${said(chosen)}: looks like R1, C2` : `${said(chosen)} says so`);
+      .sort(
+        (a, b) =>
+          Number(b.hint === 'designators') - Number(a.hint === 'designators') ||
+          b.content.designators * b.content.filled - a.content.designators * a.content.filled,
+      )[0];
+    const byWords = free().find(
+      (column) => column.hint === 'designators' && column.content.filled > 0 && column.content.whole < 0.8,
+    );
+    const chosen =
+      byContent && (byContent.hint === 'designators' || !byWords || byWords.content.designators < 0.3)
+        ? byContent
+        : byWords;
+    if (chosen)
+      give(
+        chosen.index,
+        'designators',
+        chosen.content.designators >= 0.5 ? `${said(chosen)}: looks like R1, C2` : `${said(chosen)} says so`,
+      );
   }
   // Quantity: whole numbers under a heading that says so; else whole numbers that don't just count the rows.
   if (![...roles.values()].some((one) => one.role === 'quantity')) {
-    const byWords = free().filter((column) => column.hint === 'quantity' && column.content.filled > 0).sort((a, b) => b.content.whole * b.content.filled - a.content.whole * a.content.filled)[0];
+    const byWords = free()
+      .filter((column) => column.hint === 'quantity' && column.content.filled > 0)
+      .sort((a, b) => b.content.whole * b.content.filled - a.content.whole * a.content.filled)[0];
     const byContent =
-      byWords ?? (heading === null ? free().filter((column) => column.content.whole >= 0.8 && column.content.filled >= 0.5 && !column.content.ascending && Math.max(...data.map((row) => Number(row.cells[column.index]) || 0)) <= 500)[0] : undefined);
+      byWords ??
+      (heading === null
+        ? free().filter(
+            (column) =>
+              column.content.whole >= 0.8 &&
+              column.content.filled >= 0.5 &&
+              !column.content.ascending &&
+              Math.max(...data.map((row) => Number(row.cells[column.index]) || 0)) <= 500,
+          )[0]
+        : undefined);
     if (byContent) give(byContent.index, 'quantity', `${said(byContent)}: whole numbers`);
   }
   giveValue(columns, free, give, said);
   for (const column of free()) {
-    if (column.hint !== null && column.hint !== 'designators' && column.hint !== 'quantity' && column.hint !== 'value') give(column.index, column.hint, `${said(column)} says so`);
-    else if (column.hint === 'value') give(column.index, column.content.volts >= 0.5 ? 'notes' : 'description', `${said(column)}, beside the value`);
-    else if (column.hint === 'designators' && column.content.filled > 0) give(column.index, 'description', `${said(column)}, but no designators in it`);
-    else if (column.hint === null && column.content.filled > 0) give(column.index, heading === null || column.words === '' ? 'notes' : 'ignore', column.words === '' ? 'no heading: read as remarks' : `${said(column)} is no heading we know`);
+    if (column.hint !== null && column.hint !== 'designators' && column.hint !== 'quantity' && column.hint !== 'value')
+      give(column.index, column.hint, `${said(column)} says so`);
+    else if (column.hint === 'value')
+      give(column.index, column.content.volts >= 0.5 ? 'notes' : 'description', `${said(column)}, beside the value`);
+    else if (column.hint === 'designators' && column.content.filled > 0)
+      give(column.index, 'description', `${said(column)}, but no designators in it`);
+    else if (column.hint === null && column.content.filled > 0)
+      give(
+        column.index,
+        heading === null || column.words === '' ? 'notes' : 'ignore',
+        column.words === '' ? 'no heading: read as remarks' : `${said(column)} is no heading we know`,
+      );
     else give(column.index, 'ignore', 'empty');
   }
-  return columns.map((column) => ({ index: column.index, heading: column.words, ...(roles.get(column.index) ?? { role: 'ignore' as Role, because: 'empty' }) }));
+  return columns.map((column) => ({
+    index: column.index,
+    heading: column.words,
+    ...(roles.get(column.index) ?? { role: 'ignore' as Role, because: 'empty' }),
+  }));
 }
 
 type Sized = { index: number; words: string; hint: Role | null; content: Content };
 
 /** The value column: so called and holding values or part numbers; where it is empty or holds volts, the one that names the part. */
-function giveValue(columns: readonly Sized[], free: () => Sized[], give: (index: number, role: Role, because: string) => void, said: (column: { words: string }) => string): void {
+function giveValue(
+  columns: readonly Sized[],
+  free: () => Sized[],
+  give: (index: number, role: Role, because: string) => void,
+  said: (column: { words: string }) => string,
+): void {
   const worth = (column: Sized) => column.content.values + column.content.families;
   const named = free().filter((column) => column.hint === 'value' && column.content.filled > 0);
-  const usable = named.filter((column) => column.content.volts < 0.5 && column.content.filled >= 0.2).sort((a, b) => worth(b) * b.content.filled - worth(a) * a.content.filled)[0];
+  const usable = named
+    .filter((column) => column.content.volts < 0.5 && column.content.filled >= 0.2)
+    .sort((a, b) => worth(b) * b.content.filled - worth(a) * a.content.filled)[0];
   if (usable) return give(usable.index, 'value', `${said(usable)} says so`);
   const other = free()
-    .filter((column) => column.content.filled > 0 && !['price', 'order-code', 'maker', 'fitted', 'quantity', 'index'].includes(column.hint ?? ''))
-    .map((column) => ({ column, score: worth(column) * Math.min(1, column.content.filled) * (column.hint === 'package' || column.hint === 'ignore' || column.hint === 'notes' ? 0.3 : 1) + (column.hint === 'description' ? 0.15 : 0) + (column.hint === 'part-number' ? 0.05 : 0) }))
+    .filter(
+      (column) =>
+        column.content.filled > 0 &&
+        !['price', 'order-code', 'maker', 'fitted', 'quantity', 'index'].includes(column.hint ?? ''),
+    )
+    .map((column) => ({
+      column,
+      score:
+        worth(column) *
+          Math.min(1, column.content.filled) *
+          (column.hint === 'package' || column.hint === 'ignore' || column.hint === 'notes' ? 0.3 : 1) +
+        (column.hint === 'description' ? 0.15 : 0) +
+        (column.hint === 'part-number' ? 0.05 : 0),
+    }))
     .sort((a, b) => b.score - a.score || a.column.index - b.column.index)[0];
-  if (other && other.score > 0.05) return give(other.column.index, 'value', `${said(other.column)}: holds values and part numbers`);
-  const words = columns.find((column) => free().includes(column) && (column.hint === 'description' || tidyHeading(column.words) === 'part') && column.content.filled > 0);
+  if (other && other.score > 0.05)
+    return give(other.column.index, 'value', `${said(other.column)}: holds values and part numbers`);
+  const words = columns.find(
+    (column) =>
+      free().includes(column) &&
+      (column.hint === 'description' || tidyHeading(column.words) === 'part') &&
+      column.content.filled > 0,
+  );
   if (words) give(words.index, 'value', `${said(words)}: names the part`);
 }

@@ -5,7 +5,10 @@ const LONGEST_RANGE = 500;
 
 const PREFIX = '(?:[A-Za-z]{1,5}\\$?|[A-Z]\\d?:[A-Z]{1,4})';
 const ONE = new RegExp(`^(${PREFIX})[-_ ]?(\\d{1,5})([A-Za-z]?)$`);
-const RANGE = new RegExp(`^(${PREFIX})[-_]?(\\d{1,5})\\s*(?:-|–|—|\\.{2,3}|…|~|:|\\bto\\b|\\bbis\\b|\\ba\\b|\\bthru\\b)\\s*(${PREFIX})?[-_]?(\\d{1,5})$`, 'i');
+const RANGE = new RegExp(
+  `^(${PREFIX})[-_]?(\\d{1,5})\\s*(?:-|–|—|\\.{2,3}|…|~|:|\\bto\\b|\\bbis\\b|\\ba\\b|\\bthru\\b)\\s*(${PREFIX})?[-_]?(\\d{1,5})$`,
+  'i',
+);
 
 /** A whole cell in which ranges are spelled with blanks (`J1- J6`) or words, brought to one spelling. */
 function tidy(text: string): string {
@@ -49,7 +52,11 @@ function expandPiece(piece: string, prefix: string): { list: string[]; prefix: s
   if (range) {
     const [, head = '', from = '', otherHead, to = ''] = range;
     const [low, high] = [Number(from), Number(to)];
-    if ((otherHead === undefined || otherHead.toUpperCase() === head.toUpperCase()) && high >= low && high - low < LONGEST_RANGE) {
+    if (
+      (otherHead === undefined || otherHead.toUpperCase() === head.toUpperCase()) &&
+      high >= low &&
+      high - low < LONGEST_RANGE
+    ) {
       return { prefix: head, list: Array.from({ length: high - low + 1 }, (_, index) => `${head}${low + index}`) };
     }
     return null;
@@ -58,7 +65,10 @@ function expandPiece(piece: string, prefix: string): { list: string[]; prefix: s
   if (one) return { prefix: one[1] ?? '', list: [piece.replace(/\s+/g, '')] };
   // `R1, 2, 4-6`: the letters stand for what follows.
   const bare = /^(\d{1,5})(?:[-.]{1,3}(\d{1,5}))?$/.exec(piece);
-  if (bare && prefix !== '') return bare[2] === undefined ? { prefix, list: [`${prefix}${bare[1]}`] } : expandPiece(`${prefix}${bare[1]}-${bare[2]}`, prefix);
+  if (bare && prefix !== '')
+    return bare[2] === undefined
+      ? { prefix, list: [`${prefix}${bare[1]}`] }
+      : expandPiece(`${prefix}${bare[1]}-${bare[2]}`, prefix);
   return null;
 }
 

@@ -3,7 +3,8 @@ import { ReadingStopped } from './table';
 
 export type FileKind = 'workbook' | 'text';
 
-const startsWith = (bytes: Uint8Array, signature: readonly number[]): boolean => signature.every((byte, index) => bytes[index] === byte);
+const startsWith = (bytes: Uint8Array, signature: readonly number[]): boolean =>
+  signature.every((byte, index) => bytes[index] === byte);
 const PICTURES: readonly (readonly [string, readonly number[]])[] = [
   ['a PNG picture', [0x89, 0x50, 0x4e, 0x47]],
   ['a JPEG picture', [0xff, 0xd8, 0xff]],
@@ -21,18 +22,44 @@ const COMPOUND_FILE = [0xd0, 0xcf, 0x11, 0xe0, 0xa1, 0xb1, 0x1a, 0xe1];
 
 /** Throws ReadingStopped for what is neither text nor a workbook. */
 export function sniff(bytes: Uint8Array): FileKind {
-  if (bytes.length === 0) throw new ReadingStopped({ code: 'empty', detail: 'The file is empty.', row: 1, column: 'A', cure: 'Save the list again and choose that file.' });
+  if (bytes.length === 0)
+    throw new ReadingStopped({
+      code: 'empty',
+      detail: 'The file is empty.',
+      row: 1,
+      column: 'A',
+      cure: 'Save the list again and choose that file.',
+    });
   if (startsWith(bytes, ZIP)) return 'workbook';
   if (startsWith(bytes, COMPOUND_FILE)) {
     const isProtected = containsUtf16(bytes, 'EncryptedPackage');
     throw new ReadingStopped(
       isProtected
-        ? { code: 'protected', detail: 'The workbook is protected by a password.', row: 1, column: 'A', cure: 'Save it without a password and read it again.' }
-        : { code: 'not-a-list', detail: 'This is a workbook of the old .xls kind.', row: 1, column: 'A', cure: 'Save it as .xlsx or .csv and read it again.' },
+        ? {
+            code: 'protected',
+            detail: 'The workbook is protected by a password.',
+            row: 1,
+            column: 'A',
+            cure: 'Save it without a password and read it again.',
+          }
+        : {
+            code: 'not-a-list',
+            detail: 'This is a workbook of the old .xls kind.',
+            row: 1,
+            column: 'A',
+            cure: 'Save it as .xlsx or .csv and read it again.',
+          },
     );
   }
   for (const [what, signature] of PICTURES) {
-    if (startsWith(bytes, signature)) throw new ReadingStopped({ code: 'not-a-list', detail: `This is ${what}, whatever its name says.`, row: 1, column: 'A', cure: 'Choose the spreadsheet, a CSV, or paste the table.' });
+    if (startsWith(bytes, signature))
+      throw new ReadingStopped({
+        code: 'not-a-list',
+        detail: `This is ${what}, whatever its name says.`,
+        row: 1,
+        column: 'A',
+        cure: 'Choose the spreadsheet, a CSV, or paste the table.',
+      });
   }
   return 'text';
 }
@@ -47,7 +74,14 @@ export function decodeText(bytes: Uint8Array): string {
   const text = decode(bytes);
   // A stray NUL or two is a spreadsheet's slip; many are a binary file.
   const nuls = countNuls(text);
-  if (nuls > 8 && nuls > text.length / 200) throw new ReadingStopped({ code: 'not-a-list', detail: 'This is no text: it is full of zero bytes.', row: 1, column: 'A', cure: 'Choose the spreadsheet, a CSV, or paste the table.' });
+  if (nuls > 8 && nuls > text.length / 200)
+    throw new ReadingStopped({
+      code: 'not-a-list',
+      detail: 'This is no text: it is full of zero bytes.',
+      row: 1,
+      column: 'A',
+      cure: 'Choose the spreadsheet, a CSV, or paste the table.',
+    });
   return text.replaceAll('\u0000', '').replace(/^\ufeff/, '');
 }
 
@@ -68,7 +102,9 @@ function decode(bytes: Uint8Array): string {
     return new TextDecoder('utf-8', { fatal: true }).decode(bytes);
   } catch {
     // Mac Roman has µ at B5 and Ω at BD as Windows-1252 has µ and ½: what tells them is the umlauts and the degree sign.
-    return looksMacRoman(bytes) ? new TextDecoder('macintosh').decode(bytes) : new TextDecoder('windows-1252').decode(bytes);
+    return looksMacRoman(bytes)
+      ? new TextDecoder('macintosh').decode(bytes)
+      : new TextDecoder('windows-1252').decode(bytes);
   }
 }
 
@@ -78,7 +114,8 @@ function looksMacRoman(bytes: Uint8Array): boolean {
   let windows = 0;
   for (let index = 0; index < Math.min(bytes.length, 200_000); index += 1) {
     const byte = bytes[index] ?? 0;
-    if (byte >= 0x80 && byte <= 0x9f && ![0x80, 0x85, 0x91, 0x92, 0x93, 0x94, 0x95, 0x96, 0x97, 0x99].includes(byte)) mac += 1;
+    if (byte >= 0x80 && byte <= 0x9f && ![0x80, 0x85, 0x91, 0x92, 0x93, 0x94, 0x95, 0x96, 0x97, 0x99].includes(byte))
+      mac += 1;
     if (byte >= 0xc0) windows += 1;
   }
   return mac > windows;

@@ -35,13 +35,17 @@ function chooseDelimiter(sample: string): string | null {
     const often = new Map<number, number>();
     for (const count of cut) often.set(count, (often.get(count) ?? 0) + 1);
     const [usual, times] = [...often].sort((a, b) => b[1] - a[1] || b[0] - a[0])[0] ?? [0, 0];
-    const score = (times / counts.length) * (1 + Math.min(usual, 12) / 12) + (delimiter === '\t' ? 0.2 : 0) - (delimiter === ',' && usual === 2 ? 0.3 : 0);
+    const score =
+      (times / counts.length) * (1 + Math.min(usual, 12) / 12) +
+      (delimiter === '\t' ? 0.2 : 0) -
+      (delimiter === ',' && usual === 2 ? 0.3 : 0);
     if (!best || score > best.score) best = { delimiter, score };
   }
   return best?.delimiter ?? null;
 }
 
-const KEYED = /^(?:[-*•+]\s+)?(?:\[[ xX✓]?\]\s*)?([A-Za-z]{1,5}\$?\d{1,5}(?:\s*(?:[-–,/&]|\.\.)\s*[A-Za-z]{0,5}\d{1,5})*)\s*(?:[:=\t]|\s[-–]\s|\s)\s*(\S.*)$/;
+const KEYED =
+  /^(?:[-*•+]\s+)?(?:\[[ xX✓]?\]\s*)?([A-Za-z]{1,5}\$?\d{1,5}(?:\s*(?:[-–,/&]|\.\.)\s*[A-Za-z]{0,5}\d{1,5})*)\s*(?:[:=\t]|\s[-–]\s|\s)\s*(\S.*)$/;
 const COUNTED = /^(?:[-*•+]\s+)?(?:\[[ xX✓]?\]\s*)?(\d{1,4})\s*[x×]\s+(\S.*)$/i;
 
 /** Fixed columns under a heading, or lines such as `R1: 120k`, `- [x] R1 10k`, `4 x 100k`. */
@@ -51,7 +55,10 @@ function readLines(text: string): TableRow[] {
   const rows: TableRow[] = [];
   lines.forEach((line, index) => {
     if (line.trim() === '') return;
-    const row = { row: index + 1, cells: starts === null || line.length <= (starts[1] ?? 0) ? keyedCells(line) : cutAt(line, starts) };
+    const row = {
+      row: index + 1,
+      cells: starts === null || line.length <= (starts[1] ?? 0) ? keyedCells(line) : cutAt(line, starts),
+    };
     rows.push(row);
     checkRow(row, null, rows.length);
   });
@@ -72,10 +79,16 @@ function fixedColumns(lines: readonly string[]): number[] | null {
     if (starts.length < 3) continue;
     const below = lines.filter((other) => other !== line && other.length > (starts[1] ?? 0));
     if (below.length < 2) continue;
-    const kept = starts.filter((start) => start === 0 || below.filter((other) => other[start - 1] === undefined || other[start - 1] === ' ').length >= below.length * 0.7);
+    const kept = starts.filter(
+      (start) =>
+        start === 0 ||
+        below.filter((other) => other[start - 1] === undefined || other[start - 1] === ' ').length >=
+          below.length * 0.7,
+    );
     if (kept.length >= 3) return kept;
   }
   return null;
 }
 
-const cutAt = (line: string, starts: readonly number[]): string[] => starts.map((start, index) => line.slice(start, starts[index + 1]).trim());
+const cutAt = (line: string, starts: readonly number[]): string[] =>
+  starts.map((start, index) => line.slice(start, starts[index + 1]).trim());

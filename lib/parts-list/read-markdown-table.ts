@@ -26,7 +26,10 @@ function readCheckList(text: string): Table {
   const rows = lines.flatMap((line, index) => {
     const trimmed = plain(line.trim());
     if (trimmed === '') return [];
-    const match = /^(?:[-*+]\s+)?(?:\[[ xX]?\]\s*)?([A-Za-z]{1,5}\d{1,5}(?:\s*[-–,/]\s*[A-Za-z]{0,5}\d{1,5})*)\s*[:=]?\s+(\S.*)$/.exec(trimmed);
+    const match =
+      /^(?:[-*+]\s+)?(?:\[[ xX]?\]\s*)?([A-Za-z]{1,5}\d{1,5}(?:\s*[-–,/]\s*[A-Za-z]{0,5}\d{1,5})*)\s*[:=]?\s+(\S.*)$/.exec(
+        trimmed,
+      );
     return [{ row: index + 1, cells: match ? [match[1] ?? '', match[2] ?? ''] : [trimmed.replace(/^#+\s*/, '')] }];
   });
   return { sheet: null, rows };

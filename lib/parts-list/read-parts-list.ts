@@ -49,7 +49,10 @@ export interface ReadingOptions {
 
 const ROWS_BETWEEN_BREATHS = 2_000;
 
-export async function readPartsList(bytes: Uint8Array, options: ReadingOptions = {}): Promise<PartsListReading | PartsListProblem> {
+export async function readPartsList(
+  bytes: Uint8Array,
+  options: ReadingOptions = {},
+): Promise<PartsListReading | PartsListProblem> {
   try {
     const { format, tables } = await tablesIn(bytes);
     return await readTables(format, tables, options);
@@ -62,11 +65,24 @@ export async function readPartsList(bytes: Uint8Array, options: ReadingOptions =
 async function tablesIn(bytes: Uint8Array): Promise<{ format: ListFormat; tables: Table[] }> {
   if (sniff(bytes) === 'workbook') return { format: 'workbook', tables: await readWorkbook(bytes) };
   const text = decodeText(bytes);
-  if (text.trim() === '') throw new ReadingStopped({ code: 'empty', detail: 'The file holds nothing but blanks.', row: 1, column: 'A', cure: 'Save the list again and choose that file.' });
-  return looksLikeMarkdown(text) ? { format: 'markdown', tables: [readMarkdown(text)] } : { format: 'text', tables: [readDelimited(text)] };
+  if (text.trim() === '')
+    throw new ReadingStopped({
+      code: 'empty',
+      detail: 'The file holds nothing but blanks.',
+      row: 1,
+      column: 'A',
+      cure: 'Save the list again and choose that file.',
+    });
+  return looksLikeMarkdown(text)
+    ? { format: 'markdown', tables: [readMarkdown(text)] }
+    : { format: 'text', tables: [readDelimited(text)] };
 }
 
-async function readTables(format: ListFormat, tables: readonly Table[], options: ReadingOptions): Promise<PartsListReading | PartsListProblem> {
+async function readTables(
+  format: ListFormat,
+  tables: readonly Table[],
+  options: ReadingOptions,
+): Promise<PartsListReading | PartsListProblem> {
   const total = tables.reduce((sum, table) => sum + table.rows.length, 0);
   const read: ReadTable[] = [];
   const lines: PartsListLine[] = [];
@@ -82,7 +98,13 @@ async function readTables(format: ListFormat, tables: readonly Table[], options:
     for (const segment of segments) {
       reader.startSegment();
       const here: PartsListLine[] = [];
-      if (segment.heading) notLines.push({ row: segment.heading.row, ...(table.sheet === null ? {} : { sheet: table.sheet }), why: 'heading, no part', text: textOf(segment.heading) });
+      if (segment.heading)
+        notLines.push({
+          row: segment.heading.row,
+          ...(table.sheet === null ? {} : { sheet: table.sheet }),
+          why: 'heading, no part',
+          text: textOf(segment.heading),
+        });
       for (const row of segment.rows) {
         const understood = reader.understand(row, segment);
         if ('line' in understood) {
@@ -93,7 +115,12 @@ async function readTables(format: ListFormat, tables: readonly Table[], options:
         if (done % ROWS_BETWEEN_BREATHS === 0) {
           options.onProgress?.(done, total);
           await new Promise((resume) => setImmediate(resume));
-          if (options.signal?.aborted) throw new ReadingStopped({ code: 'cancelled', detail: 'The reading was cancelled.', cure: 'Start it again.' });
+          if (options.signal?.aborted)
+            throw new ReadingStopped({
+              code: 'cancelled',
+              detail: 'The reading was cancelled.',
+              cure: 'Start it again.',
+            });
         }
       }
       bySegment.push(here);
@@ -101,7 +128,15 @@ async function readTables(format: ListFormat, tables: readonly Table[], options:
     const repeated = repeatedSegments(bySegment);
     bySegment.forEach((here, index) => {
       if (!repeated.has(index)) lines.push(...here);
-      else notLines.push(...here.map((line) => ({ row: line.row, ...(line.sheet === undefined ? {} : { sheet: line.sheet }), why: 'the same list again, grouped elsewhere in the file', text: line.text })));
+      else
+        notLines.push(
+          ...here.map((line) => ({
+            row: line.row,
+            ...(line.sheet === undefined ? {} : { sheet: line.sheet }),
+            why: 'the same list again, grouped elsewhere in the file',
+            text: line.text,
+          })),
+        );
     });
     const kept = new Set(bySegment.flatMap((here, index) => (repeated.has(index) ? [] : here.map((line) => line.row))));
     questions.push(...asked.filter((question) => kept.has(question.row)));
@@ -110,23 +145,42 @@ async function readTables(format: ListFormat, tables: readonly Table[], options:
   }
   options.onProgress?.(total, total);
   if (lines.length === 0) {
-    return { ok: false, code: 'no-parts', detail: 'No row of this file names a part.', row: tables[0]?.rows[0]?.row ?? 1, column: 'A', cure: 'Check that it is the parts list, with designators or quantities and a value or part number in each row.' };
+    return {
+      ok: false,
+      code: 'no-parts',
+      detail: 'No row of this file names a part.',
+      row: tables[0]?.rows[0]?.row ?? 1,
+      column: 'A',
+      cure: 'Check that it is the parts list, with designators or quantities and a value or part number in each row.',
+    };
   }
   const inOrder = (a: { row: number }, b: { row: number }) => a.row - b.row;
-  return { ok: true, format, sheets: tables.flatMap((table) => table.sheet ?? []), tables: read, lines, notLines: tables.length === 1 ? notLines.sort(inOrder) : notLines, questions };
+  return {
+    ok: true,
+    format,
+    sheets: tables.flatMap((table) => table.sheet ?? []),
+    tables: read,
+    lines,
+    notLines: tables.length === 1 ? notLines.sort(inOrder) : notLines,
+    questions,
+  };
 }
 
 /** Null where nobody said anything of this sheet. */
 function rolesGiven(sheet: string | null, options: ReadingOptions): Record<number, Role> | null {
   const said = (options.columnRoles ?? []).filter((one) => one.sheet === sheet);
-  const roles = said.flatMap(({ index, role }) => COLUMN_ROLES.filter((known) => known === role).map((known): [number, Role] => [index, known]));
+  const roles = said.flatMap(({ index, role }) =>
+    COLUMN_ROLES.filter((known) => known === role).map((known): [number, Role] => [index, known]),
+  );
   return roles.length === 0 ? null : Object.fromEntries(roles);
 }
 
 /** A list given twice in one file, one row a designator and then grouped: the grouped one is read. */
 function repeatedSegments(segments: readonly (readonly PartsListLine[])[]): Set<number> {
   const repeated = new Set<number>();
-  const designators = segments.map((lines) => new Set(lines.flatMap((line) => line.designators.filter((one) => kindOfDesignator(one) !== null))));
+  const designators = segments.map(
+    (lines) => new Set(lines.flatMap((line) => line.designators.filter((one) => kindOfDesignator(one) !== null))),
+  );
   segments.forEach((lines, index) => {
     const own = designators[index];
     if (!own || own.size < 3) return;
@@ -134,7 +188,11 @@ function repeatedSegments(segments: readonly (readonly PartsListLine[])[]): Set<
       const theirs = designators[other];
       if (other === index || !theirs || repeated.has(other) || theirs.size < own.size * 0.9) return;
       const shared = [...own].filter((one) => theirs.has(one)).length;
-      if (shared >= own.size * 0.9 && (others.length < lines.length || (others.length === lines.length && other < index))) repeated.add(index);
+      if (
+        shared >= own.size * 0.9 &&
+        (others.length < lines.length || (others.length === lines.length && other < index))
+      )
+        repeated.add(index);
     });
   });
   return repeated;

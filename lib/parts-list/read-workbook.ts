@@ -13,13 +13,28 @@ export async function readWorkbook(bytes: Uint8Array): Promise<Table[]> {
   }
   const sheets = workbook.worksheets.filter((sheet) => sheet.state !== 'veryHidden');
   if (sheets.length === 0) throw damaged();
-  if (sheets.length > LIMITS.sheets) throw new ReadingStopped({ code: 'too-many-sheets', detail: `The workbook has ${sheets.length} sheets; at most ${LIMITS.sheets} are read.`, row: 1, column: 'A', cure: 'Keep the sheets with the parts list.' });
-  const tables = sheets.map((sheet) => ({ sheet: sheet.name, rows: rowsOf(sheet) })).filter((table) => table.rows.length > 0);
+  if (sheets.length > LIMITS.sheets)
+    throw new ReadingStopped({
+      code: 'too-many-sheets',
+      detail: `The workbook has ${sheets.length} sheets; at most ${LIMITS.sheets} are read.`,
+      row: 1,
+      column: 'A',
+      cure: 'Keep the sheets with the parts list.',
+    });
+  const tables = sheets
+    .map((sheet) => ({ sheet: sheet.name, rows: rowsOf(sheet) }))
+    .filter((table) => table.rows.length > 0);
   return tables.length === 1 ? tables.map((table) => ({ ...table, sheet: null })) : tables;
 }
 
 function damaged(): ReadingStopped {
-  return new ReadingStopped({ code: 'damaged', detail: 'The workbook is damaged, or is no workbook.', row: 1, column: 'A', cure: 'Open it in your spreadsheet program, save it anew as .xlsx, and read that.' });
+  return new ReadingStopped({
+    code: 'damaged',
+    detail: 'The workbook is damaged, or is no workbook.',
+    row: 1,
+    column: 'A',
+    cure: 'Open it in your spreadsheet program, save it anew as .xlsx, and read that.',
+  });
 }
 
 function rowsOf(sheet: ExcelJS.Worksheet): TableRow[] {
@@ -50,7 +65,8 @@ function cellText(value: ExcelJS.CellValue): string {
   // What a spreadsheet turned into a date is told by its day; a person must say what stood there.
   if (value instanceof Date) return Number.isNaN(value.getTime()) ? '' : value.toISOString().slice(0, 10);
   if ('richText' in value) return value.richText.map((piece) => piece.text).join('');
-  if ('hyperlink' in value) return typeof value.text === 'string' ? value.text : cellText(value.text as ExcelJS.CellValue);
+  if ('hyperlink' in value)
+    return typeof value.text === 'string' ? value.text : cellText(value.text as ExcelJS.CellValue);
   if ('result' in value) return value.result === undefined ? '' : cellText(value.result as ExcelJS.CellValue);
   if ('formula' in value || 'sharedFormula' in value) return '';
   if ('error' in value) return '';
@@ -79,19 +95,41 @@ function measureArchive(bytes: Uint8Array): void {
     const nameLength = view.getUint16(at + 28, true);
     const name = new TextDecoder().decode(bytes.subarray(at + 46, at + 46 + nameLength));
     if (name.startsWith('xl/')) isWorkbook = true;
-    if ((view.getUint16(at + 8, true) & 1) === 1) throw new ReadingStopped({ code: 'protected', detail: 'The workbook is protected by a password.', row: 1, column: 'A', cure: 'Save it without a password and read it again.' });
+    if ((view.getUint16(at + 8, true) & 1) === 1)
+      throw new ReadingStopped({
+        code: 'protected',
+        detail: 'The workbook is protected by a password.',
+        row: 1,
+        column: 'A',
+        cure: 'Save it without a password and read it again.',
+      });
     expanded += size;
     at += 46 + nameLength + view.getUint16(at + 30, true) + view.getUint16(at + 32, true);
   }
-  if (expanded > LIMITS.expandedBytes || expanded > 10_000_000 + bytes.length * LIMITS.expansionRatio) throw expandsTooFar();
-  if (!isWorkbook) throw new ReadingStopped({ code: 'not-a-list', detail: 'This is an archive, but no workbook.', row: 1, column: 'A', cure: 'Unpack it and choose the list in it.' });
+  if (expanded > LIMITS.expandedBytes || expanded > 10_000_000 + bytes.length * LIMITS.expansionRatio)
+    throw expandsTooFar();
+  if (!isWorkbook)
+    throw new ReadingStopped({
+      code: 'not-a-list',
+      detail: 'This is an archive, but no workbook.',
+      row: 1,
+      column: 'A',
+      cure: 'Unpack it and choose the list in it.',
+    });
 }
 
 function expandsTooFar(): ReadingStopped {
-  return new ReadingStopped({ code: 'expands-too-far', detail: 'Unpacked, this workbook would be far larger than a parts list can be.', row: 1, column: 'A', cure: 'Copy the list into a new workbook and read that.' });
+  return new ReadingStopped({
+    code: 'expands-too-far',
+    detail: 'Unpacked, this workbook would be far larger than a parts list can be.',
+    row: 1,
+    column: 'A',
+    cure: 'Copy the list into a new workbook and read that.',
+  });
 }
 
 function findEnd(view: DataView): number | null {
-  for (let at = view.byteLength - 22; at >= Math.max(0, view.byteLength - 65_557); at -= 1) if (view.getUint32(at, true) === END_OF_DIRECTORY) return at;
+  for (let at = view.byteLength - 22; at >= Math.max(0, view.byteLength - 65_557); at -= 1)
+    if (view.getUint32(at, true) === END_OF_DIRECTORY) return at;
   return null;
 }

@@ -14,7 +14,19 @@ export interface Table {
 
 export interface PartsListProblem {
   readonly ok: false;
-  readonly code: 'empty' | 'not-a-list' | 'protected' | 'damaged' | 'too-many-rows' | 'cell-too-long' | 'too-many-columns' | 'bad-quantity' | 'no-parts' | 'expands-too-far' | 'too-many-sheets' | 'cancelled';
+  readonly code:
+    | 'empty'
+    | 'not-a-list'
+    | 'protected'
+    | 'damaged'
+    | 'too-many-rows'
+    | 'cell-too-long'
+    | 'too-many-columns'
+    | 'bad-quantity'
+    | 'no-parts'
+    | 'expands-too-far'
+    | 'too-many-sheets'
+    | 'cancelled';
   readonly detail: string;
   /** 1-based. */
   readonly row?: number;
@@ -24,7 +36,15 @@ export interface PartsListProblem {
   readonly cure: string;
 }
 
-export const LIMITS = { rows: 200_000, columns: 200, cellCharacters: 32_767, sheets: 30, expandedBytes: 600 * 1024 * 1024, expansionRatio: 200, zipEntries: 2_000 } as const;
+export const LIMITS = {
+  rows: 200_000,
+  columns: 200,
+  cellCharacters: 32_767,
+  sheets: 30,
+  expandedBytes: 600 * 1024 * 1024,
+  expansionRatio: 200,
+  zipEntries: 2_000,
+} as const;
 
 /** 0 → A, 25 → Z, 26 → AA. */
 export function columnLetters(index: number): string {
@@ -50,7 +70,12 @@ export class ReadingStopped extends Error {
 export function checkRow(row: TableRow, sheet: string | null, count: number): void {
   const place = { row: row.row, ...(sheet === null ? {} : { sheet }) };
   if (count > LIMITS.rows) {
-    throw new ReadingStopped({ code: 'too-many-rows', detail: `The list has more than ${LIMITS.rows.toLocaleString('en')} rows.`, ...place, cure: 'Split it, or remove what is no part.' });
+    throw new ReadingStopped({
+      code: 'too-many-rows',
+      detail: `The list has more than ${LIMITS.rows.toLocaleString('en')} rows.`,
+      ...place,
+      cure: 'Split it, or remove what is no part.',
+    });
   }
   row.cells.forEach((cell, index) => {
     if (cell.length > LIMITS.cellCharacters) {
@@ -64,6 +89,12 @@ export function checkRow(row: TableRow, sheet: string | null, count: number): vo
     }
   });
   if (row.cells.length > LIMITS.columns && row.cells.slice(LIMITS.columns).some((cell) => cell !== '')) {
-    throw new ReadingStopped({ code: 'too-many-columns', detail: `Row ${row.row} has ${row.cells.length.toLocaleString('en')} columns; a parts list has at most ${LIMITS.columns}.`, ...place, column: columnLetters(LIMITS.columns), cure: 'Keep only the columns of the list.' });
+    throw new ReadingStopped({
+      code: 'too-many-columns',
+      detail: `Row ${row.row} has ${row.cells.length.toLocaleString('en')} columns; a parts list has at most ${LIMITS.columns}.`,
+      ...place,
+      column: columnLetters(LIMITS.columns),
+      cure: 'Keep only the columns of the list.',
+    });
   }
 }

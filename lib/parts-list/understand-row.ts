@@ -41,7 +41,9 @@ export interface Question {
   readonly ask: string;
   readonly options: readonly string[];
 }
-export type Understood = { readonly line: PartsListLine; readonly questions: readonly Question[] } | { readonly notLine: NotLine };
+export type Understood =
+  | { readonly line: PartsListLine; readonly questions: readonly Question[] }
+  | { readonly notLine: NotLine };
 
 const TOTAL = /^(?:grand\s+)?(?:total|sum|summe|gesamt(?:summe)?|subtotal|somme|totale|totaal|zwischensumme|suma)\b/i;
 const ARTWORK = /^(?:outline|logo|artwork|fiducial|board outline|silkscreen|frame|\*{2,}.*)$/i;
@@ -69,18 +71,49 @@ export class RowReader {
     const notLine = (why: string): Understood => ({ notLine: { ...place, why, text: textOf(row) } });
     const { columns } = segment;
     const filled = row.cells.filter((cell) => cell !== '');
-    const text = (role: Role) => columns.filter((column) => column.role === role).map((column) => row.cells[column.index] ?? '').filter((cell) => cell !== '').join(' ');
-    if (columns.length === 0) return notLine(filled.length === 1 ? 'title or note, no part' : 'above the heading, no part');
-    if (filled.some((cell) => TOTAL.test(cell)) && !columns.some((column) => column.role === 'designators' && expandDesignators(row.cells[column.index] ?? '').list.some((one) => kindOfDesignator(one) !== null))) return notLine('total, no part');
-    const cells = { designators: text('designators'), quantity: text('quantity'), value: text('value'), description: text('description'), kind: text('kind'), package: text('package'), notes: text('notes'), number: text('part-number') };
+    const text = (role: Role) =>
+      columns
+        .filter((column) => column.role === role)
+        .map((column) => row.cells[column.index] ?? '')
+        .filter((cell) => cell !== '')
+        .join(' ');
+    if (columns.length === 0)
+      return notLine(filled.length === 1 ? 'title or note, no part' : 'above the heading, no part');
+    if (
+      filled.some((cell) => TOTAL.test(cell)) &&
+      !columns.some(
+        (column) =>
+          column.role === 'designators' &&
+          expandDesignators(row.cells[column.index] ?? '').list.some((one) => kindOfDesignator(one) !== null),
+      )
+    )
+      return notLine('total, no part');
+    const cells = {
+      designators: text('designators'),
+      quantity: text('quantity'),
+      value: text('value'),
+      description: text('description'),
+      kind: text('kind'),
+      package: text('package'),
+      notes: text('notes'),
+      number: text('part-number'),
+    };
     const hasDesignators = columns.some((column) => column.role === 'designators');
     const section = this.sectionOf(filled, cells.designators, hasDesignators);
     if (section !== null) return notLine(section);
     const naming = cells.value || cells.description || cells.number || cells.kind || cells.package;
     if (naming === '' && cells.designators === '') return notLine('no part: nothing names one');
-    if (hasDesignators && cells.designators === '' && cells.quantity === '' && filled.length <= 2) return notLine('note, no part');
-    if (cells.designators === '' && cells.quantity === '' && hasDesignators && columns.some((column) => column.role === 'quantity')) return notLine('note, no part: neither designator nor quantity');
-    if (ARTWORK.test(naming) && cells.quantity === '' && kindOfDesignator(cells.designators) === null) return notLine('artwork of the board, no part');
+    if (hasDesignators && cells.designators === '' && cells.quantity === '' && filled.length <= 2)
+      return notLine('note, no part');
+    if (
+      cells.designators === '' &&
+      cells.quantity === '' &&
+      hasDesignators &&
+      columns.some((column) => column.role === 'quantity')
+    )
+      return notLine('note, no part: neither designator nor quantity');
+    if (ARTWORK.test(naming) && cells.quantity === '' && kindOfDesignator(cells.designators) === null)
+      return notLine('artwork of the board, no part');
     return this.line(row, segment, cells, place);
   }
 
@@ -88,7 +121,8 @@ export class RowReader {
   private sectionOf(filled: readonly string[], designators: string, hasDesignators: boolean): string | null {
     const [only = ''] = filled;
     if (filled.length !== 1) return null;
-    if (designators !== '' && expandDesignators(designators).list.every((one) => kindOfDesignator(one) !== null)) return null;
+    if (designators !== '' && expandDesignators(designators).list.every((one) => kindOfDesignator(one) !== null))
+      return null;
     const kind = firstOf(KIND_WORDS, only);
     if (kind !== null && only.length < 40 && !/\d/.test(only)) {
       this.section = kind;
@@ -97,7 +131,15 @@ export class RowReader {
     return hasDesignators || /\s/.test(only) || only.length > 20 || !/\d/.test(only) ? 'title or note, no part' : null;
   }
 
-  private line(row: TableRow, { columns }: Segment, cells: Record<'designators' | 'quantity' | 'value' | 'description' | 'kind' | 'package' | 'notes' | 'number', string>, place: { row: number; sheet?: string }): Understood {
+  private line(
+    row: TableRow,
+    { columns }: Segment,
+    cells: Record<
+      'designators' | 'quantity' | 'value' | 'description' | 'kind' | 'package' | 'notes' | 'number',
+      string
+    >,
+    place: { row: number; sheet?: string },
+  ): Understood {
     const letterOf = (role: Role) => {
       const column = columns.find((one) => one.role === role);
       return column ? columnLetters(column.index) : undefined;
@@ -111,21 +153,47 @@ export class RowReader {
     const quantity = this.quantityIn(cells.quantity, place, letterOf('quantity') ?? 'A', columns);
     const source = cells.value || cells.description || cells.number || cells.kind || cells.package;
     const kind = this.kindOf(designators, source, cells);
-    const wholeText = [source, cells.value === '' ? '' : cells.notes, cells.value !== '' && cells.description !== source ? cells.description : ''].filter((piece) => piece !== '').join(' ');
+    const wholeText = [
+      source,
+      cells.value === '' ? '' : cells.notes,
+      cells.value !== '' && cells.description !== source ? cells.description : '',
+    ]
+      .filter((piece) => piece !== '')
+      .join(' ');
     const main = this.specOf(source, kind);
     const around = wholeText === source ? main : this.specOf(wholeText, kind);
     const spec = merged(main, around, cells.package, kind);
     const fitted = spec.fitted && this.isFitted(columns, row, cells);
-    const number = cells.number !== '' && /\d/.test(cells.number) && !/^\d{1,3}$/.test(cells.number) ? cells.number : null;
+    const number =
+      cells.number !== '' && /\d/.test(cells.number) && !/^\d{1,3}$/.test(cells.number) ? cells.number : null;
     const ownNumber = numberFor(kind, main, source) ?? (main.value === null ? number : null);
     for (const doubt of fitted ? main.doubts : []) ask(doubt.code, doubt.ask, doubt.options, 'value');
     const named = designators.filter((one) => kindOfDesignator(one) !== null);
     const count = named.length === designators.length ? designators.length : 0;
     if (quantity !== null && count > 0 && quantity !== count && fitted) {
-      ask('quantity-differs', `${count === 1 ? 'One designator' : `${count} designators`} (${shorten(designators)}), but ${quantity} asked for. Which is right?`, [String(count), String(quantity)], 'quantity');
+      ask(
+        'quantity-differs',
+        `${count === 1 ? 'One designator' : `${count} designators`} (${shorten(designators)}), but ${quantity} asked for. Which is right?`,
+        [String(count), String(quantity)],
+        'quantity',
+      );
     }
     const value = main.value ?? (around.value && main.partNumber === null ? around.value : null);
-    const keepsValue = value !== null && !(['ic', 'transistor', 'diode', 'connector', 'hardware', 'regulator', 'switch', 'led', 'optocoupler'] as PartKind[]).includes(kind);
+    const keepsValue =
+      value !== null &&
+      !(
+        [
+          'ic',
+          'transistor',
+          'diode',
+          'connector',
+          'hardware',
+          'regulator',
+          'switch',
+          'led',
+          'optocoupler',
+        ] as PartKind[]
+      ).includes(kind);
     return {
       line: {
         ...place,
@@ -137,9 +205,19 @@ export class RowReader {
         partNumber: ownNumber,
         alternatives: spec.alternatives,
         text: source,
-        spec: { ...spec, kind, value: keepsValue ? value : null, partNumber: ownNumber, fitted, family: spec.family ?? (ownNumber === null ? null : (familyOf(ownNumber)?.familyId ?? null)) },
+        spec: {
+          ...spec,
+          kind,
+          value: keepsValue ? value : null,
+          partNumber: ownNumber,
+          fitted,
+          family: spec.family ?? (ownNumber === null ? null : (familyOf(ownNumber)?.familyId ?? null)),
+        },
         package: spec.package ?? (cells.package === '' ? null : cells.package.slice(0, 60)),
-        notes: [cells.notes, cells.description === source ? '' : cells.description].filter((piece) => piece !== '').join('; ').slice(0, 300),
+        notes: [cells.notes, cells.description === source ? '' : cells.description]
+          .filter((piece) => piece !== '')
+          .join('; ')
+          .slice(0, 300),
       },
       questions,
     };
@@ -155,18 +233,36 @@ export class RowReader {
   }
 
   /** Whole and positive, or nothing; a fraction or a negative number stops the reading with its place. */
-  private quantityIn(text: string, place: { row: number; sheet?: string }, column: string, columns: readonly Column[]): number | null {
+  private quantityIn(
+    text: string,
+    place: { row: number; sheet?: string },
+    column: string,
+    columns: readonly Column[],
+  ): number | null {
     if (text === '' || !columns.some((one) => one.role === 'quantity')) return null;
     const cell = text.normalize('NFKC').trim();
-    const stop = (what: string) => new ReadingStopped({ code: 'bad-quantity', detail: `The quantity “${text.slice(0, 40)}” in row ${place.row}, column ${column} is ${what}.`, ...place, column, cure: 'Write a whole number of parts, or leave the cell empty.' });
+    const stop = (what: string) =>
+      new ReadingStopped({
+        code: 'bad-quantity',
+        detail: `The quantity “${text.slice(0, 40)}” in row ${place.row}, column ${column} is ${what}.`,
+        ...place,
+        column,
+        cure: 'Write a whole number of parts, or leave the cell empty.',
+      });
     if (/^[-−]\s*\d/.test(cell)) throw stop('negative');
-    const number = /^(?:[x×]\s*)?(\d{1,7})(?:[.,](\d+))?\s*(?:[x×]|pcs?\.?|st(?:k|ück)?\.?|pieces?)?(?=$|\s|\()/i.exec(cell);
+    const number = /^(?:[x×]\s*)?(\d{1,7})(?:[.,](\d+))?\s*(?:[x×]|pcs?\.?|st(?:k|ück)?\.?|pieces?)?(?=$|\s|\()/i.exec(
+      cell,
+    );
     if (!number) return null;
     if (number[2] !== undefined && !/^0+$/.test(number[2])) throw stop('a fraction');
     return Number(number[1]);
   }
 
-  private isFitted(columns: readonly Column[], row: TableRow, cells: { value: string; notes: string; description: string; quantity: string; package: string }): boolean {
+  private isFitted(
+    columns: readonly Column[],
+    row: TableRow,
+    cells: { value: string; notes: string; description: string; quantity: string; package: string },
+  ): boolean {
     for (const column of columns) {
       if (column.role !== 'fitted') continue;
       const cell = (row.cells[column.index] ?? '').trim();
@@ -174,22 +270,35 @@ export class RowReader {
       const meansNot = /^(?:dnp|dnf|dni|do not|not|no pop|omit|excluded)/i.test(cell);
       const yes = /^(?:1|x|yes|y|true|ja|oui|sí|si|wahr)$/i.test(cell);
       const headingSaysNot = /dn[pfi]|not/i.test(column.heading);
-      if (meansNot || (yes && headingSaysNot) || (!headingSaysNot && /^(?:0|no|n|false|nein|non)$/i.test(cell))) return false;
+      if (meansNot || (yes && headingSaysNot) || (!headingSaysNot && /^(?:0|no|n|false|nein|non)$/i.test(cell)))
+        return false;
     }
-    return ![cells.value, cells.notes, cells.description, cells.quantity, cells.package].some((cell) => NOT_FITTED.test(cell));
+    return ![cells.value, cells.notes, cells.description, cells.quantity, cells.package].some((cell) =>
+      NOT_FITTED.test(cell),
+    );
   }
 
   /** A part number that is known wins; then words; then the letters of the designator; then section and value. */
-  private kindOf(designators: readonly string[], source: string, cells: { kind: string; description: string; package: string; notes: string; value: string }): PartKind {
+  private kindOf(
+    designators: readonly string[],
+    source: string,
+    cells: { kind: string; description: string; package: string; notes: string; value: string },
+  ): PartKind {
     const letters = designators.map((one) => kindOfDesignator(one)).find((one) => one !== null) ?? null;
     const byLetters = PART_KINDS.find((one) => one === letters) ?? null;
     const byColumn = firstOf(KIND_WORDS, cells.kind);
-    const byWords = firstOf(KIND_WORDS, source) ?? firstOf(KIND_WORDS, cells.description) ?? firstOf(KIND_WORDS, cells.package.replaceAll('_', ' ')) ?? firstOf(KIND_WORDS, cells.notes);
-    const isValue = byLetters !== null && ['resistor', 'capacitor', 'inductor', 'potentiometer', 'trimmer'].includes(byLetters);
+    const byWords =
+      firstOf(KIND_WORDS, source) ??
+      firstOf(KIND_WORDS, cells.description) ??
+      firstOf(KIND_WORDS, cells.package.replaceAll('_', ' ')) ??
+      firstOf(KIND_WORDS, cells.notes);
+    const isValue =
+      byLetters !== null && ['resistor', 'capacitor', 'inductor', 'potentiometer', 'trimmer'].includes(byLetters);
     const family = isValue || byColumn === 'resistor' || byColumn === 'capacitor' ? null : familyOf(source);
     if (family && compatible(byLetters, family.kind)) return family.kind;
     if (byColumn !== null && compatible(byLetters, byColumn)) return refine(byColumn, byWords);
-    if (byLetters !== null) return byWords !== null && byWords !== byLetters && narrows(byLetters, byWords) ? byWords : byLetters;
+    if (byLetters !== null)
+      return byWords !== null && byWords !== byLetters && narrows(byLetters, byWords) ? byWords : byLetters;
     if (byColumn !== null) return refine(byColumn, byWords);
     if (byWords !== null) return byWords;
     if (this.section !== null) return this.section;
@@ -212,15 +321,29 @@ const SHARED: Readonly<Partial<Record<PartKind, readonly PartKind[]>>> = {
   inductor: ['led'],
   fuse: ['inductor', 'hardware'],
   hardware: ['connector', 'pcb'],
-  other: ['connector', 'switch', 'optocoupler', 'transformer', 'crystal', 'diode', 'hardware', 'pcb', 'regulator', 'ic', 'led'],
+  other: [
+    'connector',
+    'switch',
+    'optocoupler',
+    'transformer',
+    'crystal',
+    'diode',
+    'hardware',
+    'pcb',
+    'regulator',
+    'ic',
+    'led',
+  ],
   crystal: ['ic'],
   capacitor: [],
   optocoupler: ['ic'],
 };
 
 const narrows = (letters: PartKind, words: PartKind): boolean => SHARED[letters]?.includes(words) ?? false;
-const compatible = (letters: PartKind | null, kind: PartKind): boolean => letters === null || letters === kind || narrows(letters, kind);
-const refine = (general: PartKind, words: PartKind | null): PartKind => (words !== null && narrows(general, words) ? words : general);
+const compatible = (letters: PartKind | null, kind: PartKind): boolean =>
+  letters === null || letters === kind || narrows(letters, kind);
+const refine = (general: PartKind, words: PartKind | null): PartKind =>
+  words !== null && narrows(general, words) ? words : general;
 
 function shorten(designators: readonly string[]): string {
   return designators.length <= 3 ? designators.join(', ') : `${designators[0]} … ${designators.at(-1)}`;
@@ -247,6 +370,7 @@ function merged(main: PartSpec, around: PartSpec, packageCell: string, kind: Par
 /** A number only where the kind has numbers: `510` on a resistor is a value. */
 function numberFor(kind: PartKind, spec: PartSpec, source: string): string | null {
   if (spec.partNumber !== null) return spec.partNumber;
-  if (['ic', 'transistor', 'diode', 'regulator', 'optocoupler'].includes(kind) && /\d/.test(source)) return source.split(/\s+/)[0] ?? null;
+  if (['ic', 'transistor', 'diode', 'regulator', 'optocoupler'].includes(kind) && /\d/.test(source))
+    return source.split(/\s+/)[0] ?? null;
   return null;
 }

@@ -58,7 +58,11 @@ export function partCautions(part: CautionedPart): PartCaution[] {
     cautions.push({ code: 'polarity', level: 'care', says: 'Mind polarity: the band or the flat is the cathode.' });
   }
   if (isStaticSensitive(part)) {
-    cautions.push({ code: 'static', level: 'care', says: 'Sensitive to static: earth yourself, leave it in its foam until it is fitted.' });
+    cautions.push({
+      code: 'static',
+      level: 'care',
+      says: 'Sensitive to static: earth yourself, leave it in its foam until it is fitted.',
+    });
   }
   return cautions;
 }

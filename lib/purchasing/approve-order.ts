@@ -14,13 +14,20 @@ import { ORDER_STATES } from './order-states';
 import { leadsToAsk } from './leads-to-ask';
 import { refusePaymentUnderWay } from './payment-under-way';
 
-const moved = z.object({ id: id(), number: z.string(), state: z.enum(ORDER_STATES), version: z.number().int(), totalMinor: z.number().int() });
+const moved = z.object({
+  id: id(),
+  number: z.string(),
+  state: z.enum(ORDER_STATES),
+  version: z.number().int(),
+  totalMinor: z.number().int(),
+});
 const asked = z.strictObject({ orderId: id(), version: z.number().int().optional() });
 
 export const submitOrder = command({
   name: 'orders.submit',
   http: 'POST /orders/{orderId}/submit',
-  summary: 'Submit a draft: prices are taken from the offers as they hold now; within the limit it is approved at once.',
+  summary:
+    'Submit a draft: prices are taken from the offers as they hold now; within the limit it is approved at once.',
   roles: ['buyer', 'lead'],
   input: asked,
   output: moved,
@@ -31,7 +38,10 @@ export const submitOrder = command({
     const { goodsMinor } = await repriceDraft(tx, draft);
     await refuseBelowMinimum(tx, draft, goodsMinor);
     let order = await moveOrder(tx, draft, submitted, { submittedBy: actor.personId, approvedBy: null });
-    const [rules] = await tx.select({ limit: workshop.approvalLimitMinor, currency: workshop.currency }).from(workshop).where(eq(workshop.id, actor.workshopId));
+    const [rules] = await tx
+      .select({ limit: workshop.approvalLimitMinor, currency: workshop.currency })
+      .from(workshop)
+      .where(eq(workshop.id, actor.workshopId));
     if (!rules) throw notFound('workshop');
     // The limit is in the workshop's currency; an order in another always gets a second look.
     if (order.currency === rules.currency && order.totalMinor <= rules.limit) {
@@ -65,7 +75,8 @@ export const approveOrder = command({
     const order = await lockOrder(tx, actor.workshopId, input.orderId);
     if (input.version !== undefined) refuseStale(order, input.version);
     const next = stateAfter(order, 'approve');
-    if (order.submittedBy === actor.personId) throw new Refusal('rule.forbids', 'Four eyes: somebody else than who submitted it must approve this order.');
+    if (order.submittedBy === actor.personId)
+      throw new Refusal('rule.forbids', 'Four eyes: somebody else than who submitted it must approve this order.');
     const approved = await moveOrder(tx, order, next, { approvedBy: actor.personId });
     record(order.id, { totalMinor: order.totalMinor });
     return approved;

@@ -13,10 +13,20 @@ import { ORDER_STATES } from './order-states';
 import { refusePaymentUnderWay } from './payment-under-way';
 import { askForRefund } from './settle-payment';
 
-const settled = z.object({ id: id(), number: z.string(), state: z.enum(ORDER_STATES), refundMinor: z.number().int(), currency: z.string() });
+const settled = z.object({
+  id: id(),
+  number: z.string(),
+  state: z.enum(ORDER_STATES),
+  refundMinor: z.number().int(),
+  currency: z.string(),
+});
 
 /** The paid payment of an order and what is still left of it after refunds asked for or done. */
-async function paidPayment(tx: Tx, workshopId: string, orderId: string): Promise<{ id: string; leftMinor: number } | null> {
+async function paidPayment(
+  tx: Tx,
+  workshopId: string,
+  orderId: string,
+): Promise<{ id: string; leftMinor: number } | null> {
   const [row] = await tx
     .select({
       id: payment.id,
@@ -42,7 +52,13 @@ export const cancelOrder = command({
     await refusePaymentUnderWay(tx, order.workshopId, order.id, order.number);
     const paid = await paidPayment(tx, order.workshopId, order.id);
     if (paid && paid.leftMinor > 0) {
-      await askForRefund(tx, { workshopId: order.workshopId, paymentId: paid.id, amountMinor: paid.leftMinor, reason: `order cancelled: ${input.reason}`, createdBy: actor.personId });
+      await askForRefund(tx, {
+        workshopId: order.workshopId,
+        paymentId: paid.id,
+        amountMinor: paid.leftMinor,
+        reason: `order cancelled: ${input.reason}`,
+        createdBy: actor.personId,
+      });
     }
     const cancelled = await moveOrder(tx, order, next);
     const refundMinor = paid?.leftMinor ?? 0;
@@ -56,7 +72,11 @@ export const settleShortOrder = command({
   http: 'POST /orders/{orderId}/settle-short',
   summary: 'Give up what did not come: the missing units are not owed any more and their price goes back to the card.',
   roles: ['buyer', 'lead'],
-  input: z.strictObject({ orderId: id(), reason: z.string().trim().min(1, 'say why').max(500), lineIds: z.array(id()).max(500).optional() }),
+  input: z.strictObject({
+    orderId: id(),
+    reason: z.string().trim().min(1, 'say why').max(500),
+    lineIds: z.array(id()).max(500).optional(),
+  }),
   output: settled,
   async run({ tx, actor, input, record }) {
     const order = await lockOrder(tx, actor.workshopId, input.orderId);
@@ -64,14 +84,23 @@ export const settleShortOrder = command({
     const lines = await orderLinesOf(tx, order.workshopId, order.id);
     const open = lines.filter((line) => line.quantity - line.cancelled - line.received > 0);
     const chosen = input.lineIds === undefined ? open : open.filter((line) => input.lineIds?.includes(line.id));
-    if (chosen.length === 0) throw new Refusal('rule.forbids', `Nothing of order ${order.number} is missing on those lines.`);
+    if (chosen.length === 0)
+      throw new Refusal('rule.forbids', `Nothing of order ${order.number} is missing on those lines.`);
     let refundMinor = 0;
     for (const line of chosen) {
-      refundMinor += refundForMissing({ ...line, currency: order.currency, cancelledBefore: line.cancelled, cancelledNow: line.quantity - line.cancelled - line.received });
+      refundMinor += refundForMissing({
+        ...line,
+        currency: order.currency,
+        cancelledBefore: line.cancelled,
+        cancelledNow: line.quantity - line.cancelled - line.received,
+      });
     }
     const paid = await paidPayment(tx, order.workshopId, order.id);
     if (paid && refundMinor > paid.leftMinor) {
-      throw new Refusal('rule.forbids', `Only ${moneyText(paid.leftMinor, order.currency)} of the payment is left; ${moneyText(refundMinor, order.currency)} can’t go back.`);
+      throw new Refusal(
+        'rule.forbids',
+        `Only ${moneyText(paid.leftMinor, order.currency)} of the payment is left; ${moneyText(refundMinor, order.currency)} can’t go back.`,
+      );
     }
     await tx
       .update(orderLine)
@@ -85,10 +114,23 @@ export const settleShortOrder = command({
           ),
         ),
       );
-    if (paid && refundMinor > 0) await askForRefund(tx, { workshopId: order.workshopId, paymentId: paid.id, amountMinor: refundMinor, reason: `short delivery: ${input.reason}`, createdBy: actor.personId });
+    if (paid && refundMinor > 0)
+      await askForRefund(tx, {
+        workshopId: order.workshopId,
+        paymentId: paid.id,
+        amountMinor: refundMinor,
+        reason: `short delivery: ${input.reason}`,
+        createdBy: actor.personId,
+      });
     const stillOpen = open.length > chosen.length;
     const after = stillOpen ? order : await moveOrder(tx, order, next);
     record(order.id, { reason: input.reason, refundMinor: paid ? refundMinor : 0, lines: chosen.length });
-    return { id: order.id, number: order.number, state: after.state, currency: order.currency, refundMinor: paid ? refundMinor : 0 };
+    return {
+      id: order.id,
+      number: order.number,
+      state: after.state,
+      currency: order.currency,
+      refundMinor: paid ? refundMinor : 0,
+    };
   },
 });

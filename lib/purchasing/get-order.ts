@@ -32,7 +32,13 @@ export const listOrders = query({
   input: z.strictObject({ ...pageFields, state: listOf(state, 10).optional(), supplierId: id().optional() }),
   output: pageOf(orderRow).extend({ byState: z.array(z.object({ state, count: z.number().int() })) }),
   async run({ tx, actor, input }) {
-    const states = input.state && input.state.length > 0 ? sql`and o.state in (${sql.join(input.state.map((one) => sql`${one}`), sql`, `)})` : sql``;
+    const states =
+      input.state && input.state.length > 0
+        ? sql`and o.state in (${sql.join(
+            input.state.map((one) => sql`${one}`),
+            sql`, `,
+          )})`
+        : sql``;
     const ofSupplier = input.supplierId === undefined ? sql`` : sql`and o.supplier_id = ${input.supplierId}`;
     const found = await tx.execute<{ row: z.output<typeof orderRow>; total: number }>(sql`
       select json_build_object('id', o.id, 'number', o.number, 'state', o.state, 'supplierId', s.id, 'supplierName', s.name, 'currency', o.currency, 'totalMinor', o.total_minor,
@@ -49,7 +55,13 @@ export const listOrders = query({
     const counts = await tx.execute<{ state: z.output<typeof state>; count: number }>(
       sql`select state, count(*)::int as count from purchase_order where workshop_id = ${actor.workshopId} group by state`,
     );
-    return { rows: found.rows.map(({ row }) => row), total: found.rows[0]?.total ?? 0, page: input.page, size: input.size, byState: counts.rows.map(({ state: one, count }) => ({ state: one, count })) };
+    return {
+      rows: found.rows.map(({ row }) => row),
+      total: found.rows[0]?.total ?? 0,
+      page: input.page,
+      size: input.size,
+      byState: counts.rows.map(({ state: one, count }) => ({ state: one, count })),
+    };
   },
 });
 
@@ -58,7 +70,14 @@ const orderPage = z.object({
   number: z.string(),
   state,
   version: z.number().int(),
-  supplier: z.object({ id: id(), name: z.string(), email: z.string(), takesCards: z.boolean(), minimumOrderMinor: z.number().int(), leadTimeDays: z.number().int() }),
+  supplier: z.object({
+    id: id(),
+    name: z.string(),
+    email: z.string(),
+    takesCards: z.boolean(),
+    minimumOrderMinor: z.number().int(),
+    leadTimeDays: z.number().int(),
+  }),
   currency: z.string(),
   goodsMinor: z.number().int(),
   postageMinor: z.number().int(),
@@ -91,10 +110,29 @@ const orderPage = z.object({
       waiting: z.array(z.object({ batchId: id(), number: z.string() })),
     }),
   ),
-  payments: z.array(z.object({ id: id(), attempt: z.number().int(), state: z.string(), amountMinor: z.number().int(), checkoutUrl: z.string().nullable(), lastProblem: z.string().nullable(), paidAt: z.string().nullable() })),
+  payments: z.array(
+    z.object({
+      id: id(),
+      attempt: z.number().int(),
+      state: z.string(),
+      amountMinor: z.number().int(),
+      checkoutUrl: z.string().nullable(),
+      lastProblem: z.string().nullable(),
+      paidAt: z.string().nullable(),
+    }),
+  ),
   refunds: z.array(z.object({ id: id(), amountMinor: z.number().int(), reason: z.string(), state: z.string() })),
   mails: z.array(z.object({ to: z.string(), subject: z.string(), sentAt: z.string().nullable() })),
-  receipts: z.array(z.object({ id: id(), number: z.string(), receivedAt: z.string(), receivedBy: z.string(), deliveryNote: z.string(), units: z.number().int() })),
+  receipts: z.array(
+    z.object({
+      id: id(),
+      number: z.string(),
+      receivedAt: z.string(),
+      receivedBy: z.string(),
+      deliveryNote: z.string(),
+      units: z.number().int(),
+    }),
+  ),
 });
 
 const utc = (column: string) => sql.raw(`to_char(${column} at time zone 'UTC', 'YYYY-MM-DD"T"HH24:MI:SS"Z"')`);

@@ -9,6 +9,13 @@ export const leadsToAsk = (tx: Tx, workshopId: string, submitterId: string) =>
     .select({ personId: person.id, name: person.name, email: person.email })
     .from(membership)
     .innerJoin(person, eq(person.id, membership.personId))
-    .where(and(eq(membership.workshopId, workshopId), isNull(membership.endedAt), ne(membership.personId, submitterId), sql`'lead' = any(${membership.roles})`))
+    .where(
+      and(
+        eq(membership.workshopId, workshopId),
+        isNull(membership.endedAt),
+        ne(membership.personId, submitterId),
+        sql`'lead' = any(${membership.roles})`,
+      ),
+    )
     .orderBy(person.id)
     .limit(20);

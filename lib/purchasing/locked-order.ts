@@ -31,7 +31,11 @@ export const orderLinesOf = (tx: Tx, workshopId: string, orderId: string) =>
     .where(and(eq(orderLine.workshopId, workshopId), eq(orderLine.orderId, orderId)))
     .orderBy(asc(orderLine.position));
 
-export async function supplierOf(tx: Tx, workshopId: string, supplierId: string): Promise<typeof supplier.$inferSelect> {
+export async function supplierOf(
+  tx: Tx,
+  workshopId: string,
+  supplierId: string,
+): Promise<typeof supplier.$inferSelect> {
   const [row] = await tx
     .select()
     .from(supplier)
@@ -58,17 +62,30 @@ const ACT_WORDS: Record<OrderAct, string> = {
 export function stateAfter(order: OrderRow, act: OrderAct): OrderState {
   const next = orderStateAfter(order.state, act);
   if (next === null) {
-    throw new Refusal('state.refused', `Order ${order.number} is ${order.state}; it can’t be ${ACT_WORDS[act]} now.`, { more: { state: order.state, version: order.version } });
+    throw new Refusal('state.refused', `Order ${order.number} is ${order.state}; it can’t be ${ACT_WORDS[act]} now.`, {
+      more: { state: order.state, version: order.version },
+    });
   }
   return next;
 }
 
 /** Writes the new state and what goes with it. The row is locked, so a miss is a bug, not a race. */
-export async function moveOrder(tx: Tx, order: OrderRow, state: OrderState, changes: Partial<typeof purchaseOrder.$inferInsert> = {}): Promise<OrderRow> {
+export async function moveOrder(
+  tx: Tx,
+  order: OrderRow,
+  state: OrderState,
+  changes: Partial<typeof purchaseOrder.$inferInsert> = {},
+): Promise<OrderRow> {
   const [row] = await tx
     .update(purchaseOrder)
     .set({ ...changes, state, version: sql`${purchaseOrder.version} + 1` })
-    .where(and(eq(purchaseOrder.workshopId, order.workshopId), eq(purchaseOrder.id, order.id), eq(purchaseOrder.state, order.state)))
+    .where(
+      and(
+        eq(purchaseOrder.workshopId, order.workshopId),
+        eq(purchaseOrder.id, order.id),
+        eq(purchaseOrder.state, order.state),
+      ),
+    )
     .returning();
   if (!row) throw new Error(`order ${order.id} changed state under its lock`);
   return { ...row, state: toState(row.state) };

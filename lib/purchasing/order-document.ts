@@ -25,7 +25,14 @@ export interface OrderDocument {
   readonly goodsMinor: number;
   readonly postageMinor: number;
   readonly totalMinor: number;
-  readonly lines: readonly { position: number; supplierCode: string; description: string; quantity: number; unitPrice: string; totalMinor: number }[];
+  readonly lines: readonly {
+    position: number;
+    supplierCode: string;
+    description: string;
+    quantity: number;
+    unitPrice: string;
+    totalMinor: number;
+  }[];
 }
 
 export function amountText(minor: number, currency: string): string {
@@ -79,7 +86,16 @@ const FOOT = 270 * MM;
 /** A4, as many pages as the lines need; each says which page of how many it is. */
 export async function orderPdf(order: OrderDocument): Promise<Buffer> {
   const [regular, bold] = await Promise.all([fontFile(REGULAR), fontFile(BOLD)]);
-  const pdf = new PDFDocument({ size: 'A4', margin: 0, bufferPages: true, info: { Title: `Order ${order.number}`, Author: order.workshopName, CreationDate: new Date(`${order.orderedOn}T00:00:00Z`) } });
+  const pdf = new PDFDocument({
+    size: 'A4',
+    margin: 0,
+    bufferPages: true,
+    info: {
+      Title: `Order ${order.number}`,
+      Author: order.workshopName,
+      CreationDate: new Date(`${order.orderedOn}T00:00:00Z`),
+    },
+  });
   const chunks: Buffer[] = [];
   const done = new Promise<Buffer>((resolve, reject) => {
     pdf.on('data', (chunk: Buffer) => chunks.push(chunk));
@@ -88,26 +104,68 @@ export async function orderPdf(order: OrderDocument): Promise<Buffer> {
   });
   pdf.registerFont('regular', regular).registerFont('bold', bold);
 
-  pdf.font('bold').fontSize(15).text(order.workshopName, LEFT, 18 * MM);
-  pdf.font('regular').fontSize(9).text(order.letterhead, LEFT, 26 * MM, { width: 80 * MM });
-  pdf.font('bold').fontSize(11).text(order.supplierName, LEFT, 52 * MM);
-  pdf.font('regular').fontSize(10).text(order.supplierAddress, LEFT, 58 * MM, { width: 80 * MM });
-  pdf.font('bold').fontSize(20).text(`Order ${order.number}`, 110 * MM, 50 * MM, { width: 80 * MM, align: 'right' });
-  const facts = [`ordered ${order.orderedOn}`, order.expectedOn === null ? null : `expected ${order.expectedOn}`, `by ${order.buyerName}`, order.paid ? 'paid by card' : 'on account'].filter((fact) => fact !== null);
-  pdf.font('regular').fontSize(10).text(facts.join('\n'), 110 * MM, 60 * MM, { width: 80 * MM, align: 'right' });
+  pdf
+    .font('bold')
+    .fontSize(15)
+    .text(order.workshopName, LEFT, 18 * MM);
+  pdf
+    .font('regular')
+    .fontSize(9)
+    .text(order.letterhead, LEFT, 26 * MM, { width: 80 * MM });
+  pdf
+    .font('bold')
+    .fontSize(11)
+    .text(order.supplierName, LEFT, 52 * MM);
+  pdf
+    .font('regular')
+    .fontSize(10)
+    .text(order.supplierAddress, LEFT, 58 * MM, { width: 80 * MM });
+  pdf
+    .font('bold')
+    .fontSize(20)
+    .text(`Order ${order.number}`, 110 * MM, 50 * MM, { width: 80 * MM, align: 'right' });
+  const facts = [
+    `ordered ${order.orderedOn}`,
+    order.expectedOn === null ? null : `expected ${order.expectedOn}`,
+    `by ${order.buyerName}`,
+    order.paid ? 'paid by card' : 'on account',
+  ].filter((fact) => fact !== null);
+  pdf
+    .font('regular')
+    .fontSize(10)
+    .text(facts.join('\n'), 110 * MM, 60 * MM, { width: 80 * MM, align: 'right' });
 
   let y = tableHead(pdf, 92 * MM);
   for (const line of order.lines) {
-    const cells = [String(line.position), line.supplierCode, line.description, String(line.quantity), line.unitPrice, amountText(line.totalMinor, order.currency)];
+    const cells = [
+      String(line.position),
+      line.supplierCode,
+      line.description,
+      String(line.quantity),
+      line.unitPrice,
+      amountText(line.totalMinor, order.currency),
+    ];
     pdf.font('regular').fontSize(9.5);
-    const height = Math.max(...COLUMNS.map((column, index) => pdf.heightOfString(cells[index] ?? '', { width: column.width }))) + 2.4 * MM;
+    const height =
+      Math.max(...COLUMNS.map((column, index) => pdf.heightOfString(cells[index] ?? '', { width: column.width }))) +
+      2.4 * MM;
     if (y + height > FOOT) {
       pdf.addPage();
       y = tableHead(pdf, 20 * MM);
     }
-    COLUMNS.forEach((column, index) => pdf.font('regular').fontSize(9.5).text(cells[index] ?? '', column.x, y, { width: column.width, align: column.right ? 'right' : 'left' }));
+    COLUMNS.forEach((column, index) =>
+      pdf
+        .font('regular')
+        .fontSize(9.5)
+        .text(cells[index] ?? '', column.x, y, { width: column.width, align: column.right ? 'right' : 'left' }),
+    );
     y += height;
-    pdf.moveTo(LEFT, y - 1.2 * MM).lineTo(RIGHT, y - 1.2 * MM).lineWidth(0.3).strokeColor('#d9cfbd').stroke();
+    pdf
+      .moveTo(LEFT, y - 1.2 * MM)
+      .lineTo(RIGHT, y - 1.2 * MM)
+      .lineWidth(0.3)
+      .strokeColor('#d9cfbd')
+      .stroke();
   }
   if (y + 30 * MM > FOOT) {
     pdf.addPage();
@@ -118,16 +176,34 @@ export async function orderPdf(order: OrderDocument): Promise<Buffer> {
     ['Postage', order.postageMinor, 'regular'],
     [`Total ${order.currency}`, order.totalMinor, 'bold'],
   ] as const) {
-    pdf.font(font).fontSize(10).text(label, 120 * MM, y + 2 * MM, { width: 40 * MM, align: 'right' });
-    pdf.font(font).fontSize(10).text(amountText(minor, order.currency), 168 * MM, y + 2 * MM, { width: 22 * MM, align: 'right' });
+    pdf
+      .font(font)
+      .fontSize(10)
+      .text(label, 120 * MM, y + 2 * MM, { width: 40 * MM, align: 'right' });
+    pdf
+      .font(font)
+      .fontSize(10)
+      .text(amountText(minor, order.currency), 168 * MM, y + 2 * MM, { width: 22 * MM, align: 'right' });
     y += 6 * MM;
   }
-  if (order.note) pdf.font('regular').fontSize(10).text(order.note, LEFT, y + 6 * MM, { width: 120 * MM });
+  if (order.note)
+    pdf
+      .font('regular')
+      .fontSize(10)
+      .text(order.note, LEFT, y + 6 * MM, { width: 120 * MM });
 
   const { count } = pdf.bufferedPageRange();
   for (let page = 0; page < count; page += 1) {
     pdf.switchToPage(page);
-    pdf.font('regular').fontSize(8).fillColor('#5d5a53').text(`Order ${order.number}, page ${page + 1} of ${count}`, LEFT, 285 * MM, { width: RIGHT - LEFT, align: 'center', lineBreak: false });
+    pdf
+      .font('regular')
+      .fontSize(8)
+      .fillColor('#5d5a53')
+      .text(`Order ${order.number}, page ${page + 1} of ${count}`, LEFT, 285 * MM, {
+        width: RIGHT - LEFT,
+        align: 'center',
+        lineBreak: false,
+      });
     pdf.fillColor('#1f2328');
   }
   pdf.end();
@@ -136,7 +212,16 @@ export async function orderPdf(order: OrderDocument): Promise<Buffer> {
 
 function tableHead(pdf: PDFKit.PDFDocument, y: number): number {
   pdf.fillColor('#1f2328');
-  for (const column of COLUMNS) pdf.font('bold').fontSize(9).text(column.title, column.x, y, { width: column.width, align: column.right ? 'right' : 'left' });
-  pdf.moveTo(LEFT, y + 5 * MM).lineTo(RIGHT, y + 5 * MM).lineWidth(0.8).strokeColor('#1f2328').stroke();
+  for (const column of COLUMNS)
+    pdf
+      .font('bold')
+      .fontSize(9)
+      .text(column.title, column.x, y, { width: column.width, align: column.right ? 'right' : 'left' });
+  pdf
+    .moveTo(LEFT, y + 5 * MM)
+    .lineTo(RIGHT, y + 5 * MM)
+    .lineWidth(0.8)
+    .strokeColor('#1f2328')
+    .stroke();
   return y + 7 * MM;
 }

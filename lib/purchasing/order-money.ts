@@ -41,7 +41,10 @@ export function unitPriceAt(breaks: readonly Break[], quantity: number): string 
 }
 
 /** The least quantity that can be ordered to get at least `needed`: the minimum (which the first break may raise), in whole multiples. */
-export function orderableQuantity(needed: number, rules: { orderMultiple: number; minimumQuantity: number; breaks: readonly Break[] }): number {
+export function orderableQuantity(
+  needed: number,
+  rules: { orderMultiple: number; minimumQuantity: number; breaks: readonly Break[] },
+): number {
   const firstBreak = rules.breaks.length === 0 ? 1 : Math.min(...rules.breaks.map((step) => step.fromQuantity));
   const floor = Math.max(needed, rules.minimumQuantity, firstBreak, 1);
   return Math.ceil(floor / rules.orderMultiple) * rules.orderMultiple;
@@ -56,28 +59,45 @@ export function cheapestPurchase(
   rules: { orderMultiple: number; minimumQuantity: number; breaks: readonly Break[]; currency: string },
 ): { quantity: number; unitPrice: string; totalMinor: number } | null {
   let best: { quantity: number; unitPrice: string; totalMinor: number } | null = null;
-  for (const from of [needed, ...rules.breaks.map((step) => step.fromQuantity).filter((quantity) => quantity > needed)]) {
+  for (const from of [
+    needed,
+    ...rules.breaks.map((step) => step.fromQuantity).filter((quantity) => quantity > needed),
+  ]) {
     const quantity = orderableQuantity(from, rules);
     const unitPrice = unitPriceAt(rules.breaks, quantity);
     if (unitPrice === null) return null;
     const totalMinor = lineTotalMinor(quantity, unitPrice, rules.currency);
-    if (!best || totalMinor < best.totalMinor || (totalMinor === best.totalMinor && quantity > best.quantity)) best = { quantity, unitPrice, totalMinor };
+    if (!best || totalMinor < best.totalMinor || (totalMinor === best.totalMinor && quantity > best.quantity))
+      best = { quantity, unitPrice, totalMinor };
   }
   return best;
 }
 
-export function postageFor(goodsMinor: number, supplier: { postageMinor: number; postageFreeFromMinor: number | null }): number {
-  return supplier.postageFreeFromMinor !== null && goodsMinor >= supplier.postageFreeFromMinor ? 0 : supplier.postageMinor;
+export function postageFor(
+  goodsMinor: number,
+  supplier: { postageMinor: number; postageFreeFromMinor: number | null },
+): number {
+  return supplier.postageFreeFromMinor !== null && goodsMinor >= supplier.postageFreeFromMinor
+    ? 0
+    : supplier.postageMinor;
 }
 
 /**
  * Money back for units that never came: what the paid line cost less what the units that came cost at the same unit
  * price, so that refunds of one line always add up to its total whatever the order they are made in.
  */
-export function refundForMissing(line: { quantity: number; unitPrice: string; totalMinor: number; cancelledBefore: number; cancelledNow: number; currency: string }): number {
+export function refundForMissing(line: {
+  quantity: number;
+  unitPrice: string;
+  totalMinor: number;
+  cancelledBefore: number;
+  cancelledNow: number;
+  currency: string;
+}): number {
   const keptBefore = line.quantity - line.cancelledBefore;
   const keptAfter = keptBefore - line.cancelledNow;
-  const worth = (units: number) => (units === line.quantity ? line.totalMinor : lineTotalMinor(units, line.unitPrice, line.currency));
+  const worth = (units: number) =>
+    units === line.quantity ? line.totalMinor : lineTotalMinor(units, line.unitPrice, line.currency);
   return worth(keptBefore) - worth(keptAfter);
 }
 

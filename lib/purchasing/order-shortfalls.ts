@@ -11,13 +11,27 @@ import { findShortfalls } from './shortfalls';
 export const orderShortfalls = command({
   name: 'orders.from-shortfalls',
   http: 'POST /orders/from-shortfalls',
-  summary: 'Raise draft orders for shortfalls: all of them, or the parts named, each from the offer named or the cheapest.',
+  summary:
+    'Raise draft orders for shortfalls: all of them, or the parts named, each from the offer named or the cheapest.',
   roles: ['buyer', 'lead'],
   input: z.strictObject({
-    parts: z.array(z.strictObject({ partId: id(), offerId: id().optional() })).min(1).max(500).optional(),
+    parts: z
+      .array(z.strictObject({ partId: id(), offerId: id().optional() }))
+      .min(1)
+      .max(500)
+      .optional(),
   }),
   output: z.object({
-    orders: z.array(z.object({ id: id(), number: z.string(), supplierName: z.string(), lines: z.number().int(), totalMinor: z.number().int(), currency: z.string() })),
+    orders: z.array(
+      z.object({
+        id: id(),
+        number: z.string(),
+        supplierName: z.string(),
+        lines: z.number().int(),
+        totalMinor: z.number().int(),
+        currency: z.string(),
+      }),
+    ),
     notOrdered: z.array(z.object({ partId: id(), partName: z.string(), why: z.string() })),
   }),
   async run({ tx, actor, input, record }) {
@@ -30,16 +44,26 @@ export const orderShortfalls = command({
     const bySupplier = new Map<string, { name: string; lines: WantedLine[] }>();
     for (const one of chosen) {
       const wished = wishes?.get(one.partId);
-      const purchase = wished === undefined ? one.purchases[0] : one.purchases.find((candidate) => candidate.offerId === wished);
+      const purchase =
+        wished === undefined ? one.purchases[0] : one.purchases.find((candidate) => candidate.offerId === wished);
       if (!purchase) {
-        notOrdered.push({ partId: one.partId, partName: one.partName, why: wished === undefined ? 'no supplier offers it' : 'that offer is not for this part' });
+        notOrdered.push({
+          partId: one.partId,
+          partName: one.partName,
+          why: wished === undefined ? 'no supplier offers it' : 'that offer is not for this part',
+        });
         continue;
       }
       const group = bySupplier.get(purchase.supplierId) ?? { name: purchase.supplierName, lines: [] };
       group.lines.push({ offerId: purchase.offerId, quantity: purchase.quantity });
       bySupplier.set(purchase.supplierId, group);
     }
-    if (bySupplier.size === 0) throw new Refusal('rule.forbids', chosen.length === 0 ? 'Nothing of that is short.' : 'No supplier offers what is short.', { more: { notOrdered } });
+    if (bySupplier.size === 0)
+      throw new Refusal(
+        'rule.forbids',
+        chosen.length === 0 ? 'Nothing of that is short.' : 'No supplier offers what is short.',
+        { more: { notOrdered } },
+      );
     const orders = [];
     for (const [supplierId, group] of [...bySupplier].sort(([a], [b]) => (a < b ? -1 : 1))) {
       const made = await makeDraft(tx, actor, supplierId, group.lines);

@@ -1,9 +1,32 @@
 /** The life of an order as one table: which act leads from which state to which. Pure; every other change is refused. */
 
-export const ORDER_STATES = ['draft', 'submitted', 'approved', 'paid', 'on-account', 'sent', 'part-received', 'received', 'closed', 'cancelled'] as const;
+export const ORDER_STATES = [
+  'draft',
+  'submitted',
+  'approved',
+  'paid',
+  'on-account',
+  'sent',
+  'part-received',
+  'received',
+  'closed',
+  'cancelled',
+] as const;
 export type OrderState = (typeof ORDER_STATES)[number];
 
-export const ORDER_ACTS = ['submit', 'approve', 'return-to-draft', 'pay', 'put-on-account', 'send', 'receive-part', 'receive-all', 'settle-short', 'close', 'cancel'] as const;
+export const ORDER_ACTS = [
+  'submit',
+  'approve',
+  'return-to-draft',
+  'pay',
+  'put-on-account',
+  'send',
+  'receive-part',
+  'receive-all',
+  'settle-short',
+  'close',
+  'cancel',
+] as const;
 export type OrderAct = (typeof ORDER_ACTS)[number];
 
 const TRANSITIONS: Readonly<Record<OrderAct, Readonly<Partial<Record<OrderState, OrderState>>>>> = {
@@ -19,7 +42,14 @@ const TRANSITIONS: Readonly<Record<OrderAct, Readonly<Partial<Record<OrderState,
   'settle-short': { sent: 'received', 'part-received': 'received' },
   close: { received: 'closed' },
   // Not once something was received: settle what is missing instead.
-  cancel: { draft: 'cancelled', submitted: 'cancelled', approved: 'cancelled', paid: 'cancelled', 'on-account': 'cancelled', sent: 'cancelled' },
+  cancel: {
+    draft: 'cancelled',
+    submitted: 'cancelled',
+    approved: 'cancelled',
+    paid: 'cancelled',
+    'on-account': 'cancelled',
+    sent: 'cancelled',
+  },
 };
 
 /** The state after the act, or null where the act is not possible in that state. */
@@ -33,4 +63,12 @@ export function orderActsIn(state: OrderState): readonly OrderAct[] {
 }
 
 /** Stock on these is on its way and counts against shortfalls. */
-export const ON_ORDER_STATES: readonly OrderState[] = ['draft', 'submitted', 'approved', 'paid', 'on-account', 'sent', 'part-received'];
+export const ON_ORDER_STATES: readonly OrderState[] = [
+  'draft',
+  'submitted',
+  'approved',
+  'paid',
+  'on-account',
+  'sent',
+  'part-received',
+];

@@ -20,7 +20,8 @@ import { refusePaymentUnderWay } from './payment-under-way';
 export const payOrder = errand({
   name: 'orders.pay',
   http: 'POST /orders/{orderId}/pay',
-  summary: 'Pay an approved order: `card` answers the address of a checkout, `on-account` books it on the supplier’s account.',
+  summary:
+    'Pay an approved order: `card` answers the address of a checkout, `on-account` books it on the supplier’s account.',
   roles: ['buyer', 'lead'],
   input: z.strictObject({ orderId: id(), way: z.enum(['card', 'on-account']) }),
   output: z.object({ id: id(), number: z.string(), state: z.enum(ORDER_STATES), checkoutUrl: z.string().nullable() }),
@@ -40,7 +41,8 @@ export const payOrder = errand({
       const order = await lockOrder(tx, actor.workshopId, input.orderId);
       stateAfter(order, 'pay');
       const from = await supplierOf(tx, actor.workshopId, order.supplierId);
-      if (from.paymentAccount === null) throw new Refusal('rule.forbids', `${from.name} takes no cards; put the order on account.`);
+      if (from.paymentAccount === null)
+        throw new Refusal('rule.forbids', `${from.name} takes no cards; put the order on account.`);
       const [last] = await tx
         .select()
         .from(payment)
@@ -48,10 +50,18 @@ export const payOrder = errand({
         .orderBy(desc(payment.attempt))
         .limit(1);
       // An open checkout is gone on with: two open ones could both be paid.
-      if (last && (last.state === 'open' || last.state === 'declined' || last.state === 'started')) return { order, supplier: from, row: last };
+      if (last && (last.state === 'open' || last.state === 'declined' || last.state === 'started'))
+        return { order, supplier: from, row: last };
       const [row] = await tx
         .insert(payment)
-        .values({ workshopId: order.workshopId, orderId: order.id, attempt: (last?.attempt ?? 0) + 1, amountMinor: order.totalMinor, currency: order.currency, createdBy: actor.personId })
+        .values({
+          workshopId: order.workshopId,
+          orderId: order.id,
+          attempt: (last?.attempt ?? 0) + 1,
+          amountMinor: order.totalMinor,
+          currency: order.currency,
+          createdBy: actor.personId,
+        })
         .returning();
       if (!row) throw new Error('the insert returned no row');
       record(order.id, { attempt: row.attempt, amountMinor: row.amountMinor });
@@ -59,7 +69,8 @@ export const payOrder = errand({
     });
 
     const { order, row } = attempt;
-    if (row.checkoutUrl !== null) return { id: order.id, number: order.number, state: order.state, checkoutUrl: row.checkoutUrl };
+    if (row.checkoutUrl !== null)
+      return { id: order.id, number: order.number, state: order.state, checkoutUrl: row.checkoutUrl };
     const made = await createCheckout({
       orderId: order.id,
       metadata: { workshop_id: order.workshopId, payment_id: row.id },
@@ -79,13 +90,20 @@ export const payOrder = errand({
           .set({ lastProblem: made.message, ...(isPassing(made) ? {} : { state: 'failed' }) })
           .where(and(eq(payment.workshopId, order.workshopId), eq(payment.id, row.id)));
       });
-      throw new Refusal(isPassing(made) ? 'service.away' : 'payment.refused', isPassing(made) ? 'The payment service does not answer right now. Nothing was paid; press again in a moment.' : `The payment service refused: ${made.message}`);
+      throw new Refusal(
+        isPassing(made) ? 'service.away' : 'payment.refused',
+        isPassing(made)
+          ? 'The payment service does not answer right now. Nothing was paid; press again in a moment.'
+          : `The payment service refused: ${made.message}`,
+      );
     }
     await step(async ({ tx }) => {
       await tx
         .update(payment)
         .set({ checkoutSessionId: made.checkout.id, checkoutUrl: made.checkout.url, state: 'open', lastProblem: null })
-        .where(and(eq(payment.workshopId, order.workshopId), eq(payment.id, row.id), inArray(payment.state, ['started'])));
+        .where(
+          and(eq(payment.workshopId, order.workshopId), eq(payment.id, row.id), inArray(payment.state, ['started'])),
+        );
     });
     return { id: order.id, number: order.number, state: order.state, checkoutUrl: made.checkout.url };
   },
@@ -104,7 +122,13 @@ export const giveUpPayment = errand({
       const [found] = await tx
         .select()
         .from(payment)
-        .where(and(eq(payment.workshopId, order.workshopId), eq(payment.orderId, order.id), inArray(payment.state, ['started', 'open', 'declined'])))
+        .where(
+          and(
+            eq(payment.workshopId, order.workshopId),
+            eq(payment.orderId, order.id),
+            inArray(payment.state, ['started', 'open', 'declined']),
+          ),
+        )
         .orderBy(desc(payment.attempt))
         .limit(1);
       if (!found) throw new Refusal('state.refused', `Order ${order.number} has no open payment.`);
@@ -113,13 +137,25 @@ export const giveUpPayment = errand({
     if (row.checkoutSessionId !== null) {
       // The service decides the race with somebody who is just paying: an already paid session can't be closed.
       const closed = await expireCheckout(row.checkoutSessionId);
-      if (!closed.ok) throw new Refusal(isPassing(closed) ? 'service.away' : 'state.refused', isPassing(closed) ? 'The payment service does not answer right now; press again in a moment.' : 'This checkout can’t be closed any more: it was paid or is closed already.');
+      if (!closed.ok)
+        throw new Refusal(
+          isPassing(closed) ? 'service.away' : 'state.refused',
+          isPassing(closed)
+            ? 'The payment service does not answer right now; press again in a moment.'
+            : 'This checkout can’t be closed any more: it was paid or is closed already.',
+        );
     }
     await step(async ({ tx, record }) => {
       await tx
         .update(payment)
         .set({ state: 'abandoned' })
-        .where(and(eq(payment.workshopId, actor.workshopId), eq(payment.id, row.id), inArray(payment.state, ['started', 'open', 'declined'])));
+        .where(
+          and(
+            eq(payment.workshopId, actor.workshopId),
+            eq(payment.id, row.id),
+            inArray(payment.state, ['started', 'open', 'declined']),
+          ),
+        );
       record(input.orderId, { attempt: row.attempt });
     });
     return { id: input.orderId, givenUp: true };

@@ -7,7 +7,12 @@ import { Refusal } from '@/lib/api/problem';
 
 const UNDER_WAY = ['started', 'open', 'declined'];
 
-export async function refusePaymentUnderWay(tx: Tx, workshopId: string, orderId: string, number: string): Promise<void> {
+export async function refusePaymentUnderWay(
+  tx: Tx,
+  workshopId: string,
+  orderId: string,
+  number: string,
+): Promise<void> {
   const [row] = await tx
     .select({ id: payment.id })
     .from(payment)

@@ -19,12 +19,21 @@ export async function refundPayment(job: HandledJob): Promise<void> {
   });
   if (!wish || wish.state !== 'asked') return;
   if (wish.paymentIntentId === null) throw new Error(`refund ${refundId} has no payment intent`);
-  const done = await refundAtService({ paymentIntentId: wish.paymentIntentId, amountMinor: wish.amountMinor, idempotencyKey: `refund:${refundId}`, reverseTransfer: true });
+  const done = await refundAtService({
+    paymentIntentId: wish.paymentIntentId,
+    amountMinor: wish.amountMinor,
+    idempotencyKey: `refund:${refundId}`,
+    reverseTransfer: true,
+  });
   if (!done.ok && isPassing(done)) throw new Error(`the payment service does not answer: ${done.message}`);
   await withWorkshop(job.workshopId, (tx) =>
     tx
       .update(refund)
-      .set(done.ok ? { state: 'done', providerId: done.refund.id, lastProblem: null } : { state: 'failed', lastProblem: done.message })
+      .set(
+        done.ok
+          ? { state: 'done', providerId: done.refund.id, lastProblem: null }
+          : { state: 'failed', lastProblem: done.message },
+      )
       .where(and(eq(refund.workshopId, job.workshopId), eq(refund.id, refundId), eq(refund.state, 'asked'))),
   );
 }

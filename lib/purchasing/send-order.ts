@@ -36,7 +36,16 @@ export const sendOrder = command({
     const expectedOn = new Date(now.getTime() + days * 86_400_000).toISOString().slice(0, 10);
     const sent = await moveOrder(tx, order, next, { sentAt: now, expectedOn });
     const subject = `Order ${order.number} from ${actor.workshopName}`;
-    await tx.insert(orderMail).values({ workshopId: order.workshopId, orderId: order.id, messageId: `order:${order.id}`, to: from.email, subject, detail: { attachments: [`order-${order.number}.pdf`, `order-${order.number}.csv`] } });
+    await tx
+      .insert(orderMail)
+      .values({
+        workshopId: order.workshopId,
+        orderId: order.id,
+        messageId: `order:${order.id}`,
+        to: from.email,
+        subject,
+        detail: { attachments: [`order-${order.number}.pdf`, `order-${order.number}.csv`] },
+      });
     await enqueue({ queue: 'send-order', payload: { orderId: order.id } });
     record(order.id, { to: from.email, expectedOn });
     return { id: sent.id, number: sent.number, state: sent.state, expectedOn };
@@ -51,7 +60,10 @@ export async function documentOf(tx: Tx, workshopId: string, orderId: string): P
     .where(and(eq(purchaseOrder.workshopId, workshopId), eq(purchaseOrder.id, orderId)));
   if (!order) throw notFound('order');
   const from = await supplierOf(tx, workshopId, order.supplierId);
-  const [house] = await tx.select({ name: workshop.name, letterhead: workshop.letterhead }).from(workshop).where(eq(workshop.id, workshopId));
+  const [house] = await tx
+    .select({ name: workshop.name, letterhead: workshop.letterhead })
+    .from(workshop)
+    .where(eq(workshop.id, workshopId));
   const [buyer] = await tx
     .select({ name: person.name })
     .from(person)
@@ -113,7 +125,11 @@ export async function mailOrder(job: HandledJob): Promise<void> {
 
 const asFile = (bytes: Buffer | string, type: string, name: string): Response =>
   new Response(typeof bytes === 'string' ? bytes : new Uint8Array(bytes), {
-    headers: { 'content-type': type, 'content-disposition': `attachment; filename="${name}"`, 'cache-control': 'no-store' },
+    headers: {
+      'content-type': type,
+      'content-disposition': `attachment; filename="${name}"`,
+      'cache-control': 'no-store',
+    },
   });
 
 export const orderAsPdf = query({

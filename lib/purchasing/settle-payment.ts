@@ -35,10 +35,17 @@ export async function acceptPaymentEvent(event: unknown): Promise<'queued' | 're
   const { id, type, data } = parsed.data;
   const workshopId = data.object.metadata?.workshop_id;
   return withScope('inbox', async (tx) => {
-    const made = await tx.insert(paymentEvent).values({ id, type, payload: event }).onConflictDoNothing().returning({ id: paymentEvent.id });
+    const made = await tx
+      .insert(paymentEvent)
+      .values({ id, type, payload: event })
+      .onConflictDoNothing()
+      .returning({ id: paymentEvent.id });
     if (made.length === 0) return 'repeat';
     if (workshopId === undefined) {
-      await tx.update(paymentEvent).set({ processedAt: new Date(), outcome: 'not ours: no workshop in its metadata' }).where(eq(paymentEvent.id, id));
+      await tx
+        .update(paymentEvent)
+        .set({ processedAt: new Date(), outcome: 'not ours: no workshop in its metadata' })
+        .where(eq(paymentEvent.id, id));
       return 'not-ours';
     }
     await tx.insert(outbox).values({ workshopId, queue: 'payment-event', payload: { eventId: id } });
@@ -55,14 +62,17 @@ export async function handlePaymentEvent(job: HandledJob): Promise<void> {
   if (!stored || stored.processedAt !== null) return;
   const event = checkoutEvent.parse(stored.payload);
   const outcome = await outcomeOf(event, job.workshopId);
-  await withScope('inbox', (tx) => tx.update(paymentEvent).set({ processedAt: new Date(), outcome }).where(eq(paymentEvent.id, eventId)));
+  await withScope('inbox', (tx) =>
+    tx.update(paymentEvent).set({ processedAt: new Date(), outcome }).where(eq(paymentEvent.id, eventId)),
+  );
 }
 
 async function outcomeOf(event: z.infer<typeof checkoutEvent>, workshopId: string): Promise<string> {
   const { object } = event.data;
   if (event.type.startsWith('checkout.session.')) return settleCheckout(workshopId, object.id);
   const paymentId = object.metadata?.payment_id;
-  if (event.type === 'payment_intent.payment_failed' && paymentId !== undefined) return noteDecline(workshopId, paymentId);
+  if (event.type === 'payment_intent.payment_failed' && paymentId !== undefined)
+    return noteDecline(workshopId, paymentId);
   return `nothing to do for ${event.type}`;
 }
 
@@ -102,30 +112,73 @@ export async function settleCheckout(workshopId: string, sessionId: string): Pro
   });
 }
 
-async function bookPaid(tx: Tx, order: Awaited<ReturnType<typeof lockOrder>>, row: typeof payment.$inferSelect, now: Checkout): Promise<string> {
+async function bookPaid(
+  tx: Tx,
+  order: Awaited<ReturnType<typeof lockOrder>>,
+  row: typeof payment.$inferSelect,
+  now: Checkout,
+): Promise<string> {
   const { workshopId } = order;
   await tx
     .update(payment)
-    .set({ state: 'paid', paidAt: new Date(), checkoutSessionId: now.id, paymentIntentId: now.paymentIntentId, lastProblem: null })
+    .set({
+      state: 'paid',
+      paidAt: new Date(),
+      checkoutSessionId: now.id,
+      paymentIntentId: now.paymentIntentId,
+      lastProblem: null,
+    })
     .where(and(eq(payment.workshopId, workshopId), eq(payment.id, row.id)));
   const others = await tx
     .select({ id: payment.id })
     .from(payment)
-    .where(and(eq(payment.workshopId, workshopId), eq(payment.orderId, order.id), eq(payment.state, 'paid'), ne(payment.id, row.id)))
+    .where(
+      and(
+        eq(payment.workshopId, workshopId),
+        eq(payment.orderId, order.id),
+        eq(payment.state, 'paid'),
+        ne(payment.id, row.id),
+      ),
+    )
     .limit(1);
   const next = orderStateAfter(order.state, 'pay');
   const amountRight = now.amountMinor === order.totalMinor && now.currency === order.currency;
   if (next !== null && others.length === 0 && amountRight) {
     await moveOrder(tx, order, next);
-    await tx.insert(auditEvent).values({ workshopId, command: 'payments.settle', subjectId: order.id, detail: { attempt: row.attempt, amountMinor: now.amountMinor }, requestId: row.id });
-    await tellBuyer(tx, order, `Order ${order.number} is paid`, [`${moneyText(now.amountMinor, now.currency)} were paid by card.`, 'It can be sent to the supplier now.'], `paid:${row.id}`);
+    await tx
+      .insert(auditEvent)
+      .values({
+        workshopId,
+        command: 'payments.settle',
+        subjectId: order.id,
+        detail: { attempt: row.attempt, amountMinor: now.amountMinor },
+        requestId: row.id,
+      });
+    await tellBuyer(
+      tx,
+      order,
+      `Order ${order.number} is paid`,
+      [`${moneyText(now.amountMinor, now.currency)} were paid by card.`, 'It can be sent to the supplier now.'],
+      `paid:${row.id}`,
+    );
     return 'the order is paid';
   }
   // Paid, but not wanted: paid twice, or after the order was cancelled or went on account. The money goes back whole.
-  const why = others.length > 0 ? 'it was paid twice' : amountRight ? `the order was ${order.state} already` : 'the amount is not the order’s';
+  const why =
+    others.length > 0
+      ? 'it was paid twice'
+      : amountRight
+        ? `the order was ${order.state} already`
+        : 'the amount is not the order’s';
   log.warn({ order: order.id, attempt: row.attempt, why }, 'a payment goes back');
   await askForRefund(tx, { workshopId, paymentId: row.id, amountMinor: now.amountMinor, reason: why, createdBy: null });
-  await tellBuyer(tx, order, `A payment for order ${order.number} goes back`, [`${moneyText(now.amountMinor, now.currency)} go back to the card, because ${why}.`], `paid-back:${row.id}`);
+  await tellBuyer(
+    tx,
+    order,
+    `A payment for order ${order.number} goes back`,
+    [`${moneyText(now.amountMinor, now.currency)} go back to the card, because ${why}.`],
+    `paid-back:${row.id}`,
+  );
   return `refunded: ${why}`;
 }
 
@@ -143,15 +196,26 @@ async function noteDecline(workshopId: string, paymentId: string): Promise<strin
       .where(and(eq(payment.workshopId, workshopId), eq(payment.id, paymentId), eq(payment.state, 'open')))
       .returning({ attempt: payment.attempt });
     if (changed.length === 0) return 'nothing open to decline';
-    await tellBuyer(tx, order, `The card for order ${order.number} was declined`, ['Nothing was paid. The checkout stays open: try another card, or give the payment up and choose another way.'], `declined:${paymentId}:${changed[0]?.attempt ?? 0}`);
+    await tellBuyer(
+      tx,
+      order,
+      `The card for order ${order.number} was declined`,
+      ['Nothing was paid. The checkout stays open: try another card, or give the payment up and choose another way.'],
+      `declined:${paymentId}:${changed[0]?.attempt ?? 0}`,
+    );
     return 'declined';
   });
 }
 
 /** Writes a refund and its job; the sum of all refunds of a payment never exceeds it (checked under the order's lock). */
-export async function askForRefund(tx: Tx, wish: { workshopId: string; paymentId: string; amountMinor: number; reason: string; createdBy: string | null }): Promise<string> {
+export async function askForRefund(
+  tx: Tx,
+  wish: { workshopId: string; paymentId: string; amountMinor: number; reason: string; createdBy: string | null },
+): Promise<string> {
   const [row] = await tx.insert(refund).values(wish).returning({ id: refund.id });
   if (!row) throw new Error('the insert returned no row');
-  await tx.insert(outbox).values({ workshopId: wish.workshopId, queue: 'refund-payment', payload: { refundId: row.id } });
+  await tx
+    .insert(outbox)
+    .values({ workshopId: wish.workshopId, queue: 'refund-payment', payload: { refundId: row.id } });
   return row.id;
 }

@@ -13,7 +13,14 @@ import { ON_ORDER_STATES } from './order-states';
 
 const MOST_SHORTFALLS = 2_000;
 
-const waiting = z.object({ batchId: id(), number: z.string(), circuit: z.string(), quantity: z.number().int(), neededBy: z.string().nullable(), designators: z.array(z.string()) });
+const waiting = z.object({
+  batchId: id(),
+  number: z.string(),
+  circuit: z.string(),
+  quantity: z.number().int(),
+  neededBy: z.string().nullable(),
+  designators: z.array(z.string()),
+});
 const purchase = z.object({
   offerId: id(),
   supplierId: id(),
@@ -41,7 +48,16 @@ const shortfall = z.object({
   purchases: z.array(purchase),
 });
 export type Shortfall = z.output<typeof shortfall>;
-const undecided = z.object({ batchId: id(), number: z.string(), circuit: z.string(), lineId: id(), revisionId: id(), text: z.string(), designators: z.array(z.string()), quantity: z.number().int() });
+const undecided = z.object({
+  batchId: id(),
+  number: z.string(),
+  circuit: z.string(),
+  lineId: id(),
+  revisionId: id(),
+  text: z.string(),
+  designators: z.array(z.string()),
+  quantity: z.number().int(),
+});
 
 interface Row extends Record<string, unknown> {
   part_id: string;
@@ -53,7 +69,19 @@ interface Row extends Record<string, unknown> {
   reorder_point: number | null;
   reorder_quantity: number | null;
   waiting: z.output<typeof waiting>[] | null;
-  offers: { offerId: string; supplierId: string; supplierName: string; supplierCode: string; currency: string; orderMultiple: number; minimumQuantity: number; leadTimeDays: number; breaks: Break[] }[] | null;
+  offers:
+    | {
+        offerId: string;
+        supplierId: string;
+        supplierName: string;
+        supplierCode: string;
+        currency: string;
+        orderMultiple: number;
+        minimumQuantity: number;
+        leadTimeDays: number;
+        breaks: Break[];
+      }[]
+    | null;
 }
 
 export async function findShortfalls(tx: Tx, workshopId: string): Promise<Shortfall[]> {
@@ -111,12 +139,17 @@ function toShortfall(row: Row): Shortfall {
   const left = row.free + row.on_order - row.needed;
   const low = row.reorder_point !== null && left < row.reorder_point;
   // Buying for a batch and the shelf at once: up to the reorder point at least, by the usual quantity where one is set.
-  const short = Math.max(forBatches, low ? forBatches + Math.max(row.reorder_quantity ?? 0, (row.reorder_point ?? 0) - Math.max(left, 0)) : 0);
+  const short = Math.max(
+    forBatches,
+    low ? forBatches + Math.max(row.reorder_quantity ?? 0, (row.reorder_point ?? 0) - Math.max(left, 0)) : 0,
+  );
   const purchases = (row.offers ?? []).flatMap(({ orderMultiple, minimumQuantity, breaks, ...offer }) => {
     const best = cheapestPurchase(short, { orderMultiple, minimumQuantity, breaks, currency: offer.currency });
     return best === null ? [] : [{ ...offer, ...best }];
   });
-  purchases.sort((a, b) => a.currency.localeCompare(b.currency) || a.totalMinor - b.totalMinor || a.leadTimeDays - b.leadTimeDays);
+  purchases.sort(
+    (a, b) => a.currency.localeCompare(b.currency) || a.totalMinor - b.totalMinor || a.leadTimeDays - b.leadTimeDays,
+  );
   return {
     partId: row.part_id,
     partName: row.part_name,
@@ -138,7 +171,11 @@ export const listShortfalls = query({
   summary: 'What is short for batches and below reorder points, with who waits and what each supplier would charge.',
   roles: 'everyone',
   input: z.strictObject({}),
-  output: z.object({ shortfalls: z.array(shortfall), undecided: z.array(undecided), totals: z.array(z.object({ currency: z.string(), totalMinor: z.number().int(), text: z.string() })) }),
+  output: z.object({
+    shortfalls: z.array(shortfall),
+    undecided: z.array(undecided),
+    totals: z.array(z.object({ currency: z.string(), totalMinor: z.number().int(), text: z.string() })),
+  }),
   async run({ tx, actor }) {
     const shortfalls = await findShortfalls(tx, actor.workshopId);
     const open = await tx.execute<{ row: z.output<typeof undecided> }>(sql`
@@ -159,7 +196,11 @@ export const listShortfalls = query({
     return {
       shortfalls,
       undecided: open.rows.map(({ row }) => row),
-      totals: [...totals].map(([currency, totalMinor]) => ({ currency, totalMinor, text: moneyText(totalMinor, currency) })),
+      totals: [...totals].map(([currency, totalMinor]) => ({
+        currency,
+        totalMinor,
+        text: moneyText(totalMinor, currency),
+      })),
     };
   },
 });

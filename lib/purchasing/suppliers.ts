@@ -8,7 +8,10 @@ import { id, pageFields, pageOf, words } from '@/lib/api/fields';
 import { notFound, Refusal } from '@/lib/api/problem';
 import { command, query } from '@/lib/api/use-case';
 
-const currency = z.string().regex(/^[A-Z]{3}$/, 'is not an ISO 4217 currency such as EUR').refine((code) => Intl.supportedValuesOf('currency').includes(code), 'is not an ISO 4217 currency that is in use');
+const currency = z
+  .string()
+  .regex(/^[A-Z]{3}$/, 'is not an ISO 4217 currency such as EUR')
+  .refine((code) => Intl.supportedValuesOf('currency').includes(code), 'is not an ISO 4217 currency that is in use');
 const minor = z.number().int().min(0).max(100_000_000);
 
 const supplierFields = {
@@ -16,7 +19,11 @@ const supplierFields = {
   email: z.email('is not an e-mail address').max(254),
   address: z.string().trim().max(500).default(''),
   currency,
-  paymentAccount: z.string().regex(/^acct_[A-Za-z0-9]{6,60}$/, 'is not a connected account of the payment service').nullable().default(null),
+  paymentAccount: z
+    .string()
+    .regex(/^acct_[A-Za-z0-9]{6,60}$/, 'is not a connected account of the payment service')
+    .nullable()
+    .default(null),
   postageMinor: minor.default(0),
   postageFreeFromMinor: minor.nullable().default(null),
   minimumOrderMinor: minor.default(0),
@@ -56,7 +63,10 @@ export const changeSupplier = command({
       .where(and(eq(supplier.workshopId, actor.workshopId), eq(supplier.id, supplierId)))
       .for('update');
     if (!held) throw notFound('supplier');
-    if (held.version !== version) throw new Refusal('version.stale', 'Somebody changed this supplier since you looked.', { more: { version: held.version } });
+    if (held.version !== version)
+      throw new Refusal('version.stale', 'Somebody changed this supplier since you looked.', {
+        more: { version: held.version },
+      });
     const [row] = await tx
       .update(supplier)
       .set({ ...fields, version: version + 1 })
@@ -112,15 +122,31 @@ export const listSuppliers = query({
       .orderBy(asc(supplier.name))
       .limit(input.size)
       .offset((input.page - 1) * input.size);
-    return { rows: rows.map(({ total: _, ...row }) => row), total: rows[0]?.total ?? 0, page: input.page, size: input.size };
+    return {
+      rows: rows.map(({ total: _, ...row }) => row),
+      total: rows[0]?.total ?? 0,
+      page: input.page,
+      size: input.size,
+    };
   },
 });
 
 const breaks = z
-  .array(z.strictObject({ fromQuantity: z.number().int().min(1).max(10_000_000), unitPrice: z.string().regex(/^\d{1,9}(\.\d{1,6})?$/, 'is not a price with at most six places').refine((price) => /[1-9]/.test(price), 'is nothing') }))
+  .array(
+    z.strictObject({
+      fromQuantity: z.number().int().min(1).max(10_000_000),
+      unitPrice: z
+        .string()
+        .regex(/^\d{1,9}(\.\d{1,6})?$/, 'is not a price with at most six places')
+        .refine((price) => /[1-9]/.test(price), 'is nothing'),
+    }),
+  )
   .min(1, 'needs at least one price')
   .max(30)
-  .refine((list) => new Set(list.map((step) => step.fromQuantity)).size === list.length, 'has two breaks at one quantity');
+  .refine(
+    (list) => new Set(list.map((step) => step.fromQuantity)).size === list.length,
+    'has two breaks at one quantity',
+  );
 
 export const setOffer = command({
   name: 'offers.set',
@@ -155,14 +181,22 @@ export const setOffer = command({
       .values({ ...fields, workshopId: actor.workshopId })
       .onConflictDoUpdate({
         target: [offer.workshopId, offer.supplierId, offer.supplierCode],
-        set: { orderMultiple: fields.orderMultiple, minimumQuantity: fields.minimumQuantity, leadTimeDays: fields.leadTimeDays, retiredAt: null },
+        set: {
+          orderMultiple: fields.orderMultiple,
+          minimumQuantity: fields.minimumQuantity,
+          leadTimeDays: fields.leadTimeDays,
+          retiredAt: null,
+        },
         // A supplier's code names one part; another part under it is a mistake, not a change.
         setWhere: eq(offer.partId, fields.partId),
       })
       .returning({ id: offer.id });
-    if (!row) throw new Refusal('conflict', `This supplier’s code ${input.supplierCode} already stands for another part.`);
+    if (!row)
+      throw new Refusal('conflict', `This supplier’s code ${input.supplierCode} already stands for another part.`);
     await tx.delete(offerBreak).where(and(eq(offerBreak.workshopId, actor.workshopId), eq(offerBreak.offerId, row.id)));
-    await tx.insert(offerBreak).values(steps.map((step) => ({ ...step, workshopId: actor.workshopId, offerId: row.id })));
+    await tx
+      .insert(offerBreak)
+      .values(steps.map((step) => ({ ...step, workshopId: actor.workshopId, offerId: row.id })));
     record(row.id, { supplierCode: input.supplierCode, breaks: steps });
     return row;
   },
@@ -202,7 +236,9 @@ export const listOffers = query({
         orderMultiple: offer.orderMultiple,
         minimumQuantity: offer.minimumQuantity,
         leadTimeDays: sql<number>`coalesce(${offer.leadTimeDays}, ${supplier.leadTimeDays})`,
-        breaks: sql<{ fromQuantity: number; unitPrice: string }[]>`(select coalesce(json_agg(json_build_object('fromQuantity', b.from_quantity, 'unitPrice', trim_scale(b.unit_price)::text) order by b.from_quantity), '[]') from ${offerBreak} b where b.workshop_id = ${offer.workshopId} and b.offer_id = ${offer.id})`,
+        breaks: sql<
+          { fromQuantity: number; unitPrice: string }[]
+        >`(select coalesce(json_agg(json_build_object('fromQuantity', b.from_quantity, 'unitPrice', trim_scale(b.unit_price)::text) order by b.from_quantity), '[]') from ${offerBreak} b where b.workshop_id = ${offer.workshopId} and b.offer_id = ${offer.id})`,
         total: sql<number>`count(*) over ()::int`,
       })
       .from(offer)
@@ -219,6 +255,11 @@ export const listOffers = query({
       .orderBy(asc(part.name), asc(supplier.name))
       .limit(input.size)
       .offset((input.page - 1) * input.size);
-    return { rows: found.map(({ total: _, ...row }) => row), total: found[0]?.total ?? 0, page: input.page, size: input.size };
+    return {
+      rows: found.map(({ total: _, ...row }) => row),
+      total: found[0]?.total ?? 0,
+      page: input.page,
+      size: input.size,
+    };
   },
 });

@@ -7,7 +7,13 @@ import { outbox } from '@/db/schema/records';
 import { letter, ownUrl } from '@/lib/auth/auth-mail';
 import type { OrderRow } from './locked-order';
 
-export async function tellBuyer(tx: Tx, order: Pick<OrderRow, 'workshopId' | 'id' | 'createdBy' | 'submittedBy'>, subject: string, lines: readonly string[], cause: string): Promise<void> {
+export async function tellBuyer(
+  tx: Tx,
+  order: Pick<OrderRow, 'workshopId' | 'id' | 'createdBy' | 'submittedBy'>,
+  subject: string,
+  lines: readonly string[],
+  cause: string,
+): Promise<void> {
   const [buyer] = await tx
     .select({ name: person.name, email: person.email })
     .from(person)

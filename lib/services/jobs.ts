@@ -25,26 +25,49 @@ const RELAY_AT_ONCE = 100;
 const HEARTBEAT_EVERY_MS = 5_000;
 export const HEARTBEAT_NAME = 'jobs';
 
-export async function startJobs(connectionString: string, handlers: Partial<Record<Queue, JobHandler>>): Promise<{ stop(): Promise<void> }> {
-  const boss = new PgBoss({ connectionString, schema: 'pgboss', migrate: false, max: 4, application_name: 'ohmstead-jobs' });
+export async function startJobs(
+  connectionString: string,
+  handlers: Partial<Record<Queue, JobHandler>>,
+): Promise<{ stop(): Promise<void> }> {
+  const boss = new PgBoss({
+    connectionString,
+    schema: 'pgboss',
+    migrate: false,
+    max: 4,
+    application_name: 'ohmstead-jobs',
+  });
   boss.on('error', (error) => log.warn({ err: error }, 'queue error'));
   await boss.start();
   for (const [queue, handle] of Object.entries(handlers) as [Queue, JobHandler][]) {
-    await boss.work<{ workshopId: string; payload: Record<string, unknown> }>(queue, { pollingIntervalSeconds: 0.5, batchSize: 1 }, async (jobs) => {
-      for (const job of jobs) {
-        try {
-          await handle({ id: job.id, workshopId: job.data.workshopId, payload: job.data.payload });
-        } catch (error) {
-          log.warn({ queue, job: job.id, err: error }, 'job failed; it will be tried again');
-          throw error;
+    await boss.work<{ workshopId: string; payload: Record<string, unknown> }>(
+      queue,
+      { pollingIntervalSeconds: 0.5, batchSize: 1 },
+      async (jobs) => {
+        for (const job of jobs) {
+          try {
+            await handle({ id: job.id, workshopId: job.data.workshopId, payload: job.data.payload });
+          } catch (error) {
+            log.warn({ queue, job: job.id, err: error }, 'job failed; it will be tried again');
+            throw error;
+          }
         }
-      }
-    });
+      },
+    );
   }
   let stopped = false;
-  const loops = [repeat(RELAY_EVERY_MS, () => relay(boss), () => stopped),
-    repeat(RELAY_EVERY_MS, () => relayAuthMail(boss), () => stopped),
-    repeat(HEARTBEAT_EVERY_MS, beat, () => stopped)];
+  const loops = [
+    repeat(
+      RELAY_EVERY_MS,
+      () => relay(boss),
+      () => stopped,
+    ),
+    repeat(
+      RELAY_EVERY_MS,
+      () => relayAuthMail(boss),
+      () => stopped,
+    ),
+    repeat(HEARTBEAT_EVERY_MS, beat, () => stopped),
+  ];
   return {
     async stop() {
       stopped = true;
@@ -77,7 +100,11 @@ async function relay(boss: PgBoss): Promise<void> {
       .for('update', { skipLocked: true });
     if (waiting.length === 0) return;
     await boss.insert(
-      waiting.map((row) => ({ id: row.id, name: row.queue, data: { workshopId: row.workshopId, payload: row.payload } })),
+      waiting.map((row) => ({
+        id: row.id,
+        name: row.queue,
+        data: { workshopId: row.workshopId, payload: row.payload },
+      })),
     );
     await tx
       .update(outbox)
@@ -94,9 +121,17 @@ async function relay(boss: PgBoss): Promise<void> {
 /** Mails written before a workshop was known (links, resets) join the same queue. */
 async function relayAuthMail(boss: PgBoss): Promise<void> {
   await withScope('auth', async (tx) => {
-    const waiting = await tx.select().from(authMail).where(isNull(authMail.relayedAt)).orderBy(asc(authMail.createdAt)).limit(RELAY_AT_ONCE).for('update', { skipLocked: true });
+    const waiting = await tx
+      .select()
+      .from(authMail)
+      .where(isNull(authMail.relayedAt))
+      .orderBy(asc(authMail.createdAt))
+      .limit(RELAY_AT_ONCE)
+      .for('update', { skipLocked: true });
     if (waiting.length === 0) return;
-    await boss.insert(waiting.map((row) => ({ id: row.id, name: 'send-mail', data: { workshopId: '', payload: row.payload } })));
+    await boss.insert(
+      waiting.map((row) => ({ id: row.id, name: 'send-mail', data: { workshopId: '', payload: row.payload } })),
+    );
     // The link in the mail is a secret: once relayed, only the queue holds it, until the mail is out.
     await tx
       .update(authMail)

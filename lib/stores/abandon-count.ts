@@ -18,6 +18,12 @@ export const abandonCount = command({
     const next = countAfter(count, 'abandon');
     await moveCount(tx, count, next);
     record(count.id);
-    return { id: count.id, number: count.number, state: next, entered: 0, ...(await openIn(tx, actor.workshopId, count.id)) };
+    return {
+      id: count.id,
+      number: count.number,
+      state: next,
+      entered: 0,
+      ...(await openIn(tx, actor.workshopId, count.id)),
+    };
   },
 });

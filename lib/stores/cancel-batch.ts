@@ -21,7 +21,12 @@ export const cancelBatch = command({
     const batch = await lockBatch(tx, actor.workshopId, input.batchId);
     const next = batchAfter(batch, 'cancel');
     const out = await pickedOf(tx, batch);
-    const movements = await prepareReturns(tx, batch, out.map((from) => ({ from, quantity: from.picked, binId: null })), `batch ${batch.number} cancelled`);
+    const movements = await prepareReturns(
+      tx,
+      batch,
+      out.map((from) => ({ from, quantity: from.picked, binId: null })),
+      `batch ${batch.number} cancelled`,
+    );
     const releasedReservations = await releaseOpen(tx, batch);
     await recordMovements(context, movements);
     await moveBatch(tx, batch, next);

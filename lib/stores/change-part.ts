@@ -15,7 +15,8 @@ export const reorderFields = {
 export const changePart = command({
   name: 'parts.change',
   http: 'PATCH /parts/{partId}',
-  summary: 'Change a part’s name, description, number or reorder figures; what is left out stays. Carries the version it was seen at.',
+  summary:
+    'Change a part’s name, description, number or reorder figures; what is left out stays. Carries the version it was seen at.',
   roles: ['storekeeper', 'buyer', 'lead'],
   input: z.strictObject({
     partId: id(),
@@ -37,11 +38,22 @@ export const changePart = command({
       .returning({ id: part.id, version: part.version });
     if (!row) {
       const [held] = await tx
-        .select({ version: part.version, name: part.name, description: part.description, partNumber: part.partNumber, reorderPoint: part.reorderPoint, reorderQuantity: part.reorderQuantity })
+        .select({
+          version: part.version,
+          name: part.name,
+          description: part.description,
+          partNumber: part.partNumber,
+          reorderPoint: part.reorderPoint,
+          reorderQuantity: part.reorderQuantity,
+        })
         .from(part)
         .where(own);
       if (!held) throw notFound('part');
-      throw new Refusal('version.stale', 'Somebody changed this part since you looked. Nothing of yours was kept; look at theirs and change it again.', { more: held });
+      throw new Refusal(
+        'version.stale',
+        'Somebody changed this part since you looked. Nothing of yours was kept; look at theirs and change it again.',
+        { more: held },
+      );
     }
     record(partId, changes);
     return row;

@@ -53,15 +53,31 @@ export const createBatch = command({
       .where(and(eq(revision.workshopId, actor.workshopId), eq(revision.id, input.revisionId)))
       .for('share');
     if (!from) throw notFound('revision');
-    if (from.state !== 'frozen') throw new Refusal('state.refused', `Revision ${from.name} is still a draft. Answer its questions and freeze it first.`);
+    if (from.state !== 'frozen')
+      throw new Refusal(
+        'state.refused',
+        `Revision ${from.name} is still a draft. Answer its questions and freeze it first.`,
+      );
     // batch_need.quantity is an integer; a list that asks for more than that is a misreading.
     const most = await tx.execute<{ most: string | null }>(sql`
       select max(l.quantity::bigint * ${input.units})::text as most from line l where l.workshop_id = ${actor.workshopId} and l.revision_id = ${from.id} and l.fitted`);
-    if (Number(most.rows[0]?.most ?? 0) > MOST_OF_A_LINE) throw new Refusal('rule.forbids', `${input.units} units would need more than ${MOST_OF_A_LINE} of one line. Make smaller batches.`);
+    if (Number(most.rows[0]?.most ?? 0) > MOST_OF_A_LINE)
+      throw new Refusal(
+        'rule.forbids',
+        `${input.units} units would need more than ${MOST_OF_A_LINE} of one line. Make smaller batches.`,
+      );
     const number = await nextNumber(tx, actor.workshopId, 'batch');
     const [made] = await tx
       .insert(batch)
-      .values({ workshopId: actor.workshopId, number, revisionId: from.id, units: input.units, neededBy: input.neededBy ?? null, priority: input.priority, createdBy: actor.personId })
+      .values({
+        workshopId: actor.workshopId,
+        number,
+        revisionId: from.id,
+        units: input.units,
+        neededBy: input.neededBy ?? null,
+        priority: input.priority,
+        createdBy: actor.personId,
+      })
       .returning({ id: batch.id });
     if (!made) throw new Error('the insert returned no row');
     const needs = await tx.execute<{ part_id: string | null }>(sql`
@@ -70,7 +86,8 @@ export const createBatch = command({
         from line l
        where l.workshop_id = ${actor.workshopId} and l.revision_id = ${from.id} and l.fitted and l.quantity > 0
       returning part_id`);
-    if (needs.rows.length === 0) throw new Refusal('rule.forbids', `Revision ${from.name} has no fitted line that needs a part.`);
+    if (needs.rows.length === 0)
+      throw new Refusal('rule.forbids', `Revision ${from.name} has no fitted line that needs a part.`);
     const withoutPart = needs.rows.filter((need) => need.part_id === null).length;
     record(made.id, { number, units: input.units, needs: needs.rows.length, withoutPart });
     return { id: made.id, number, needs: needs.rows.length, withoutPart };

@@ -24,13 +24,26 @@ export const createBins = command({
       .for('share');
     if (!place) throw notFound('cabinet');
     const planned = expandBinPattern(input.pattern);
-    const refuse = (why: string) => new Refusal('input.invalid', `The pattern ${why}.`, { errors: [{ pointer: '/pattern', code: 'pattern', detail: why }] });
+    const refuse = (why: string) =>
+      new Refusal('input.invalid', `The pattern ${why}.`, {
+        errors: [{ pointer: '/pattern', code: 'pattern', detail: why }],
+      });
     if (!planned.ok) throw refuse(planned.why);
     const outside = planned.bins.find((one) => one.column > place.columns || one.row > place.rows);
-    if (outside) throw refuse(`puts ${outside.code} at column ${outside.column}, row ${outside.row}; cabinet ${place.code} has ${place.columns} columns of ${place.rows}`);
+    if (outside)
+      throw refuse(
+        `puts ${outside.code} at column ${outside.column}, row ${outside.row}; cabinet ${place.code} has ${place.columns} columns of ${place.rows}`,
+      );
     const made = await tx
       .insert(bin)
-      .values(planned.bins.map((one) => ({ ...one, workshopId: actor.workshopId, cabinetId: place.id, capacity: input.capacity })))
+      .values(
+        planned.bins.map((one) => ({
+          ...one,
+          workshopId: actor.workshopId,
+          cabinetId: place.id,
+          capacity: input.capacity,
+        })),
+      )
       .returning({ id: bin.id, code: bin.code });
     record(place.id, { pattern: input.pattern, bins: made.length });
     return { bins: made };

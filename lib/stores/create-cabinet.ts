@@ -26,7 +26,10 @@ export const createCabinet = command({
   output: z.object({ id: id(), bins: z.number().int() }),
   async run({ tx, actor, input, record }) {
     const { capacity: units, withBins, ...fields } = input;
-    const [made] = await tx.insert(cabinet).values({ ...fields, workshopId: actor.workshopId }).returning({ id: cabinet.id });
+    const [made] = await tx
+      .insert(cabinet)
+      .values({ ...fields, workshopId: actor.workshopId })
+      .returning({ id: cabinet.id });
     if (!made) throw new Error('the insert returned no row');
     const places = withBins ? input.columns * input.rows : 0;
     if (places > 0) {

@@ -38,20 +38,32 @@ export const createPart = command({
   }),
   output: z.object({ id: id(), name: z.string(), kind, safety: z.boolean() }),
   async run({ tx, actor, input, record, enqueue }) {
-    const [shop] = await tx.select({ convention: workshop.taperConvention }).from(workshop).where(eq(workshop.id, actor.workshopId));
-    const spec = readPartText(input.text, { kind: input.kind ?? null, taperConvention: conventions.parse(shop?.convention ?? 'ask') });
+    const [shop] = await tx
+      .select({ convention: workshop.taperConvention })
+      .from(workshop)
+      .where(eq(workshop.id, actor.workshopId));
+    const spec = readPartText(input.text, {
+      kind: input.kind ?? null,
+      taperConvention: conventions.parse(shop?.convention ?? 'ask'),
+    });
     if (spec.kind === null) {
       const detail = `“${input.text}” does not say what kind of part it is. Choose the kind.`;
-      throw new Refusal('input.invalid', detail, { errors: [{ pointer: '/kind', code: 'required', detail: 'choose the kind' }] });
+      throw new Refusal('input.invalid', detail, {
+        errors: [{ pointer: '/kind', code: 'required', detail: 'choose the kind' }],
+      });
     }
     const doubt = spec.doubts[0];
     const settled = input.taper !== undefined && spec.doubts.every((one) => one.code.startsWith('taper'));
     if (doubt && !settled) {
       const pointer = doubt.code.startsWith('taper') ? '/taper' : '/text';
-      throw new Refusal('input.invalid', doubt.ask, { errors: [{ pointer, code: doubt.code, detail: doubt.options.join(', ') }], more: { options: doubt.options } });
+      throw new Refusal('input.invalid', doubt.ask, {
+        errors: [{ pointer, code: doubt.code, detail: doubt.options.join(', ') }],
+        more: { options: doubt.options },
+      });
     }
     const name = input.name ?? (input.text.length > 80 ? input.text.slice(0, 80).trim() : input.text);
-    const safety = input.safety || SAFETY_KINDS.includes(spec.kind) || SAFETY_WORDS.test(`${input.text} ${input.description}`);
+    const safety =
+      input.safety || SAFETY_KINDS.includes(spec.kind) || SAFETY_WORDS.test(`${input.text} ${input.description}`);
     const [made] = await tx
       .insert(part)
       .values({

@@ -16,9 +16,20 @@ import { countAfter, COUNTERS, lockCount, moveCount } from './locked-count';
 import { usableBins } from './usable-bins';
 
 /** What every step of a count answers: how much is entered and how much is still open, never a figure. */
-export const entered = z.object({ id: id(), number: z.string(), state: z.enum(COUNT_STATES), entered: z.number().int(), open: z.number().int(), binsOpen: z.number().int() });
+export const entered = z.object({
+  id: id(),
+  number: z.string(),
+  state: z.enum(COUNT_STATES),
+  entered: z.number().int(),
+  open: z.number().int(),
+  binsOpen: z.number().int(),
+});
 
-const figure = z.strictObject({ binId: id(), partId: id(), counted: z.number().int('must be a whole number').min(0, 'can’t be negative').max(100_000_000) });
+const figure = z.strictObject({
+  binId: id(),
+  partId: id(),
+  counted: z.number().int('must be a whole number').min(0, 'can’t be negative').max(100_000_000),
+});
 type Figure = z.output<typeof figure>;
 const keyOf = (one: { readonly binId: string; readonly partId: string }): string => `${one.binId} ${one.partId}`;
 
@@ -44,23 +55,45 @@ export const enterCounts = command({
     const count = await lockCount(tx, actor.workshopId, input.countId);
     countAfter(count, 'enter');
     const ofCount = and(eq(countEntry.workshopId, actor.workshopId), eq(countEntry.countId, count.id));
-    const known = await tx.select({ binId: countEntry.binId, partId: countEntry.partId, counted: countEntry.counted }).from(countEntry).where(ofCount);
+    const known = await tx
+      .select({ binId: countEntry.binId, partId: countEntry.partId, counted: countEntry.counted })
+      .from(countEntry)
+      .where(ofCount);
     const places = new Set(known.map(keyOf));
-    const inCount = await tx.select({ binId: countBin.binId }).from(countBin).where(and(eq(countBin.workshopId, actor.workshopId), eq(countBin.countId, count.id)));
-    const bins = await usableBins(tx, actor.workshopId, [...input.entries.map((one) => one.binId), ...input.emptyBinIds]);
+    const inCount = await tx
+      .select({ binId: countBin.binId })
+      .from(countBin)
+      .where(and(eq(countBin.workshopId, actor.workshopId), eq(countBin.countId, count.id)));
+    const bins = await usableBins(tx, actor.workshopId, [
+      ...input.entries.map((one) => one.binId),
+      ...input.emptyBinIds,
+    ]);
     for (const { id: binId, code } of bins.values()) {
-      if (!inCount.some((one) => one.binId === binId)) throw new Refusal('rule.forbids', `Bin ${code} is not in this count. Open a count for it; nothing was entered.`);
+      if (!inCount.some((one) => one.binId === binId))
+        throw new Refusal(
+          'rule.forbids',
+          `Bin ${code} is not in this count. Open a count for it; nothing was entered.`,
+        );
     }
     const found = input.entries.filter((one) => !places.has(keyOf(one)));
     await refuseUnknownParts(tx, actor.workshopId, found);
     const given = new Set(input.entries.map(keyOf));
-    const none = known.filter((one) => one.counted === null && input.emptyBinIds.includes(one.binId) && !given.has(keyOf(one)));
+    const none = known.filter(
+      (one) => one.counted === null && input.emptyBinIds.includes(one.binId) && !given.has(keyOf(one)),
+    );
     const figures: Figure[] = [...input.entries, ...none.map(({ binId, partId }) => ({ binId, partId, counted: 0 }))];
-    if (figures.length > 0) await enter(tx, { workshopId: actor.workshopId, countId: count.id, personId: actor.personId }, figures);
+    if (figures.length > 0)
+      await enter(tx, { workshopId: actor.workshopId, countId: count.id, personId: actor.personId }, figures);
     await tx
       .update(countBin)
       .set({ lookedAt: new Date(), lookedBy: actor.personId })
-      .where(and(eq(countBin.workshopId, actor.workshopId), eq(countBin.countId, count.id), inArray(countBin.binId, [...bins.keys()])));
+      .where(
+        and(
+          eq(countBin.workshopId, actor.workshopId),
+          eq(countBin.countId, count.id),
+          inArray(countBin.binId, [...bins.keys()]),
+        ),
+      );
     const left = await openIn(tx, actor.workshopId, count.id);
     const state = left.open === 0 && left.binsOpen === 0 ? countAfter(count, 'complete') : count.state;
     if (state !== count.state) await moveCount(tx, count, state);
@@ -77,11 +110,23 @@ export async function openIn(tx: Tx, workshopId: string, countId: string): Promi
   return found.rows[0] ?? { open: 0, binsOpen: 0 };
 }
 
-async function enter(tx: Tx, by: { workshopId: string; countId: string; personId: string }, figures: readonly Figure[]): Promise<void> {
-  const places = sql.join(figures.map((one) => sql`(${one.binId}::uuid, ${one.partId}::uuid)`), sql`, `);
+async function enter(
+  tx: Tx,
+  by: { workshopId: string; countId: string; personId: string },
+  figures: readonly Figure[],
+): Promise<void> {
+  const places = sql.join(
+    figures.map((one) => sql`(${one.binId}::uuid, ${one.partId}::uuid)`),
+    sql`, `,
+  );
   // In the fixed order; held until commit, so the figure taken is the figure at this moment.
-  await tx.execute(sql`select t.id from lot t where t.workshop_id = ${by.workshopId} and (t.bin_id, t.part_id) in (${places}) order by t.part_id, t.id for update`);
-  const values = sql.join(figures.map((one) => sql`(${one.binId}::uuid, ${one.partId}::uuid, ${one.counted}::int)`), sql`, `);
+  await tx.execute(
+    sql`select t.id from lot t where t.workshop_id = ${by.workshopId} and (t.bin_id, t.part_id) in (${places}) order by t.part_id, t.id for update`,
+  );
+  const values = sql.join(
+    figures.map((one) => sql`(${one.binId}::uuid, ${one.partId}::uuid, ${one.counted}::int)`),
+    sql`, `,
+  );
   await tx.execute(sql`
     insert into count_entry (workshop_id, id, count_id, bin_id, part_id, counted, ledger_at_count, counted_by, counted_at, attempt, found)
     select ${by.workshopId}::uuid, gen_random_uuid(), ${by.countId}::uuid, v.bin_id, v.part_id, v.counted,

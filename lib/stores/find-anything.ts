@@ -5,7 +5,13 @@ import { z } from 'zod';
 import { query } from '@/lib/api/use-case';
 import { searchCondition } from './part-search';
 
-const hit = z.object({ what: z.enum(['bin', 'part', 'order', 'batch', 'count', 'circuit', 'supplier', 'lot']), title: z.string(), detail: z.string(), href: z.string(), exact: z.boolean() });
+const hit = z.object({
+  what: z.enum(['bin', 'part', 'order', 'batch', 'count', 'circuit', 'supplier', 'lot']),
+  title: z.string(),
+  detail: z.string(),
+  href: z.string(),
+  exact: z.boolean(),
+});
 
 export const findAnything = query({
   name: 'find.anything',

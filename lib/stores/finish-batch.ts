@@ -9,7 +9,13 @@ import { batchAfter, lockBatch, moveBatch } from './locked-batch';
 import { recordMovements } from './record-movements';
 import { pickedOf, prepareReturns, type Return } from './returned-units';
 
-export const ended = z.object({ id: id(), number: z.string(), state: z.enum(BATCH_STATES), returnedUnits: z.number().int(), releasedReservations: z.number().int() });
+export const ended = z.object({
+  id: id(),
+  number: z.string(),
+  state: z.enum(BATCH_STATES),
+  returnedUnits: z.number().int(),
+  releasedReservations: z.number().int(),
+});
 
 export const finishBatch = command({
   name: 'batches.finish',
@@ -19,7 +25,13 @@ export const finishBatch = command({
   input: z.strictObject({
     batchId: id(),
     returns: z
-      .array(z.strictObject({ needId: id(), quantity: z.number().int('must be a whole number').min(1).max(10_000_000), binId: id().optional() }))
+      .array(
+        z.strictObject({
+          needId: id(),
+          quantity: z.number().int('must be a whole number').min(1).max(10_000_000),
+          binId: id().optional(),
+        }),
+      )
       .max(1_000)
       .refine((list) => new Set(list.map((one) => one.needId)).size === list.length, 'names a line twice')
       .default([]),
@@ -38,7 +50,9 @@ export const finishBatch = command({
       const total = lots.reduce((sum, row) => sum + row.picked, 0);
       if (back.quantity > total) {
         const detail = `${total} were taken for that line, ${back.quantity} can’t come back.`;
-        throw new Refusal('rule.forbids', `${detail} Nothing was booked.`, { errors: [{ pointer: `/returns/${index}/quantity`, code: 'more-than-picked', detail }] });
+        throw new Refusal('rule.forbids', `${detail} Nothing was booked.`, {
+          errors: [{ pointer: `/returns/${index}/quantity`, code: 'more-than-picked', detail }],
+        });
       }
       let left = back.quantity;
       for (const from of lots) {

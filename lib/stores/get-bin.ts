@@ -26,7 +26,16 @@ const fromDatabase = z.object({
   /** The count under way that it belongs to: its figures are for nobody who counts. */
   openCount: z.object({ id: id(), number: z.string() }).nullable(),
   lots: z.array(
-    z.object({ lotId: id(), part: partFacts, onHand: z.number().int(), reserved: z.number().int(), free: z.number().int(), receivedAt: z.string(), lotCode: z.string().nullable(), dateCode: z.string().nullable() }),
+    z.object({
+      lotId: id(),
+      part: partFacts,
+      onHand: z.number().int(),
+      reserved: z.number().int(),
+      free: z.number().int(),
+      receivedAt: z.string(),
+      lotCode: z.string().nullable(),
+      dateCode: z.string().nullable(),
+    }),
   ),
 });
 
@@ -50,7 +59,11 @@ export const getBin = query({
        where b.workshop_id = ${actor.workshopId} and b.id = ${input.binId}`);
     const row = found.rows[0]?.row;
     if (!row) throw notFound('bin');
-    const recent = await movementsPage(tx, [sql`m.workshop_id = ${actor.workshopId}`, sql`m.bin_id = ${input.binId}`], RECENT_MOVEMENTS);
+    const recent = await movementsPage(
+      tx,
+      [sql`m.workshop_id = ${actor.workshopId}`, sql`m.bin_id = ${input.binId}`],
+      RECENT_MOVEMENTS,
+    );
     return { ...row, recent };
   },
 });

@@ -25,7 +25,13 @@ const entryRow = z.object({
   varianceCost: z.string().nullable(),
   countedBy: z.string().nullable(),
 });
-const binOfCount = z.object({ binId: id(), code: z.string(), cabinetId: id(), looked: z.boolean(), toCount: z.number().int() });
+const binOfCount = z.object({
+  binId: id(),
+  code: z.string(),
+  cabinetId: id(),
+  looked: z.boolean(),
+  toCount: z.number().int(),
+});
 
 export const getCount = query({
   name: 'counts.get',
@@ -33,7 +39,11 @@ export const getCount = query({
   summary: 'A count with its bins and entries in walking order; figures only once everything is counted.',
   roles: 'everyone',
   input: z.strictObject({ countId: id() }),
-  output: countRow.extend({ binList: z.array(binOfCount), entryList: z.array(entryRow), acts: z.array(z.enum(COUNT_ACTS)) }),
+  output: countRow.extend({
+    binList: z.array(binOfCount),
+    entryList: z.array(entryRow),
+    acts: z.array(z.enum(COUNT_ACTS)),
+  }),
   async run({ tx, actor, input }) {
     const head = await tx.execute<{ row: z.output<typeof countRow> }>(sql`
       select ${countRowJson} as row from stock_count c ${countRowJoins} where c.workshop_id = ${actor.workshopId} and c.id = ${input.countId}`);

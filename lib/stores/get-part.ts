@@ -13,7 +13,17 @@ import { partRow, partRowJson, partStockSql } from './part-row';
 
 const RECENT_MOVEMENTS = 12;
 
-const lotOfPart = z.object({ lotId: id(), binId: id(), binCode: z.string(), onHand: z.number().int(), reserved: z.number().int(), unitCost: z.string(), receivedAt: z.string(), lotCode: z.string().nullable(), dateCode: z.string().nullable() });
+const lotOfPart = z.object({
+  lotId: id(),
+  binId: id(),
+  binCode: z.string(),
+  onHand: z.number().int(),
+  reserved: z.number().int(),
+  unitCost: z.string(),
+  receivedAt: z.string(),
+  lotCode: z.string().nullable(),
+  dateCode: z.string().nullable(),
+});
 
 const fromDatabase = partRow.extend({
   version: z.number().int(),
@@ -22,8 +32,25 @@ const fromDatabase = partRow.extend({
   /** Open promises, by batch. */
   promisedTo: z.array(z.object({ batchId: id(), number: z.string(), circuit: z.string(), quantity: z.number().int() })),
   /** Lines for which it is the chosen part: decided, or the best candidate without a doubt. */
-  usedIn: z.array(z.object({ revisionId: id(), circuit: z.string(), revision: z.string(), designators: z.array(z.string()), quantity: z.number().int() })),
-  offers: z.array(z.object({ supplierId: id(), supplierName: z.string(), supplierCode: z.string(), currency: z.string(), fromPrice: z.string(), leadTimeDays: z.number().int() })),
+  usedIn: z.array(
+    z.object({
+      revisionId: id(),
+      circuit: z.string(),
+      revision: z.string(),
+      designators: z.array(z.string()),
+      quantity: z.number().int(),
+    }),
+  ),
+  offers: z.array(
+    z.object({
+      supplierId: id(),
+      supplierName: z.string(),
+      supplierCode: z.string(),
+      currency: z.string(),
+      fromPrice: z.string(),
+      leadTimeDays: z.number().int(),
+    }),
+  ),
   /** Balance at the end of each day on which something moved; days in UTC. */
   stockHistory: z.array(z.object({ day: z.string(), balance: z.number().int() })),
 });
@@ -68,7 +95,11 @@ export const getPart = query({
       where p.workshop_id = ${actor.workshopId} and p.id = ${input.partId}`);
     const row = found.rows[0]?.row;
     if (!row) throw notFound('part');
-    const recent = await movementsPage(tx, [sql`m.workshop_id = ${actor.workshopId}`, sql`m.part_id = ${input.partId}`], RECENT_MOVEMENTS);
+    const recent = await movementsPage(
+      tx,
+      [sql`m.workshop_id = ${actor.workshopId}`, sql`m.part_id = ${input.partId}`],
+      RECENT_MOVEMENTS,
+    );
     return { ...row, cautions: partCautions(row), recent };
   },
 });

@@ -22,16 +22,33 @@ export const listBatches = query({
   output: pageOf(batchRow),
   async run({ tx, actor, input }) {
     const conditions = [sql`b.workshop_id = ${actor.workshopId}`];
-    if (input.state && input.state.length > 0) conditions.push(sql`b.state in (${sql.join(input.state.map((one) => sql`${one}`), sql`, `)})`);
-    if (input.circuitId) conditions.push(sql`exists (select 1 from revision v where v.workshop_id = b.workshop_id and v.id = b.revision_id and v.circuit_id = ${input.circuitId})`);
+    if (input.state && input.state.length > 0)
+      conditions.push(
+        sql`b.state in (${sql.join(
+          input.state.map((one) => sql`${one}`),
+          sql`, `,
+        )})`,
+      );
+    if (input.circuitId)
+      conditions.push(
+        sql`exists (select 1 from revision v where v.workshop_id = b.workshop_id and v.id = b.revision_id and v.circuit_id = ${input.circuitId})`,
+      );
     if (input.revisionId) conditions.push(sql`b.revision_id = ${input.revisionId}`);
-    const order = input.sort === 'needed' ? sql`b.priority, b.needed_by nulls last, b.created_at, b.id` : sql`b.created_at desc, b.id desc`;
+    const order =
+      input.sort === 'needed'
+        ? sql`b.priority, b.needed_by nulls last, b.created_at, b.id`
+        : sql`b.created_at desc, b.id desc`;
     const found = await tx.execute<{ row: BatchRowShown; total: number }>(sql`
       with page as (
         select b.*, count(*) over ()::int as total, row_number() over (order by ${order}) as place
           from batch b where ${sql.join(conditions, sql` and `)}
          order by place limit ${input.size} offset ${(input.page - 1) * input.size})
       select ${batchRowJson} as row, b.total from page b ${batchRowJoins} order by b.place`);
-    return { rows: found.rows.map(({ row }) => row), total: found.rows[0]?.total ?? 0, page: input.page, size: input.size };
+    return {
+      rows: found.rows.map(({ row }) => row),
+      total: found.rows[0]?.total ?? 0,
+      page: input.page,
+      size: input.size,
+    };
   },
 });

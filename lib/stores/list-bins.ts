@@ -6,7 +6,13 @@ import { id, pageFields, pageOf } from '@/lib/api/fields';
 import { query } from '@/lib/api/use-case';
 import { pickStops } from './pick-list';
 
-const content = z.object({ partId: id(), name: z.string(), kind: z.string(), onHand: z.number().int(), free: z.number().int() });
+const content = z.object({
+  partId: id(),
+  name: z.string(),
+  kind: z.string(),
+  onHand: z.number().int(),
+  free: z.number().int(),
+});
 const fromDatabase = z.object({
   id: id(),
   code: z.string(),
@@ -21,7 +27,12 @@ const fromDatabase = z.object({
   contents: z.array(content),
 });
 /** A bin that the batch's pick stops at: the number of its first stop, all its stops, and whether they are taken. */
-const lit = z.object({ stop: z.number().int(), stops: z.array(z.number().int()), take: z.number().int(), done: z.boolean() });
+const lit = z.object({
+  stop: z.number().int(),
+  stops: z.array(z.number().int()),
+  take: z.number().int(),
+  done: z.boolean(),
+});
 const binRow = fromDatabase.extend({
   /** 0 … 1; against its capacity, or against the fullest bin of the list where none is set. */
   fill: z.number(),
@@ -39,7 +50,8 @@ export const binContents = sql.raw(`
 export const listBins = query({
   name: 'bins.list',
   http: 'GET /bins',
-  summary: 'List bins in walking order of columns, with what lies in them; by cabinet, code, part, due for a count, or empty; lit for a batch.',
+  summary:
+    'List bins in walking order of columns, with what lies in them; by cabinet, code, part, due for a count, or empty; lit for a batch.',
   roles: 'everyone',
   input: z.strictObject({
     ...pageFields,
@@ -83,7 +95,12 @@ export const listBins = query({
           // Without a capacity the square root keeps a drawer of ten visible beside one of two thousand.
           fill: Math.min(1, row.capacity === null ? Math.sqrt(units(row) / fullest) : units(row) / row.capacity),
           lit: first
-            ? { stop: first.stop, stops: here.map((stop) => stop.stop), take: here.reduce((sum, stop) => sum + stop.take, 0), done: here.every((stop) => stop.take === 0) }
+            ? {
+                stop: first.stop,
+                stops: here.map((stop) => stop.stop),
+                take: here.reduce((sum, stop) => sum + stop.take, 0),
+                done: here.every((stop) => stop.take === 0),
+              }
             : null,
         };
       }),

@@ -7,7 +7,17 @@ import { query } from '@/lib/api/use-case';
 
 const MOST_CABINETS = 200;
 
-const cabinetRow = z.object({ id: id(), code: z.string(), name: z.string(), room: z.string(), columns: z.number().int(), rows: z.number().int(), bins: z.number().int(), dueForCount: z.number().int(), empty: z.number().int() });
+const cabinetRow = z.object({
+  id: id(),
+  code: z.string(),
+  name: z.string(),
+  room: z.string(),
+  columns: z.number().int(),
+  rows: z.number().int(),
+  bins: z.number().int(),
+  dueForCount: z.number().int(),
+  empty: z.number().int(),
+});
 
 export const listCabinets = query({
   name: 'cabinets.list',

@@ -40,12 +40,23 @@ export const listCounts = query({
   input: z.strictObject({ ...pageFields, state: listOf(z.enum(COUNT_STATES), 5).optional() }),
   output: pageOf(countRow),
   async run({ tx, actor, input }) {
-    const states = input.state && input.state.length > 0 ? sql`and c.state in (${sql.join(input.state.map((one) => sql`${one}`), sql`, `)})` : sql``;
+    const states =
+      input.state && input.state.length > 0
+        ? sql`and c.state in (${sql.join(
+            input.state.map((one) => sql`${one}`),
+            sql`, `,
+          )})`
+        : sql``;
     const found = await tx.execute<{ row: z.output<typeof countRow>; total: number }>(sql`
       with page as (
         select c.*, count(*) over ()::int as total from stock_count c where c.workshop_id = ${actor.workshopId} ${states}
          order by c.created_at desc, c.id desc limit ${input.size} offset ${(input.page - 1) * input.size})
       select ${countRowJson} as row, c.total from page c ${countRowJoins} order by c.created_at desc, c.id desc`);
-    return { rows: found.rows.map(({ row }) => row), total: found.rows[0]?.total ?? 0, page: input.page, size: input.size };
+    return {
+      rows: found.rows.map(({ row }) => row),
+      total: found.rows[0]?.total ?? 0,
+      page: input.page,
+      size: input.size,
+    };
   },
 });

@@ -5,14 +5,33 @@ import { z } from 'zod';
 import { id, pageFields, pageOf } from '@/lib/api/fields';
 import { query } from '@/lib/api/use-case';
 
-const lotRow = z.object({ id: id(), partId: id(), partName: z.string(), binId: id(), binCode: z.string(), onHand: z.number().int(), reserved: z.number().int(), free: z.number().int(), unitCost: z.string(), receivedAt: z.string(), lotCode: z.string().nullable(), dateCode: z.string().nullable() });
+const lotRow = z.object({
+  id: id(),
+  partId: id(),
+  partName: z.string(),
+  binId: id(),
+  binCode: z.string(),
+  onHand: z.number().int(),
+  reserved: z.number().int(),
+  free: z.number().int(),
+  unitCost: z.string(),
+  receivedAt: z.string(),
+  lotCode: z.string().nullable(),
+  dateCode: z.string().nullable(),
+});
 
 export const listLots = query({
   name: 'lots.list',
   http: 'GET /lots',
   summary: 'List lots; by part, bin or lot code, by default only those with something in them.',
   roles: 'everyone',
-  input: z.strictObject({ ...pageFields, partId: id().optional(), binId: id().optional(), lotCode: z.string().trim().max(60).optional(), empty: z.enum(['true']).optional() }),
+  input: z.strictObject({
+    ...pageFields,
+    partId: id().optional(),
+    binId: id().optional(),
+    lotCode: z.string().trim().max(60).optional(),
+    empty: z.enum(['true']).optional(),
+  }),
   output: pageOf(lotRow),
   async run({ tx, actor, input }) {
     const conditions = [sql`t.workshop_id = ${actor.workshopId}`];
@@ -27,6 +46,11 @@ export const listLots = query({
         from lot t join part p on p.workshop_id = t.workshop_id and p.id = t.part_id join bin b on b.workshop_id = t.workshop_id and b.id = t.bin_id
        where ${sql.join(conditions, sql` and `)}
        order by p.name, t.received_at, t.id limit ${input.size} offset ${(input.page - 1) * input.size}`);
-    return { rows: found.rows.map(({ row }) => row), total: found.rows[0]?.total ?? 0, page: input.page, size: input.size };
+    return {
+      rows: found.rows.map(({ row }) => row),
+      total: found.rows[0]?.total ?? 0,
+      page: input.page,
+      size: input.size,
+    };
   },
 });

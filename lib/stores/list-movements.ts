@@ -66,7 +66,8 @@ const startOf = (date: string): SQL => sql`(${date}::date::timestamp at time zon
 export const listMovements = query({
   name: 'ledger.list',
   http: 'GET /ledger',
-  summary: 'The ledger, newest first; by part, bin, lot, batch, kind, person and dates (UTC days, both inclusive). Page on with `before` (a sequence number).',
+  summary:
+    'The ledger, newest first; by part, bin, lot, batch, kind, person and dates (UTC days, both inclusive). Page on with `before` (a sequence number).',
   roles: 'everyone',
   input: z.strictObject({
     size: pageFields.size,
@@ -89,7 +90,13 @@ export const listMovements = query({
     if (input.lotId) conditions.push(sql`m.lot_id = ${input.lotId}`);
     if (input.batchId) conditions.push(sql`m.reference_type = 'batch' and m.reference_id = ${input.batchId}`);
     if (input.personId) conditions.push(sql`m.person_id = ${input.personId}`);
-    if (input.kind && input.kind.length > 0) conditions.push(sql`m.kind in (${sql.join(input.kind.map((one) => sql`${one}`), sql`, `)})`);
+    if (input.kind && input.kind.length > 0)
+      conditions.push(
+        sql`m.kind in (${sql.join(
+          input.kind.map((one) => sql`${one}`),
+          sql`, `,
+        )})`,
+      );
     if (input.from) conditions.push(sql`m.at >= ${startOf(input.from)}`);
     if (input.to) conditions.push(sql`m.at < ${startOf(input.to)} + interval '1 day'`);
     const rows = await movementsPage(tx, conditions, input.size + 1);

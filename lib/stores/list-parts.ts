@@ -13,7 +13,8 @@ const flag = z.enum(['true', 'false']).optional();
 export const listParts = query({
   name: 'parts.list',
   http: 'GET /parts',
-  summary: 'List parts with their stock; by words, kind, family, value (`4k7 1%`), bin, what is in stock or below its reorder point.',
+  summary:
+    'List parts with their stock; by words, kind, family, value (`4k7 1%`), bin, what is in stock or below its reorder point.',
   roles: 'everyone',
   input: z.strictObject({
     ...pageFields,
@@ -31,10 +32,14 @@ export const listParts = query({
   async run({ tx, actor, input }) {
     const lots = sql`from lot t where t.workshop_id = p.workshop_id and t.part_id = p.id`;
     const free = sql`(select coalesce(sum(t.on_hand - t.reserved), 0) ${lots})`;
-    const conditions = [sql`p.workshop_id = ${actor.workshopId}`, sql`p.retired_at is ${input.retired ? sql`not null` : sql`null`}`];
+    const conditions = [
+      sql`p.workshop_id = ${actor.workshopId}`,
+      sql`p.retired_at is ${input.retired ? sql`not null` : sql`null`}`,
+    ];
     if (input.kind) conditions.push(sql`p.kind = ${input.kind}`);
     if (input.family) conditions.push(sql`p.family = ${input.family}`);
-    if (input.inStock) conditions.push(sql`${input.inStock === 'true' ? sql`` : sql`not`} exists (select 1 ${lots} and t.on_hand > 0)`);
+    if (input.inStock)
+      conditions.push(sql`${input.inStock === 'true' ? sql`` : sql`not`} exists (select 1 ${lots} and t.on_hand > 0)`);
     if (input.belowReorderPoint) conditions.push(sql`p.reorder_point is not null and ${free} < p.reorder_point`);
     if (input.binId) conditions.push(sql`exists (select 1 ${lots} and t.bin_id = ${input.binId} and t.on_hand > 0)`);
     if (input.search) conditions.push(searchCondition(input.search, input.kind ?? null));
@@ -47,6 +52,11 @@ export const listParts = query({
           from part p where ${sql.join(conditions, sql` and `)}
          order by place limit ${input.size} offset ${(input.page - 1) * input.size})
       select ${partRowJson} as row, p.total from page p ${partStockSql} order by p.place`);
-    return { rows: found.rows.map(({ row }) => row), total: found.rows[0]?.total ?? 0, page: input.page, size: input.size };
+    return {
+      rows: found.rows.map(({ row }) => row),
+      total: found.rows[0]?.total ?? 0,
+      page: input.page,
+      size: input.size,
+    };
   },
 });

@@ -5,7 +5,18 @@ import { z } from 'zod';
 import { id, pageFields, pageOf } from '@/lib/api/fields';
 import { query } from '@/lib/api/use-case';
 
-export const receiptRow = z.object({ id: id(), number: z.string(), orderId: id().nullable(), orderNumber: z.string().nullable(), supplierName: z.string().nullable(), deliveryNote: z.string(), receivedBy: z.string(), receivedAt: z.string(), bags: z.number().int(), units: z.number().int() });
+export const receiptRow = z.object({
+  id: id(),
+  number: z.string(),
+  orderId: id().nullable(),
+  orderNumber: z.string().nullable(),
+  supplierName: z.string().nullable(),
+  deliveryNote: z.string(),
+  receivedBy: z.string(),
+  receivedAt: z.string(),
+  bags: z.number().int(),
+  units: z.number().int(),
+});
 
 /** ReceiptRow for receipts under the alias `c`: its text and the joins it reads. */
 export const receiptRowJson = sql.raw(`
@@ -31,6 +42,11 @@ export const listReceipts = query({
         select c.*, count(*) over ()::int as total from receipt c where c.workshop_id = ${actor.workshopId} ${ofOrder}
          order by c.received_at desc, c.id desc limit ${input.size} offset ${(input.page - 1) * input.size})
       select ${receiptRowJson} as row, c.total from page c ${receiptRowJoins} order by c.received_at desc, c.id desc`);
-    return { rows: found.rows.map(({ row }) => row), total: found.rows[0]?.total ?? 0, page: input.page, size: input.size };
+    return {
+      rows: found.rows.map(({ row }) => row),
+      total: found.rows[0]?.total ?? 0,
+      page: input.page,
+      size: input.size,
+    };
   },
 });

@@ -24,12 +24,21 @@ export async function lockBatch(tx: Tx, workshopId: string, batchId: string): Pr
   return { ...row, state: toState(row.state) };
 }
 
-const ACT_WORDS: Record<BatchAct, string> = { reserve: 'reserved for', pick: 'picked', 'complete-kit': 'kitted', finish: 'finished', cancel: 'cancelled' };
+const ACT_WORDS: Record<BatchAct, string> = {
+  reserve: 'reserved for',
+  pick: 'picked',
+  'complete-kit': 'kitted',
+  finish: 'finished',
+  cancel: 'cancelled',
+};
 
 /** The state the act leads to; refuses with the state it is in. */
 export function batchAfter(row: BatchRow, act: BatchAct): BatchState {
   const next = batchStateAfter(row.state, act);
-  if (next === null) throw new Refusal('state.refused', `Batch ${row.number} is ${row.state}; it can’t be ${ACT_WORDS[act]} now.`, { more: { state: row.state } });
+  if (next === null)
+    throw new Refusal('state.refused', `Batch ${row.number} is ${row.state}; it can’t be ${ACT_WORDS[act]} now.`, {
+      more: { state: row.state },
+    });
   return next;
 }
 

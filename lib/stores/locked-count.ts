@@ -23,17 +23,31 @@ export async function lockCount(tx: Tx, workshopId: string, countId: string): Pr
   return { ...row, state };
 }
 
-const ACT_WORDS: Record<CountAct, string> = { enter: 'counted', complete: 'completed', 'ask-again': 'counted again', post: 'posted', abandon: 'abandoned' };
+const ACT_WORDS: Record<CountAct, string> = {
+  enter: 'counted',
+  complete: 'completed',
+  'ask-again': 'counted again',
+  post: 'posted',
+  abandon: 'abandoned',
+};
 
 /** The state the act leads to; refuses with the state it is in. */
 export function countAfter(row: CountRow, act: CountAct): CountState {
   const next = countStateAfter(row.state, act);
-  if (next === null) throw new Refusal('state.refused', `Count ${row.number} is ${row.state}; it can’t be ${ACT_WORDS[act]} now.`, { more: { state: row.state } });
+  if (next === null)
+    throw new Refusal('state.refused', `Count ${row.number} is ${row.state}; it can’t be ${ACT_WORDS[act]} now.`, {
+      more: { state: row.state },
+    });
   return next;
 }
 
 /** Writes the new state; the row is locked, so a miss is a bug. */
-export async function moveCount(tx: Tx, row: CountRow, state: CountState, changes: Partial<typeof stockCount.$inferInsert> = {}): Promise<void> {
+export async function moveCount(
+  tx: Tx,
+  row: CountRow,
+  state: CountState,
+  changes: Partial<typeof stockCount.$inferInsert> = {},
+): Promise<void> {
   const changed = await tx
     .update(stockCount)
     .set({ ...changes, state, version: sql`${stockCount.version} + 1` })

@@ -15,7 +15,10 @@ export async function lockLot(tx: Tx, workshopId: string, lotId: string): Promis
   return row;
 }
 
-export function refuseMoreThanFree(row: { readonly onHand: number; readonly reserved: number }, quantity: number): void {
+export function refuseMoreThanFree(
+  row: { readonly onHand: number; readonly reserved: number },
+  quantity: number,
+): void {
   const free = row.onHand - row.reserved;
   if (quantity <= free) return;
   const promised = row.reserved > 0 ? ` (${row.reserved} more are promised to batches)` : '';

@@ -34,7 +34,8 @@ interface Promised extends Record<string, unknown> {
 export const missingAtPick = command({
   name: 'batches.not-there',
   http: 'POST /batches/{batchId}/not-there',
-  summary: 'Say how many of a stop’s units were in the bin: those are taken, the rest is given up, the bin is flagged for a count, and the next lot is reserved.',
+  summary:
+    'Say how many of a stop’s units were in the bin: those are taken, the rest is given up, the bin is flagged for a count, and the next lot is reserved.',
   roles: ['builder', 'storekeeper', 'lead'],
   input: z.strictObject({
     batchId: id(),
@@ -42,20 +43,34 @@ export const missingAtPick = command({
     reservationId: id(),
     found: z.number().int('must be a whole number').min(0, 'can’t be negative').max(10_000_000),
   }),
-  output: picked.extend({ binCode: z.string(), reservedInstead: z.number().int(), insteadBins: z.array(z.string()), stillShort: z.number().int() }),
+  output: picked.extend({
+    binCode: z.string(),
+    reservedInstead: z.number().int(),
+    insteadBins: z.array(z.string()),
+    stillShort: z.number().int(),
+  }),
   async run(context) {
     const { tx, actor, input, record } = context;
     const batch = await lockBatch(tx, actor.workshopId, input.batchId);
     batchAfter(batch, 'pick');
     const stop = await stopOf(tx, batch, input.reservationId);
     // Bins before lots, lots before reservations, as everywhere. All lots of the part, since another may serve instead.
-    await tx.execute(sql`select id from bin where workshop_id = ${batch.workshopId} and id = ${stop.bin_id} for no key update`);
+    await tx.execute(
+      sql`select id from bin where workshop_id = ${batch.workshopId} and id = ${stop.bin_id} for no key update`,
+    );
     const shelf = (await lockShelf(tx, batch.workshopId, [stop.part_id])).get(stop.part_id) ?? [];
     const promises = await lockPromises(tx, batch, stop);
     const reserved = promises.reduce((sum, one) => sum + one.open, 0);
-    if (reserved === 0) throw new Refusal('state.refused', `Nothing of ${stop.part_name} in ${stop.bin_code} is left to take for batch ${batch.number}.`);
+    if (reserved === 0)
+      throw new Refusal(
+        'state.refused',
+        `Nothing of ${stop.part_name} in ${stop.bin_code} is left to take for batch ${batch.number}.`,
+      );
     if (input.found >= reserved) {
-      throw new Refusal('rule.forbids', `${reserved} are reserved in ${stop.bin_code}; with ${input.found} there, nothing is missing. Take them instead.`);
+      throw new Refusal(
+        'rule.forbids',
+        `${reserved} are reserved in ${stop.bin_code}; with ${input.found} there, nothing is missing. Take them instead.`,
+      );
     }
     const missing = reserved - input.found;
 
@@ -67,9 +82,15 @@ export const missingAtPick = command({
     });
     await tx.execute(sql`
       update reservation r set picked = r.picked + v.taken, released = r.released + v.given
-        from (values ${sql.join(shares.map((one) => sql`(${one.id}::uuid, ${one.taken}::int, ${one.given}::int)`), sql`, `)}) as v (id, taken, given)
+        from (values ${sql.join(
+          shares.map((one) => sql`(${one.id}::uuid, ${one.taken}::int, ${one.given}::int)`),
+          sql`, `,
+        )}) as v (id, taken, given)
        where r.workshop_id = ${batch.workshopId} and r.id = v.id`);
-    await recordMovements(context, shares.filter((one) => one.taken > 0).map((one) => pickFrom(batch, { ...stop, lot_id: one.lot_id }, one.taken)));
+    await recordMovements(
+      context,
+      shares.filter((one) => one.taken > 0).map((one) => pickFrom(batch, { ...stop, lot_id: one.lot_id }, one.taken)),
+    );
     await tx
       .update(bin)
       .set({
@@ -87,7 +108,10 @@ export const missingAtPick = command({
       elsewhere = takeOff(elsewhere, chosen);
       instead.push(...chosen.map((one) => ({ ...one, needId })));
     }
-    if (instead.length > 0) await tx.insert(reservation).values(instead.map((one) => ({ ...one, workshopId: batch.workshopId, batchId: batch.id })));
+    if (instead.length > 0)
+      await tx
+        .insert(reservation)
+        .values(instead.map((one) => ({ ...one, workshopId: batch.workshopId, batchId: batch.id })));
     const reservedInstead = instead.reduce((sum, one) => sum + one.quantity, 0);
     const usedBins = shelf.filter((lot) => instead.some((one) => one.lotId === lot.lotId)).map((lot) => lot.binId);
 

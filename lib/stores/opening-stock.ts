@@ -38,7 +38,11 @@ export const openingStock = command({
   output: z.object({ lots: z.array(z.object({ lotId: id(), partId: id(), binId: id(), quantity: z.number().int() })) }),
   async run(context) {
     const { tx, actor, input, record } = context;
-    await usableBins(tx, actor.workshopId, input.entries.map((one) => one.binId));
+    await usableBins(
+      tx,
+      actor.workshopId,
+      input.entries.map((one) => one.binId),
+    );
     const partIds = [...new Set(input.entries.map((one) => one.partId))];
     const known = await tx
       .select({ id: part.id })
@@ -60,7 +64,16 @@ export const openingStock = command({
     );
     await recordMovements(
       context,
-      lots.map((one) => ({ kind: 'opening', lotId: one.lotId, partId: one.partId, binId: one.binId, quantity: one.quantity, referenceType: 'opening', referenceId: one.lotId, reason: 'opening stock' })),
+      lots.map((one) => ({
+        kind: 'opening',
+        lotId: one.lotId,
+        partId: one.partId,
+        binId: one.binId,
+        quantity: one.quantity,
+        referenceType: 'opening',
+        referenceId: one.lotId,
+        reason: 'opening stock',
+      })),
     );
     record(actor.workshopId, { lots: lots.length });
     return { lots: lots.map(({ lotId, partId, binId, quantity }) => ({ lotId, partId, binId, quantity })) };

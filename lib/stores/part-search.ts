@@ -18,7 +18,12 @@ export const containing = (text: string): string => `%${text.replace(/[\\%_]/g, 
 export function searchCondition(text: string, kind: string | null): SQL {
   const words = text.split(/\s+/).filter(Boolean).slice(0, MOST_WORDS);
   const haystack = sql`(p.name || ' ' || coalesce(p.part_number, '') || ' ' || coalesce(p.part_key, '') || ' ' || p.description)`;
-  const options: SQL[] = [sql`(${sql.join(words.map((word) => sql`${haystack} ilike ${containing(word)}`), sql` and `)})`];
+  const options: SQL[] = [
+    sql`(${sql.join(
+      words.map((word) => sql`${haystack} ilike ${containing(word)}`),
+      sql` and `,
+    )})`,
+  ];
   const spec = readPartText(text, { kind: PART_KINDS.find((one) => one === kind) ?? null });
   if (spec.value) {
     const same = [sql`p.unit = ${spec.value.unit}`, sql`p.value = ${toDecimal(spec.value)}::numeric`];

@@ -24,7 +24,13 @@ interface LockedReservation extends Record<string, unknown> {
   readonly open: number;
 }
 
-export const picked = z.object({ id: id(), number: z.string(), state: z.enum(BATCH_STATES), pickedUnits: z.number().int(), openUnits: z.number().int() });
+export const picked = z.object({
+  id: id(),
+  number: z.string(),
+  state: z.enum(BATCH_STATES),
+  pickedUnits: z.number().int(),
+  openUnits: z.number().int(),
+});
 
 export const pickBatch = command({
   name: 'batches.pick',
@@ -34,7 +40,12 @@ export const pickBatch = command({
   input: z.strictObject({
     batchId: id(),
     picks: z
-      .array(z.strictObject({ reservationId: id(), quantity: z.number().int('must be a whole number').min(1).max(10_000_000) }))
+      .array(
+        z.strictObject({
+          reservationId: id(),
+          quantity: z.number().int('must be a whole number').min(1).max(10_000_000),
+        }),
+      )
       .min(1)
       .max(1_000)
       .refine((list) => new Set(list.map((one) => one.reservationId)).size === list.length, 'names a reservation twice')
@@ -46,22 +57,32 @@ export const pickBatch = command({
     const batch = await lockBatch(tx, actor.workshopId, input.batchId);
     batchAfter(batch, 'pick');
     const held = await lockReservations(tx, batch, input.picks?.map((one) => one.reservationId) ?? null);
-    const wished = input.picks ?? [...held.values()].filter((one) => one.open > 0).map((one) => ({ reservationId: one.id, quantity: one.open }));
+    const wished =
+      input.picks ??
+      [...held.values()].filter((one) => one.open > 0).map((one) => ({ reservationId: one.id, quantity: one.open }));
     if (wished.length === 0) throw nothingReservedIn(batch);
     const picks = wished.map((one, index) => {
       const reserved = held.get(one.reservationId);
       if (!reserved) throw notFound('reservation of this batch');
       if (one.quantity > reserved.open) {
         const detail = `${reserved.open} × ${reserved.part_name} are reserved in ${reserved.bin_code}, not ${one.quantity}.`;
-        throw new Refusal('rule.forbids', `${detail} Nothing was taken.`, { errors: [{ pointer: `/picks/${index}/quantity`, code: 'more-than-reserved', detail }] });
+        throw new Refusal('rule.forbids', `${detail} Nothing was taken.`, {
+          errors: [{ pointer: `/picks/${index}/quantity`, code: 'more-than-reserved', detail }],
+        });
       }
       return { ...one, reserved };
     });
     await tx.execute(sql`
       update reservation r set picked = r.picked + v.quantity
-        from (values ${sql.join(picks.map((one) => sql`(${one.reservationId}::uuid, ${one.quantity}::int)`), sql`, `)}) as v (id, quantity)
+        from (values ${sql.join(
+          picks.map((one) => sql`(${one.reservationId}::uuid, ${one.quantity}::int)`),
+          sql`, `,
+        )}) as v (id, quantity)
        where r.workshop_id = ${batch.workshopId} and r.id = v.id`);
-    await recordMovements(context, picks.map(({ reserved, quantity }) => pickFrom(batch, reserved, quantity)));
+    await recordMovements(
+      context,
+      picks.map(({ reserved, quantity }) => pickFrom(batch, reserved, quantity)),
+    );
     const state = await stateAfterPick(tx, batch);
     if (state !== batch.state) await moveBatch(tx, batch, state);
     const units = picks.reduce((sum, one) => sum + one.quantity, 0);
@@ -71,8 +92,18 @@ export const pickBatch = command({
 });
 
 /** Locks the lots of the batch's reservations (part id, then lot id), then the reservations; all open ones where none are named. */
-async function lockReservations(tx: Tx, batch: BatchRow, ids: readonly string[] | null): Promise<Map<string, LockedReservation>> {
-  const meant = ids === null ? sql`r.open > 0` : sql`r.id in (${sql.join(ids.map((one) => sql`${one}::uuid`), sql`, `)})`;
+async function lockReservations(
+  tx: Tx,
+  batch: BatchRow,
+  ids: readonly string[] | null,
+): Promise<Map<string, LockedReservation>> {
+  const meant =
+    ids === null
+      ? sql`r.open > 0`
+      : sql`r.id in (${sql.join(
+          ids.map((one) => sql`${one}::uuid`),
+          sql`, `,
+        )})`;
   await tx.execute(sql`
     select t.id from lot t
      where t.workshop_id = ${batch.workshopId}

@@ -14,7 +14,15 @@ import { caution, partFacts, partFactsJson } from './part-facts';
 /** A line of the largest batch has a handful of lots; more rows than this is no list to walk. */
 const MOST_RESERVATIONS = 20_000;
 
-const lineOfStop = z.object({ reservationId: id(), needId: id(), lotId: id(), lotCode: z.string().nullable(), designators: z.array(z.string()), take: z.number().int(), picked: z.number().int() });
+const lineOfStop = z.object({
+  reservationId: id(),
+  needId: id(),
+  lotId: id(),
+  lotCode: z.string().nullable(),
+  designators: z.array(z.string()),
+  take: z.number().int(),
+  picked: z.number().int(),
+});
 const stopOfPick = z.object({
   /** From 1, in walking order; a stop keeps its number while others are taken. */
   stop: z.number().int(),
@@ -70,7 +78,12 @@ export async function pickStops(tx: Tx, workshopId: string, batchId: string): Pr
      where r.workshop_id = ${workshopId} and r.batch_id = ${batchId} and (r.open > 0 or r.picked > 0)
      order by t.received_at, r.id
      limit ${MOST_RESERVATIONS}`);
-  const lines = found.rows.map(({ row }) => ({ ...row, cabinetCode: row.cabinet, partId: row.part.id, partName: row.part.name }));
+  const lines = found.rows.map(({ row }) => ({
+    ...row,
+    cabinetCode: row.cabinet,
+    partId: row.part.id,
+    partName: row.part.name,
+  }));
   return groupStops(lines).map((group, index) => {
     const [first] = group;
     return {
@@ -87,7 +100,15 @@ export async function pickStops(tx: Tx, workshopId: string, batchId: string): Pr
       take: group.reduce((sum, line) => sum + line.take, 0),
       picked: group.reduce((sum, line) => sum + line.picked, 0),
       designators: [...new Set(group.flatMap((line) => line.designators))],
-      lines: group.map(({ reservationId, needId, lotId, lotCode, designators, take, picked }) => ({ reservationId, needId, lotId, lotCode, designators, take, picked })),
+      lines: group.map(({ reservationId, needId, lotId, lotCode, designators, take, picked }) => ({
+        reservationId,
+        needId,
+        lotId,
+        lotCode,
+        designators,
+        take,
+        picked,
+      })),
     };
   });
 }
@@ -98,9 +119,23 @@ export const pickList = query({
   summary: 'The stops of a pick in walking order, with what to look for and cautions.',
   roles: 'everyone',
   input: z.strictObject({ batchId: id() }),
-  output: z.object({ batchId: id(), number: z.string(), circuit: z.string(), revision: z.string(), units: z.number().int(), state: z.enum(BATCH_STATES), stops: z.array(stopOfPick) }),
+  output: z.object({
+    batchId: id(),
+    number: z.string(),
+    circuit: z.string(),
+    revision: z.string(),
+    units: z.number().int(),
+    state: z.enum(BATCH_STATES),
+    stops: z.array(stopOfPick),
+  }),
   async run({ tx, actor, input }) {
-    const head = await tx.execute<{ number: string; circuit: string; revision: string; units: number; state: (typeof BATCH_STATES)[number] }>(sql`
+    const head = await tx.execute<{
+      number: string;
+      circuit: string;
+      revision: string;
+      units: number;
+      state: (typeof BATCH_STATES)[number];
+    }>(sql`
       select b.number, c.name as circuit, v.name as revision, b.units, b.state from batch b
         join revision v on v.workshop_id = b.workshop_id and v.id = b.revision_id join circuit c on c.workshop_id = v.workshop_id and c.id = v.circuit_id
        where b.workshop_id = ${actor.workshopId} and b.id = ${input.batchId}`);

@@ -6,7 +6,11 @@ import type { BatchState } from '@/lib/circuits/batch-states';
 import { type BatchRow, batchAfter } from './locked-batch';
 import type { Movement } from './record-movements';
 
-export const pickFrom = (batch: BatchRow, from: { readonly lot_id: string; readonly part_id: string; readonly bin_id: string }, quantity: number): Movement => ({
+export const pickFrom = (
+  batch: BatchRow,
+  from: { readonly lot_id: string; readonly part_id: string; readonly bin_id: string },
+  quantity: number,
+): Movement => ({
   kind: 'pick',
   lotId: from.lot_id,
   partId: from.part_id,

@@ -32,7 +32,13 @@ export const receiptProposal = query({
   summary: 'What of an order is still to come, each with the bin proposed for it and who waits for it.',
   roles: 'everyone',
   input: z.strictObject({ orderId: id() }),
-  output: z.object({ orderId: id(), number: z.string(), state: z.string(), supplierName: z.string(), lines: z.array(expected) }),
+  output: z.object({
+    orderId: id(),
+    number: z.string(),
+    state: z.string(),
+    supplierName: z.string(),
+    lines: z.array(expected),
+  }),
   async run({ tx, actor, input }) {
     const head = await tx.execute<{ number: string; state: string; name: string }>(sql`
       select o.number, o.state, s.name from purchase_order o join supplier s on s.workshop_id = o.workshop_id and s.id = o.supplier_id where o.workshop_id = ${actor.workshopId} and o.id = ${input.orderId}`);

@@ -41,12 +41,19 @@ export const receiveDelivery = command({
   http: 'POST /receipts',
   summary: 'Receive bags into bins: of an order, in one or several deliveries, or without one.',
   roles: ['storekeeper', 'buyer', 'lead'],
-  input: z.strictObject({ orderId: id().optional(), supplierId: id().optional(), deliveryNote: z.string().trim().max(200).default(''), lines: z.array(bag).min(1).max(MOST_BAGS) }),
+  input: z.strictObject({
+    orderId: id().optional(),
+    supplierId: id().optional(),
+    deliveryNote: z.string().trim().max(200).default(''),
+    lines: z.array(bag).min(1).max(MOST_BAGS),
+  }),
   output: z.object({
     id: id(),
     number: z.string(),
     lots: z.array(z.object({ lotId: id(), partId: id(), binId: id(), quantity: z.number().int() })),
-    order: z.object({ id: id(), number: z.string(), state: z.enum(ORDER_STATES), missing: z.number().int() }).nullable(),
+    order: z
+      .object({ id: id(), number: z.string(), state: z.enum(ORDER_STATES), missing: z.number().int() })
+      .nullable(),
     waitingBatches: z.array(z.object({ id: id(), number: z.string(), circuit: z.string() })),
   }),
   async run(context) {
@@ -59,9 +66,13 @@ export const receiveDelivery = command({
     input.lines.forEach((line, index) => {
       if (line.orderLineId === undefined) return;
       const wanted = ordered.find((one) => one.id === line.orderLineId);
-      const refuse = (detail: string) => new Refusal('rule.forbids', `Bag ${index + 1}: ${detail}`, { errors: [{ pointer: `/lines/${index}`, code: 'order-line', detail }] });
+      const refuse = (detail: string) =>
+        new Refusal('rule.forbids', `Bag ${index + 1}: ${detail}`, {
+          errors: [{ pointer: `/lines/${index}`, code: 'order-line', detail }],
+        });
       if (!order || !wanted) throw refuse('that line is not on this order.');
-      if (wanted.partId !== line.partId) throw refuse(`the order asks for ${wanted.description} there. Another part is received without its line.`);
+      if (wanted.partId !== line.partId)
+        throw refuse(`the order asks for ${wanted.description} there. Another part is received without its line.`);
       prices.set(index, wanted.unitPrice);
     });
     await refuseUnknown(tx, actor.workshopId, input.lines);
@@ -77,16 +88,50 @@ export const receiveDelivery = command({
       deliveryNote: input.deliveryNote,
       receivedBy: actor.personId,
     });
-    const bags = input.lines.map((line, index) => ({ ...line, lotId: newId(), receiptLineId: newId(), unitCost: prices.get(index) ?? line.unitCost ?? '0' }));
-    await tx.insert(lot).values(
-      bags.map((one) => ({ workshopId: actor.workshopId, id: one.lotId, partId: one.partId, binId: one.binId, unitCost: one.unitCost, lotCode: one.lotCode ?? null, dateCode: one.dateCode ?? null })),
-    );
-    await tx.insert(receiptLine).values(
-      bags.map((one) => ({ workshopId: actor.workshopId, id: one.receiptLineId, receiptId, orderLineId: one.orderLineId ?? null, partId: one.partId, binId: one.binId, lotId: one.lotId, quantity: one.quantity })),
-    );
+    const bags = input.lines.map((line, index) => ({
+      ...line,
+      lotId: newId(),
+      receiptLineId: newId(),
+      unitCost: prices.get(index) ?? line.unitCost ?? '0',
+    }));
+    await tx
+      .insert(lot)
+      .values(
+        bags.map((one) => ({
+          workshopId: actor.workshopId,
+          id: one.lotId,
+          partId: one.partId,
+          binId: one.binId,
+          unitCost: one.unitCost,
+          lotCode: one.lotCode ?? null,
+          dateCode: one.dateCode ?? null,
+        })),
+      );
+    await tx
+      .insert(receiptLine)
+      .values(
+        bags.map((one) => ({
+          workshopId: actor.workshopId,
+          id: one.receiptLineId,
+          receiptId,
+          orderLineId: one.orderLineId ?? null,
+          partId: one.partId,
+          binId: one.binId,
+          lotId: one.lotId,
+          quantity: one.quantity,
+        })),
+      );
     await recordMovements(
       context,
-      bags.map((one) => ({ kind: 'receipt', lotId: one.lotId, partId: one.partId, binId: one.binId, quantity: one.quantity, referenceType: 'receipt-line', referenceId: one.receiptLineId })),
+      bags.map((one) => ({
+        kind: 'receipt',
+        lotId: one.lotId,
+        partId: one.partId,
+        binId: one.binId,
+        quantity: one.quantity,
+        referenceType: 'receipt-line',
+        referenceId: one.receiptLineId,
+      })),
     );
 
     let after = null;
@@ -102,7 +147,10 @@ export const receiveDelivery = command({
           line.received += came;
         }
       }
-      const missing = ordered.reduce((sum, line) => sum + Math.max(0, line.quantity - line.cancelled - line.received), 0);
+      const missing = ordered.reduce(
+        (sum, line) => sum + Math.max(0, line.quantity - line.cancelled - line.received),
+        0,
+      );
       const moved = await moveOrder(tx, order, stateAfter(order, missing === 0 ? 'receive-all' : 'receive-part'));
       after = { id: moved.id, number: moved.number, state: moved.state, missing };
     }
@@ -150,7 +198,10 @@ async function waitingFor(tx: Tx, workshopId: string, partIds: readonly string[]
       join revision v on v.workshop_id = b.workshop_id and v.id = b.revision_id
       join circuit c on c.workshop_id = v.workshop_id and c.id = v.circuit_id
      where b.workshop_id = ${workshopId} and b.state in ('planned', 'reserved', 'picking')
-       and n.part_id in (${sql.join([...new Set(partIds)].map((one) => sql`${one}::uuid`), sql`, `)})
+       and n.part_id in (${sql.join(
+         [...new Set(partIds)].map((one) => sql`${one}::uuid`),
+         sql`, `,
+       )})
        and n.quantity > coalesce((select sum(r.quantity - r.released) from reservation r where r.workshop_id = n.workshop_id and r.need_id = n.id), 0)
      order by b.number limit 100`);
   return found.rows;

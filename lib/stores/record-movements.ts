@@ -23,7 +23,11 @@ export interface Movement {
  * One insert for all. Lock the lots first, in the fixed order (part id, then lot id). `startAt` numbers on where one
  * request enters movements in several calls. The same request can't enter a movement twice (movement_request_once).
  */
-export async function recordMovements(context: Pick<CommandContext<unknown>, 'tx' | 'actor' | 'requestKey'>, movements: readonly Movement[], startAt = 0): Promise<void> {
+export async function recordMovements(
+  context: Pick<CommandContext<unknown>, 'tx' | 'actor' | 'requestKey'>,
+  movements: readonly Movement[],
+  startAt = 0,
+): Promise<void> {
   if (movements.length === 0) return;
   await context.tx.insert(movement).values(
     movements.map((entry, index) => ({

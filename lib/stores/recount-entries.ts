@@ -19,10 +19,25 @@ export const recountEntries = command({
   async run({ tx, actor, input, record }) {
     const count = await lockCount(tx, actor.workshopId, input.countId);
     const next = countAfter(count, 'ask-again');
-    const asked = and(eq(countEntry.workshopId, actor.workshopId), eq(countEntry.countId, count.id), inArray(countEntry.id, input.entryIds));
-    const before = await tx.select({ entryId: countEntry.id, counted: countEntry.counted, ledger: countEntry.ledgerAtCount, by: countEntry.countedBy }).from(countEntry).where(asked);
+    const asked = and(
+      eq(countEntry.workshopId, actor.workshopId),
+      eq(countEntry.countId, count.id),
+      inArray(countEntry.id, input.entryIds),
+    );
+    const before = await tx
+      .select({
+        entryId: countEntry.id,
+        counted: countEntry.counted,
+        ledger: countEntry.ledgerAtCount,
+        by: countEntry.countedBy,
+      })
+      .from(countEntry)
+      .where(asked);
     if (before.length !== new Set(input.entryIds).size) throw notFound('entry of this count');
-    await tx.update(countEntry).set({ counted: null, ledgerAtCount: null, countedBy: null, countedAt: null }).where(asked);
+    await tx
+      .update(countEntry)
+      .set({ counted: null, ledgerAtCount: null, countedBy: null, countedAt: null })
+      .where(asked);
     await moveCount(tx, count, next);
     record(count.id, { again: before });
     return { id: count.id, number: count.number, state: next, entered: 0, open: before.length, binsOpen: 0 };

@@ -41,12 +41,21 @@ async function openNeeds(tx: Tx, workshopId: string, batchId: string): Promise<O
   return found.rows.map(({ row }) => row).filter((need) => need.covered < need.quantity);
 }
 
-const shortfallOf = z.object({ needId: id(), lineId: id(), partId: id().nullable(), partName: z.string().nullable(), text: z.string(), designators: z.array(z.string()), short: z.number().int() });
+const shortfallOf = z.object({
+  needId: id(),
+  lineId: id(),
+  partId: id().nullable(),
+  partName: z.string().nullable(),
+  text: z.string(),
+  designators: z.array(z.string()),
+  short: z.number().int(),
+});
 
 export const reserveBatch = command({
   name: 'batches.reserve',
   http: 'POST /batches/{batchId}/reserve',
-  summary: 'Promise lots to the batch: whole lines, or also parts of lines with allowPart. Answers what was promised and what is short.',
+  summary:
+    'Promise lots to the batch: whole lines, or also parts of lines with allowPart. Answers what was promised and what is short.',
   roles: ['builder', 'storekeeper', 'lead'],
   input: z.strictObject({ batchId: id(), allowPart: z.boolean().default(false) }),
   output: z.object({
@@ -84,7 +93,12 @@ export const reserveBatch = command({
         : await tx
             .insert(reservation)
             .values(promises.map((promise) => ({ ...promise, workshopId: batch.workshopId, batchId: batch.id })))
-            .returning({ reservationId: reservation.id, needId: reservation.needId, lotId: reservation.lotId, quantity: reservation.quantity });
+            .returning({
+              reservationId: reservation.id,
+              needId: reservation.needId,
+              lotId: reservation.lotId,
+              quantity: reservation.quantity,
+            });
     // A batch for which nothing at all could be promised stays planned, so that it is not taken for one to pick.
     const state = batch.state === 'planned' && made.length === 0 && shortfalls.length > 0 ? 'planned' : next;
     if (state !== batch.state) await moveBatch(tx, batch, state);

@@ -16,7 +16,11 @@ export const retirePart = command({
   output: z.object({ id: id(), name: z.string() }),
   async run({ tx, actor, input, record, enqueue }) {
     const own = and(eq(part.workshopId, actor.workshopId), eq(part.id, input.partId));
-    const [row] = await tx.select({ id: part.id, name: part.name, retiredAt: part.retiredAt }).from(part).where(own).for('update');
+    const [row] = await tx
+      .select({ id: part.id, name: part.name, retiredAt: part.retiredAt })
+      .from(part)
+      .where(own)
+      .for('update');
     if (!row) throw notFound('part');
     if (row.retiredAt !== null) throw new Refusal('state.refused', `${row.name} is retired already.`);
     const found = await tx.execute<{ units: number; ordered: number; needed: number }>(sql`
@@ -26,11 +30,15 @@ export const retirePart = command({
              (select count(*)::int from batch_need n join batch b on b.workshop_id = n.workshop_id and b.id = n.batch_id
                where n.workshop_id = ${actor.workshopId} and n.part_id = ${row.id} and b.state not in ('finished', 'cancelled')) as needed`);
     const { units = 0, ordered = 0, needed = 0 } = found.rows[0] ?? {};
-    const refuse = (why: string) => new Refusal('rule.forbids', `${row.name} ${why} It was not retired.`, { more: { units, ordered, needed } });
+    const refuse = (why: string) =>
+      new Refusal('rule.forbids', `${row.name} ${why} It was not retired.`, { more: { units, ordered, needed } });
     if (units > 0) throw refuse(`is still on the shelf (${units}). Scrap or use it up first.`);
     if (ordered > 0) throw refuse('is on an order that is not received. Settle that first.');
     if (needed > 0) throw refuse('is needed by a batch under way. Choose another part for its lines first.');
-    await tx.update(part).set({ retiredAt: new Date(), version: sql`${part.version} + 1` }).where(own);
+    await tx
+      .update(part)
+      .set({ retiredAt: new Date(), version: sql`${part.version} + 1` })
+      .where(own);
     await enqueue({ queue: 'match-stock-changed', payload: { partIds: [row.id] } });
     record(row.id, { name: row.name });
     return { id: row.id, name: row.name };

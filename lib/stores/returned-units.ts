@@ -46,12 +46,25 @@ export async function pickedOf(tx: Tx, batch: BatchRow): Promise<PickedUnits[]> 
 }
 
 /** Locks bins, then the batch's lots; makes the lots that other bins need; gives the movements to enter. */
-export async function prepareReturns(tx: Tx, batch: BatchRow, returns: readonly Return[], reason: string): Promise<Movement[]> {
+export async function prepareReturns(
+  tx: Tx,
+  batch: BatchRow,
+  returns: readonly Return[],
+  reason: string,
+): Promise<Movement[]> {
   const targets: { from: PickedUnits; quantity: number; binId: string }[] = [];
   for (const { from, quantity, binId } of returns) {
-    targets.push({ from, quantity, binId: binId ?? (from.bin_retired ? await binFor(tx, batch.workshopId, from) : from.bin_id) });
+    targets.push({
+      from,
+      quantity,
+      binId: binId ?? (from.bin_retired ? await binFor(tx, batch.workshopId, from) : from.bin_id),
+    });
   }
-  await usableBins(tx, batch.workshopId, targets.map((one) => one.binId));
+  await usableBins(
+    tx,
+    batch.workshopId,
+    targets.map((one) => one.binId),
+  );
   await lockLotsOf(tx, batch);
   const movements: Movement[] = [];
   for (const { from, quantity, binId } of targets) {
@@ -69,7 +82,16 @@ export async function prepareReturns(tx: Tx, batch: BatchRow, returns: readonly 
         dateCode: from.date_code,
       });
     }
-    movements.push({ kind: 'return', lotId, partId: from.part_id, binId, quantity, referenceType: 'batch', referenceId: batch.id, reason });
+    movements.push({
+      kind: 'return',
+      lotId,
+      partId: from.part_id,
+      binId,
+      quantity,
+      referenceType: 'batch',
+      referenceId: batch.id,
+      reason,
+    });
   }
   return movements;
 }
@@ -83,6 +105,10 @@ async function binFor(tx: Tx, workshopId: string, from: PickedUnits): Promise<st
      where b.workshop_id = ${workshopId} and b.retired_at is null and (x.same > 0 or x.units = 0)
      order by x.same desc, k.walk_order, k.code, b."column", b.row limit 1`);
   const bin = found.rows[0];
-  if (!bin) throw new Refusal('rule.forbids', `${from.part_name} can’t go back: its bin is retired and none is empty. Add a bin first; nothing was changed.`);
+  if (!bin)
+    throw new Refusal(
+      'rule.forbids',
+      `${from.part_name} can’t go back: its bin is retired and none is empty. Add a bin first; nothing was changed.`,
+    );
   return bin.id;
 }

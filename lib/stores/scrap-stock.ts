@@ -19,7 +19,16 @@ export const scrapStock = command({
     const from = await lockLot(tx, actor.workshopId, input.lotId);
     refuseMoreThanFree(from, input.quantity);
     await recordMovements(context, [
-      { kind: 'scrap', lotId: from.id, partId: from.partId, binId: from.binId, quantity: -input.quantity, referenceType: 'scrap', referenceId: from.id, reason: input.reason },
+      {
+        kind: 'scrap',
+        lotId: from.id,
+        partId: from.partId,
+        binId: from.binId,
+        quantity: -input.quantity,
+        referenceType: 'scrap',
+        referenceId: from.id,
+        reason: input.reason,
+      },
     ]);
     record(from.id, { quantity: input.quantity, reason: input.reason });
     return { lotId: from.id, left: from.onHand - input.quantity };

@@ -11,7 +11,11 @@ export interface UsableBin {
 }
 
 /** Refuses an unknown bin and a retired one; locks in the order of ids. Call it before any lot is locked or made. */
-export async function usableBins(tx: Tx, workshopId: string, binIds: readonly string[]): Promise<Map<string, UsableBin>> {
+export async function usableBins(
+  tx: Tx,
+  workshopId: string,
+  binIds: readonly string[],
+): Promise<Map<string, UsableBin>> {
   const wanted = [...new Set(binIds)];
   if (wanted.length === 0) return new Map();
   const rows = await tx
@@ -22,6 +26,7 @@ export async function usableBins(tx: Tx, workshopId: string, binIds: readonly st
     .for('share');
   if (rows.length !== wanted.length) throw notFound('bin');
   const retired = rows.find((row) => row.retiredAt !== null);
-  if (retired) throw new Refusal('rule.forbids', `Bin ${retired.code} is retired. Choose another; nothing was changed.`);
+  if (retired)
+    throw new Refusal('rule.forbids', `Bin ${retired.code} is retired. Choose another; nothing was changed.`);
   return new Map(rows.map(({ id, code }) => [id, { id, code }]));
 }

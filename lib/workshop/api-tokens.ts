@@ -13,15 +13,24 @@ const MOST_TOKENS = 20;
 const TOKEN_DAYS = 180;
 
 /** Makes a token; only its hash is kept. Also used by the development command `npm run token`. */
-export async function issueToken(tx: Tx, owner: { workshopId: string; personId: string }, name: string, scope: 'read' | 'write'): Promise<{ id: string; token: string; expiresAt: Date }> {
+export async function issueToken(
+  tx: Tx,
+  owner: { workshopId: string; personId: string },
+  name: string,
+  scope: 'read' | 'write',
+): Promise<{ id: string; token: string; expiresAt: Date }> {
   const token = newToken();
   const expiresAt = new Date(Date.now() + TOKEN_DAYS * 86_400_000);
-  const [row] = await tx.insert(apiToken).values({ ...owner, name, scope, tokenHash: hashToken(token), expiresAt }).returning({ id: apiToken.id });
+  const [row] = await tx
+    .insert(apiToken)
+    .values({ ...owner, name, scope, tokenHash: hashToken(token), expiresAt })
+    .returning({ id: apiToken.id });
   if (!row) throw new Error('the insert returned no row');
   return { id: row.id, token, expiresAt };
 }
 
-const openTokensOf = (workshopId: string, personId: string) => and(eq(apiToken.workshopId, workshopId), eq(apiToken.personId, personId), isNull(apiToken.revokedAt));
+const openTokensOf = (workshopId: string, personId: string) =>
+  and(eq(apiToken.workshopId, workshopId), eq(apiToken.personId, personId), isNull(apiToken.revokedAt));
 
 export const createToken = command({
   name: 'tokens.create',
@@ -32,9 +41,18 @@ export const createToken = command({
   output: z.object({ id: id(), token: z.string(), expiresAt: instant() }),
   async run({ tx, actor, input, record }) {
     if (actor.via === 'token') throw new Refusal('not-allowed', 'A token can’t make another one; sign in for that.');
-    const held = await tx.select({ id: apiToken.id }).from(apiToken).where(openTokensOf(actor.workshopId, actor.personId));
-    if (held.length >= MOST_TOKENS) throw new Refusal('rule.forbids', `You have ${MOST_TOKENS} tokens. Revoke one first.`);
-    const made = await issueToken(tx, { workshopId: actor.workshopId, personId: actor.personId }, input.name, input.scope);
+    const held = await tx
+      .select({ id: apiToken.id })
+      .from(apiToken)
+      .where(openTokensOf(actor.workshopId, actor.personId));
+    if (held.length >= MOST_TOKENS)
+      throw new Refusal('rule.forbids', `You have ${MOST_TOKENS} tokens. Revoke one first.`);
+    const made = await issueToken(
+      tx,
+      { workshopId: actor.workshopId, personId: actor.personId },
+      input.name,
+      input.scope,
+    );
     record(made.id, { name: input.name, scope: input.scope });
     return { id: made.id, token: made.token, expiresAt: made.expiresAt.toISOString() };
   },
@@ -46,10 +64,29 @@ export const listTokens = query({
   summary: 'List your own API tokens.',
   roles: 'everyone',
   input: z.strictObject({}),
-  output: z.array(z.object({ id: id(), name: z.string(), scope: z.enum(['read', 'write']), createdAt: instant(), expiresAt: instant() })),
+  output: z.array(
+    z.object({
+      id: id(),
+      name: z.string(),
+      scope: z.enum(['read', 'write']),
+      createdAt: instant(),
+      expiresAt: instant(),
+    }),
+  ),
   async run({ tx, actor }) {
-    const rows = await tx.select().from(apiToken).where(openTokensOf(actor.workshopId, actor.personId)).orderBy(desc(apiToken.createdAt)).limit(MOST_TOKENS);
-    return rows.map((row) => ({ id: row.id, name: row.name, scope: row.scope === 'read' ? ('read' as const) : ('write' as const), createdAt: row.createdAt.toISOString(), expiresAt: row.expiresAt.toISOString() }));
+    const rows = await tx
+      .select()
+      .from(apiToken)
+      .where(openTokensOf(actor.workshopId, actor.personId))
+      .orderBy(desc(apiToken.createdAt))
+      .limit(MOST_TOKENS);
+    return rows.map((row) => ({
+      id: row.id,
+      name: row.name,
+      scope: row.scope === 'read' ? ('read' as const) : ('write' as const),
+      createdAt: row.createdAt.toISOString(),
+      expiresAt: row.expiresAt.toISOString(),
+    }));
   },
 });
 

@@ -14,18 +14,32 @@ const LINK_MINUTES = 20;
 export const email = () => z.string().trim().toLowerCase().max(254).pipe(z.email('is not an e-mail address'));
 
 async function mailLink(tx: Tx, address: string, purpose: 'sign-in' | 'password-reset'): Promise<void> {
-  const [found] = await tx.select({ id: person.id, name: person.name, email: person.email }).from(person).where(eq(person.email, address));
+  const [found] = await tx
+    .select({ id: person.id, name: person.name, email: person.email })
+    .from(person)
+    .where(eq(person.email, address));
   if (!found) return;
   const token = newToken();
-  await tx.insert(oneTimeLink).values({ tokenHash: hashToken(token), personId: found.id, purpose, expiresAt: new Date(Date.now() + LINK_MINUTES * 60_000) });
+  await tx
+    .insert(oneTimeLink)
+    .values({
+      tokenHash: hashToken(token),
+      personId: found.id,
+      purpose,
+      expiresAt: new Date(Date.now() + LINK_MINUTES * 60_000),
+    });
   const path = purpose === 'sign-in' ? '/sign-in/link' : '/password-reset/new';
   const [subject, said] =
-    purpose === 'sign-in' ? ['Your sign-in link', 'This link signs you in once:'] : ['Set a new password', 'This link lets you set a new password, once:'];
+    purpose === 'sign-in'
+      ? ['Your sign-in link', 'This link signs you in once:']
+      : ['Set a new password', 'This link lets you set a new password, once:'];
   await queueAuthMail(tx, {
     to: found.email,
     subject,
     // In the fragment, so that it reaches no server log and no referrer.
-    text: letter(found.name, [said], ownUrl(`${path}#${token}`), [`It holds for ${LINK_MINUTES} minutes. If you did not ask for it, leave it.`]),
+    text: letter(found.name, [said], ownUrl(`${path}#${token}`), [
+      `It holds for ${LINK_MINUTES} minutes. If you did not ask for it, leave it.`,
+    ]),
     cause: `${purpose}:${hashToken(token)}`,
   });
 }

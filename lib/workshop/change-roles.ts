@@ -15,13 +15,17 @@ async function refuseLosingLastLead(tx: Tx, workshopId: string, personId: string
   const leads = await tx
     .select({ personId: membership.personId })
     .from(membership)
-    .where(and(eq(membership.workshopId, workshopId), isNull(membership.endedAt), sql`'lead' = any(${membership.roles})`))
+    .where(
+      and(eq(membership.workshopId, workshopId), isNull(membership.endedAt), sql`'lead' = any(${membership.roles})`),
+    )
     .orderBy(membership.personId)
     .for('update');
-  if (leads.length === 1 && leads[0]?.personId === personId) throw new Refusal('rule.forbids', 'This is the only lead. Make somebody else lead first.');
+  if (leads.length === 1 && leads[0]?.personId === personId)
+    throw new Refusal('rule.forbids', 'This is the only lead. Make somebody else lead first.');
 }
 
-const memberIs = (workshopId: string, personId: string) => and(eq(membership.workshopId, workshopId), eq(membership.personId, personId), isNull(membership.endedAt));
+const memberIs = (workshopId: string, personId: string) =>
+  and(eq(membership.workshopId, workshopId), eq(membership.personId, personId), isNull(membership.endedAt));
 
 export const changeRoles = command({
   name: 'people.change-roles',
@@ -32,7 +36,11 @@ export const changeRoles = command({
   output: z.object({ personId: id(), roles: z.array(z.enum(ROLES)) }),
   async run({ tx, actor, input, record }) {
     if (!input.roles.includes('lead')) await refuseLosingLastLead(tx, actor.workshopId, input.personId);
-    const [row] = await tx.update(membership).set({ roles: input.roles }).where(memberIs(actor.workshopId, input.personId)).returning({ personId: membership.personId });
+    const [row] = await tx
+      .update(membership)
+      .set({ roles: input.roles })
+      .where(memberIs(actor.workshopId, input.personId))
+      .returning({ personId: membership.personId });
     if (!row) throw notFound('person');
     record(input.personId, { roles: input.roles });
     return { personId: row.personId, roles: input.roles };
@@ -48,12 +56,22 @@ export const endMembership = command({
   output: z.object({ personId: id() }),
   async run({ tx, actor, input, record }) {
     await refuseLosingLastLead(tx, actor.workshopId, input.personId);
-    const [row] = await tx.update(membership).set({ endedAt: new Date() }).where(memberIs(actor.workshopId, input.personId)).returning({ personId: membership.personId });
+    const [row] = await tx
+      .update(membership)
+      .set({ endedAt: new Date() })
+      .where(memberIs(actor.workshopId, input.personId))
+      .returning({ personId: membership.personId });
     if (!row) throw notFound('person');
     await tx
       .update(apiToken)
       .set({ revokedAt: new Date() })
-      .where(and(eq(apiToken.workshopId, actor.workshopId), eq(apiToken.personId, input.personId), isNull(apiToken.revokedAt)));
+      .where(
+        and(
+          eq(apiToken.workshopId, actor.workshopId),
+          eq(apiToken.personId, input.personId),
+          isNull(apiToken.revokedAt),
+        ),
+      );
     record(input.personId);
     return row;
   },

@@ -38,18 +38,35 @@ export const invitePerson = command({
       .select({ id: person.id })
       .from(membership)
       .innerJoin(person, eq(person.id, membership.personId))
-      .where(and(eq(membership.workshopId, actor.workshopId), eq(person.email, input.email), isNull(membership.endedAt)));
+      .where(
+        and(eq(membership.workshopId, actor.workshopId), eq(person.email, input.email), isNull(membership.endedAt)),
+      );
     if (member) throw new Refusal('conflict', 'That person is in the workshop already; change their roles instead.');
     const openOnes = await tx
       .select({ id: invitation.id })
       .from(invitation)
-      .where(and(eq(invitation.workshopId, actor.workshopId), isNull(invitation.acceptedAt), isNull(invitation.withdrawnAt), gt(invitation.expiresAt, new Date())));
-    if (openOnes.length >= MOST_OPEN) throw new Refusal('rule.forbids', `There are ${MOST_OPEN} open invitations. Take some back first.`);
+      .where(
+        and(
+          eq(invitation.workshopId, actor.workshopId),
+          isNull(invitation.acceptedAt),
+          isNull(invitation.withdrawnAt),
+          gt(invitation.expiresAt, new Date()),
+        ),
+      );
+    if (openOnes.length >= MOST_OPEN)
+      throw new Refusal('rule.forbids', `There are ${MOST_OPEN} open invitations. Take some back first.`);
     const secret = newToken();
     const expiresAt = new Date(Date.now() + INVITATION_DAYS * 86_400_000);
     const [made] = await tx
       .insert(invitation)
-      .values({ workshopId: actor.workshopId, email: input.email, roles: input.roles, tokenHash: hashToken(secret), invitedBy: actor.personId, expiresAt })
+      .values({
+        workshopId: actor.workshopId,
+        email: input.email,
+        roles: input.roles,
+        tokenHash: hashToken(secret),
+        invitedBy: actor.personId,
+        expiresAt,
+      })
       .returning({ id: invitation.id });
     if (!made) throw new Error('the insert returned no row');
     await enqueue({
@@ -57,9 +74,12 @@ export const invitePerson = command({
       payload: {
         to: input.email,
         subject: `${actor.personName} invites you to ${actor.workshopName}`,
-        text: letter('there', [`${actor.personName} invites you to ${actor.workshopName} as ${input.roles.join(' and ')}.`, 'Accept here:'], ownUrl(`/invitation#${secret}`), [
-          `The link holds for ${INVITATION_DAYS} days and works once.`,
-        ]),
+        text: letter(
+          'there',
+          [`${actor.personName} invites you to ${actor.workshopName} as ${input.roles.join(' and ')}.`, 'Accept here:'],
+          ownUrl(`/invitation#${secret}`),
+          [`The link holds for ${INVITATION_DAYS} days and works once.`],
+        ),
         cause: `invitation:${made.id}`,
       },
     });
@@ -79,7 +99,14 @@ export const withdrawInvitation = command({
     const [row] = await tx
       .update(invitation)
       .set({ withdrawnAt: new Date() })
-      .where(and(eq(invitation.workshopId, actor.workshopId), eq(invitation.id, input.invitationId), isNull(invitation.acceptedAt), isNull(invitation.withdrawnAt)))
+      .where(
+        and(
+          eq(invitation.workshopId, actor.workshopId),
+          eq(invitation.id, input.invitationId),
+          isNull(invitation.acceptedAt),
+          isNull(invitation.withdrawnAt),
+        ),
+      )
       .returning({ id: invitation.id });
     if (!row) throw notFound('open invitation');
     record(row.id);
@@ -89,12 +116,26 @@ export const withdrawInvitation = command({
 
 async function openInvitation(tx: Parameters<Parameters<typeof withScope>[1]>[0], secret: string) {
   const [row] = await tx
-    .select({ workshopId: invitation.workshopId, id: invitation.id, email: invitation.email, roles: invitation.roles, workshopName: workshop.name })
+    .select({
+      workshopId: invitation.workshopId,
+      id: invitation.id,
+      email: invitation.email,
+      roles: invitation.roles,
+      workshopName: workshop.name,
+    })
     .from(invitation)
     .innerJoin(workshop, eq(workshop.id, invitation.workshopId))
-    .where(and(eq(invitation.tokenHash, hashToken(secret)), isNull(invitation.acceptedAt), isNull(invitation.withdrawnAt), gt(invitation.expiresAt, new Date())))
+    .where(
+      and(
+        eq(invitation.tokenHash, hashToken(secret)),
+        isNull(invitation.acceptedAt),
+        isNull(invitation.withdrawnAt),
+        gt(invitation.expiresAt, new Date()),
+      ),
+    )
     .for('update', { of: invitation });
-  if (!row) throw new Refusal('not-found', 'This invitation was used already, taken back, or is too old. Ask for a new one.');
+  if (!row)
+    throw new Refusal('not-found', 'This invitation was used already, taken back, or is too old. Ask for a new one.');
   return row;
 }
 
@@ -103,13 +144,23 @@ export const lookAtInvitation = open({
   http: 'POST /invitations/look',
   summary: 'What an invitation link offers, and whether its address has an account already.',
   input: z.strictObject({ token: token() }),
-  output: z.object({ email: z.string(), roles: z.array(z.enum(ROLES)), workshopName: z.string(), hasAccount: z.boolean() }),
+  output: z.object({
+    email: z.string(),
+    roles: z.array(z.enum(ROLES)),
+    workshopName: z.string(),
+    hasAccount: z.boolean(),
+  }),
   async run({ input, address }) {
     await countTry('token', hashToken(input.token), address);
     return withScope('auth', async (tx) => {
       const found = await openInvitation(tx, input.token);
       const [known] = await tx.select({ id: person.id }).from(person).where(eq(person.email, found.email));
-      return { email: found.email, roles: z.array(z.enum(ROLES)).parse(found.roles), workshopName: found.workshopName, hasAccount: known !== undefined };
+      return {
+        email: found.email,
+        roles: z.array(z.enum(ROLES)).parse(found.roles),
+        workshopName: found.workshopName,
+        hasAccount: known !== undefined,
+      };
     });
   },
 });
@@ -125,21 +176,34 @@ export const acceptInvitation = open({
     const passwordHash = await hashPassword(input.password);
     return withScope('auth', async (tx) => {
       const found = await openInvitation(tx, input.token);
-      const [known] = await tx.select({ id: person.id, passwordHash: person.passwordHash }).from(person).where(eq(person.email, found.email));
+      const [known] = await tx
+        .select({ id: person.id, passwordHash: person.passwordHash })
+        .from(person)
+        .where(eq(person.email, found.email));
       let personId: string;
       if (known) {
-        if (!(await passwordFits(input.password, known.passwordHash))) throw new Refusal('not-allowed', 'That is not the password of your account.');
+        if (!(await passwordFits(input.password, known.passwordHash)))
+          throw new Refusal('not-allowed', 'That is not the password of your account.');
         personId = known.id;
       } else {
-        if (input.name === undefined) throw new Refusal('input.invalid', 'Your name is missing.', { errors: [{ pointer: '/name', code: 'required', detail: 'Your name is missing.' }] });
-        const [made] = await tx.insert(person).values({ email: found.email, name: input.name, passwordHash }).returning({ id: person.id });
+        if (input.name === undefined)
+          throw new Refusal('input.invalid', 'Your name is missing.', {
+            errors: [{ pointer: '/name', code: 'required', detail: 'Your name is missing.' }],
+          });
+        const [made] = await tx
+          .insert(person)
+          .values({ email: found.email, name: input.name, passwordHash })
+          .returning({ id: person.id });
         if (!made) throw new Error('the insert returned no row');
         personId = made.id;
       }
       await tx
         .insert(membership)
         .values({ workshopId: found.workshopId, personId, roles: found.roles })
-        .onConflictDoUpdate({ target: [membership.workshopId, membership.personId], set: { roles: found.roles, endedAt: null } });
+        .onConflictDoUpdate({
+          target: [membership.workshopId, membership.personId],
+          set: { roles: found.roles, endedAt: null },
+        });
       await tx
         .update(invitation)
         .set({ acceptedAt: new Date() })

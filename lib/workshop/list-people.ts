@@ -17,12 +17,29 @@ export const listPeople = query({
   roles: 'everyone',
   input: z.strictObject({}),
   output: z.object({
-    people: z.array(z.object({ personId: id(), name: z.string(), email: z.string(), roles: z.array(z.enum(ROLES)), since: instant(), you: z.boolean() })),
-    invitations: z.array(z.object({ id: id(), email: z.string(), roles: z.array(z.enum(ROLES)), expiresAt: instant() })),
+    people: z.array(
+      z.object({
+        personId: id(),
+        name: z.string(),
+        email: z.string(),
+        roles: z.array(z.enum(ROLES)),
+        since: instant(),
+        you: z.boolean(),
+      }),
+    ),
+    invitations: z.array(
+      z.object({ id: id(), email: z.string(), roles: z.array(z.enum(ROLES)), expiresAt: instant() }),
+    ),
   }),
   async run({ tx, actor }) {
     const people = await tx
-      .select({ personId: person.id, name: person.name, email: person.email, roles: membership.roles, since: membership.createdAt })
+      .select({
+        personId: person.id,
+        name: person.name,
+        email: person.email,
+        roles: membership.roles,
+        since: membership.createdAt,
+      })
       .from(membership)
       .innerJoin(person, eq(person.id, membership.personId))
       .where(and(eq(membership.workshopId, actor.workshopId), isNull(membership.endedAt)))
@@ -31,12 +48,28 @@ export const listPeople = query({
     const invitations = await tx
       .select({ id: invitation.id, email: invitation.email, roles: invitation.roles, expiresAt: invitation.expiresAt })
       .from(invitation)
-      .where(and(eq(invitation.workshopId, actor.workshopId), isNull(invitation.acceptedAt), isNull(invitation.withdrawnAt), gt(invitation.expiresAt, new Date())))
+      .where(
+        and(
+          eq(invitation.workshopId, actor.workshopId),
+          isNull(invitation.acceptedAt),
+          isNull(invitation.withdrawnAt),
+          gt(invitation.expiresAt, new Date()),
+        ),
+      )
       .orderBy(asc(invitation.createdAt))
       .limit(MOST_PEOPLE);
     return {
-      people: people.map((one) => ({ ...one, roles: one.roles.filter(isRole), since: one.since.toISOString(), you: one.personId === actor.personId })),
-      invitations: invitations.map((one) => ({ ...one, roles: one.roles.filter(isRole), expiresAt: one.expiresAt.toISOString() })),
+      people: people.map((one) => ({
+        ...one,
+        roles: one.roles.filter(isRole),
+        since: one.since.toISOString(),
+        you: one.personId === actor.personId,
+      })),
+      invitations: invitations.map((one) => ({
+        ...one,
+        roles: one.roles.filter(isRole),
+        expiresAt: one.expiresAt.toISOString(),
+      })),
     };
   },
 });

@@ -9,7 +9,12 @@ export type NumberedDocument = 'order' | 'batch' | 'receipt' | 'count';
 const PREFIXES: Record<NumberedDocument, string> = { order: '', batch: 'B-', receipt: 'R-', count: 'C-' };
 
 /** The next number of the year, such as `2026-0041` for an order. Held (locked) until commit; a rolled-back one is given again. */
-export async function nextNumber(tx: Tx, workshopId: string, kind: NumberedDocument, today: Date = new Date()): Promise<string> {
+export async function nextNumber(
+  tx: Tx,
+  workshopId: string,
+  kind: NumberedDocument,
+  today: Date = new Date(),
+): Promise<string> {
   const year = today.getUTCFullYear();
   const [row] = await tx
     .insert(counter)

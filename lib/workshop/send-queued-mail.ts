@@ -4,7 +4,12 @@ import { z } from 'zod';
 import type { HandledJob } from '@/lib/services/jobs';
 import { sendMail } from '@/lib/services/mail';
 
-const payload = z.object({ to: z.email(), subject: z.string().min(1).max(200), text: z.string().min(1), cause: z.string().min(1) });
+const payload = z.object({
+  to: z.email(),
+  subject: z.string().min(1).max(200),
+  text: z.string().min(1),
+  cause: z.string().min(1),
+});
 
 export async function sendQueuedMail(job: HandledJob): Promise<void> {
   const mail = payload.parse(job.payload);

@@ -12,7 +12,10 @@ import { countTry } from '@/lib/auth/rate-limit';
 
 export const token = () => z.string().regex(TOKEN_PATTERN, 'is not a link of ours');
 export const newPassword = () =>
-  z.string().min(SHORTEST_PASSWORD, `must have at least ${SHORTEST_PASSWORD} characters`).max(LONGEST_PASSWORD, `may have at most ${LONGEST_PASSWORD} characters`);
+  z
+    .string()
+    .min(SHORTEST_PASSWORD, `must have at least ${SHORTEST_PASSWORD} characters`)
+    .max(LONGEST_PASSWORD, `may have at most ${LONGEST_PASSWORD} characters`);
 
 export const setPassword = open({
   name: 'people.set-password',
@@ -28,7 +31,12 @@ export const setPassword = open({
         .update(oneTimeLink)
         .set({ usedAt: new Date() })
         .where(
-          and(eq(oneTimeLink.tokenHash, hashToken(input.token)), eq(oneTimeLink.purpose, 'password-reset'), isNull(oneTimeLink.usedAt), gt(oneTimeLink.expiresAt, new Date())),
+          and(
+            eq(oneTimeLink.tokenHash, hashToken(input.token)),
+            eq(oneTimeLink.purpose, 'password-reset'),
+            isNull(oneTimeLink.usedAt),
+            gt(oneTimeLink.expiresAt, new Date()),
+          ),
         )
         .returning({ personId: oneTimeLink.personId });
       if (!used) throw new Refusal('not-found', 'This link was used already or is too old. Ask for a new one.');

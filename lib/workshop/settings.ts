@@ -55,7 +55,8 @@ export const changeSettings = command({
   output: z.object({ workshopId: id() }),
   async run({ tx, actor, input, record }) {
     const changes = Object.fromEntries(Object.entries(input).filter(([, value]) => value !== undefined));
-    if (Object.keys(changes).length > 0) await tx.update(workshop).set(changes).where(eq(workshop.id, actor.workshopId));
+    if (Object.keys(changes).length > 0)
+      await tx.update(workshop).set(changes).where(eq(workshop.id, actor.workshopId));
     record(actor.workshopId, changes);
     return { workshopId: actor.workshopId };
   },

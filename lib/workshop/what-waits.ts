@@ -5,7 +5,14 @@ import { z } from 'zod';
 import { query } from '@/lib/api/use-case';
 import type { Role } from '@/lib/auth/actor';
 
-const waiting = z.object({ what: z.string(), count: z.number().int(), title: z.string(), detail: z.string(), href: z.string(), act: z.string() });
+const waiting = z.object({
+  what: z.string(),
+  count: z.number().int(),
+  title: z.string(),
+  detail: z.string(),
+  href: z.string(),
+  act: z.string(),
+});
 const recent = z.object({ at: z.string(), person: z.string(), said: z.string(), binCode: z.string() });
 export type Waiting = z.output<typeof waiting>;
 
@@ -27,18 +34,90 @@ const many = (one: string, several: string) => (count: number) => (count === 1 ?
 
 /** In the order of the page: what blocks somebody else first. */
 const KINDS = {
-  approve: { what: 'orders-to-approve', roles: ['lead'], title: many('order to approve', 'orders to approve'), act: 'Look', list: '/orders?state=submitted' },
-  settle: { what: 'lines-to-settle', roles: ['builder', 'lead'], title: many('question on a parts list', 'questions on parts lists'), act: 'Answer', list: '/circuits' },
-  decide: { what: 'lines-to-decide', roles: ['builder', 'lead'], title: many('batch line without a part', 'batch lines without a part'), act: 'Choose', list: '/batches' },
-  pick: { what: 'stops-to-pick', roles: ['storekeeper', 'builder'], title: many('stop to pick', 'stops to pick'), act: 'Pick', list: '/batches' },
-  kits: { what: 'kits-complete', roles: ['builder'], title: many('kit complete', 'kits complete'), act: 'Take it', list: '/batches?state=kitted' },
-  bags: { what: 'deliveries-expected', roles: ['storekeeper', 'buyer'], title: many('delivery to put away', 'deliveries to put away'), act: 'Put away', list: '/receive' },
-  late: { what: 'deliveries-late', roles: ['buyer', 'lead'], title: many('delivery late', 'deliveries late'), act: 'Chase', list: '/orders?state=sent' },
-  counts: { what: 'bins-due', roles: ['storekeeper'], title: many('bin due for a count', 'bins due for a count'), act: 'Count', list: '/counts' },
-  opened: { what: 'counts-open', roles: ['storekeeper', 'lead'], title: many('count under way', 'counts under way'), act: 'Go on', list: '/counts' },
-  short: { what: 'parts-short', roles: ['buyer'], title: many('part short', 'parts short'), act: 'Buy', list: '/shortfalls' },
-  pay: { what: 'orders-to-pay', roles: ['buyer', 'lead'], title: many('approved order to pay', 'approved orders to pay'), act: 'Pay', list: '/orders?state=approved' },
-  send: { what: 'orders-to-send', roles: ['buyer', 'lead'], title: many('paid order to send', 'paid orders to send'), act: 'Send', list: '/orders?state=paid' },
+  approve: {
+    what: 'orders-to-approve',
+    roles: ['lead'],
+    title: many('order to approve', 'orders to approve'),
+    act: 'Look',
+    list: '/orders?state=submitted',
+  },
+  settle: {
+    what: 'lines-to-settle',
+    roles: ['builder', 'lead'],
+    title: many('question on a parts list', 'questions on parts lists'),
+    act: 'Answer',
+    list: '/circuits',
+  },
+  decide: {
+    what: 'lines-to-decide',
+    roles: ['builder', 'lead'],
+    title: many('batch line without a part', 'batch lines without a part'),
+    act: 'Choose',
+    list: '/batches',
+  },
+  pick: {
+    what: 'stops-to-pick',
+    roles: ['storekeeper', 'builder'],
+    title: many('stop to pick', 'stops to pick'),
+    act: 'Pick',
+    list: '/batches',
+  },
+  kits: {
+    what: 'kits-complete',
+    roles: ['builder'],
+    title: many('kit complete', 'kits complete'),
+    act: 'Take it',
+    list: '/batches?state=kitted',
+  },
+  bags: {
+    what: 'deliveries-expected',
+    roles: ['storekeeper', 'buyer'],
+    title: many('delivery to put away', 'deliveries to put away'),
+    act: 'Put away',
+    list: '/receive',
+  },
+  late: {
+    what: 'deliveries-late',
+    roles: ['buyer', 'lead'],
+    title: many('delivery late', 'deliveries late'),
+    act: 'Chase',
+    list: '/orders?state=sent',
+  },
+  counts: {
+    what: 'bins-due',
+    roles: ['storekeeper'],
+    title: many('bin due for a count', 'bins due for a count'),
+    act: 'Count',
+    list: '/counts',
+  },
+  opened: {
+    what: 'counts-open',
+    roles: ['storekeeper', 'lead'],
+    title: many('count under way', 'counts under way'),
+    act: 'Go on',
+    list: '/counts',
+  },
+  short: {
+    what: 'parts-short',
+    roles: ['buyer'],
+    title: many('part short', 'parts short'),
+    act: 'Buy',
+    list: '/shortfalls',
+  },
+  pay: {
+    what: 'orders-to-pay',
+    roles: ['buyer', 'lead'],
+    title: many('approved order to pay', 'approved orders to pay'),
+    act: 'Pay',
+    list: '/orders?state=approved',
+  },
+  send: {
+    what: 'orders-to-send',
+    roles: ['buyer', 'lead'],
+    title: many('paid order to send', 'paid orders to send'),
+    act: 'Send',
+    list: '/orders?state=paid',
+  },
 } as const satisfies Record<string, Kind>;
 
 type Key = keyof typeof KINDS;
@@ -87,7 +166,16 @@ export const whatWaits = query({
       const kind: Kind = KINDS[key];
       const row = byKey.get(key);
       if (!row || row.count === 0 || !kind.roles.some((role) => actor.roles.includes(role))) return [];
-      return [{ what: kind.what, count: row.count, title: kind.title(row.count), detail: row.detail ?? '', href: row.href ?? kind.list, act: kind.act }];
+      return [
+        {
+          what: kind.what,
+          count: row.count,
+          title: kind.title(row.count),
+          detail: row.detail ?? '',
+          href: row.href ?? kind.list,
+          act: kind.act,
+        },
+      ];
     });
     const moved = await tx.execute<{ row: z.output<typeof recent> }>(sql`
       with page as (select * from movement where workshop_id = ${w} and at > now() - interval '2 days' and kind <> 'opening' order by sequence desc limit 12)

@@ -32,7 +32,14 @@ export const whoAmI = query({
         .where(and(eq(membership.personId, actor.personId), isNull(membership.endedAt)))
         .orderBy(asc(workshop.name)),
     );
-    return { personId: actor.personId, name: actor.personName, email: actor.email, roles: [...actor.roles], workshop: { id: actor.workshopId, name: actor.workshopName }, workshops };
+    return {
+      personId: actor.personId,
+      name: actor.personName,
+      email: actor.email,
+      roles: [...actor.roles],
+      workshop: { id: actor.workshopId, name: actor.workshopName },
+      workshops,
+    };
   },
 });
 

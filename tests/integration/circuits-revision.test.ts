@@ -34,11 +34,26 @@ const csv = (...rows: string[]): Uint8Array => new TextEncoder().encode(`${rows.
 const HEADING = 'Designators,Quantity,Value,Notes';
 const SETTLED = csv(HEADING, 'R1 R2,2,4k7,1%', 'C1,1,100n,X7R 50V', 'U1,1,TL072,', 'R9,1,1M,DNF');
 
-const circuitOf = async (workshop = ours): Promise<string> => (await act(createCircuit, workshop.as.builder, { name: `Circuit ${newId()}`, railsVolts: [12, -12] })).id;
-const readIn = async (bytes: Uint8Array, options: { circuitId?: string; name?: string; fileName?: string; freeze?: boolean } = {}) =>
-  act(createRevision, ours.as.builder, { circuitId: options.circuitId ?? (await circuitOf()), name: options.name ?? 'A', file: { name: options.fileName ?? 'main-board.csv', bytes: new Uint8Array(bytes) }, freeze: options.freeze ?? false });
+const circuitOf = async (workshop = ours): Promise<string> =>
+  (await act(createCircuit, workshop.as.builder, { name: `Circuit ${newId()}`, railsVolts: [12, -12] })).id;
+const readIn = async (
+  bytes: Uint8Array,
+  options: { circuitId?: string; name?: string; fileName?: string; freeze?: boolean } = {},
+) =>
+  act(createRevision, ours.as.builder, {
+    circuitId: options.circuitId ?? (await circuitOf()),
+    name: options.name ?? 'A',
+    file: { name: options.fileName ?? 'main-board.csv', bytes: new Uint8Array(bytes) },
+    freeze: options.freeze ?? false,
+  });
 const linesOf = async (revisionId: string) => (await act(listLines, ours.as.builder, { revisionId })).rows;
-const revisionsOf = (workshop: TestWorkshop, circuitId: string) => withWorkshop(workshop.id, (tx) => tx.select().from(revision).where(and(eq(revision.workshopId, workshop.id), eq(revision.circuitId, circuitId))));
+const revisionsOf = (workshop: TestWorkshop, circuitId: string) =>
+  withWorkshop(workshop.id, (tx) =>
+    tx
+      .select()
+      .from(revision)
+      .where(and(eq(revision.workshopId, workshop.id), eq(revision.circuitId, circuitId))),
+  );
 
 describe('a parts list read into a revision', () => {
   it('gives a line for each row of parts, in order, with what each asks for', async () => {
@@ -53,18 +68,29 @@ describe('a parts list read into a revision', () => {
     ]);
     expect(lines[0]?.spec).toMatchObject({ value: { significand: 47, exponent: 2, unit: 'ohm' }, tolerancePercent: 1 });
     expect(lines.map((one) => one.standing)).toEqual(['buy', 'buy', 'buy', 'not-fitted']);
-    expect(await act(getRevision, ours.as.storekeeper, { revisionId: made.id })).toMatchObject({ lines: 4, designators: 5, standings: { buy: 3, 'not-fitted': 1 }, upload: { fileName: 'main-board.csv', state: 'settled' } });
+    expect(await act(getRevision, ours.as.storekeeper, { revisionId: made.id })).toMatchObject({
+      lines: 4,
+      designators: 5,
+      standings: { buy: 3, 'not-fitted': 1 },
+      upload: { fileName: 'main-board.csv', state: 'settled' },
+    });
   });
 
   it('keeps the original byte for byte', async () => {
     const made = await readIn(SETTLED, { fileName: 'Prüfling "1".csv' });
     const sent = await act(originalOfRevision, ours.as.builder, { revisionId: made.id });
     expect(new Uint8Array(await sent.arrayBuffer())).toEqual(SETTLED);
-    expect(sent.headers.get('content-disposition')).toMatch(/^attachment; filename="Pr_fling _1_\.csv"; filename\*=UTF-8''Pr%C3%BCfling/);
+    expect(sent.headers.get('content-disposition')).toMatch(
+      /^attachment; filename="Pr_fling _1_\.csv"; filename\*=UTF-8''Pr%C3%BCfling/,
+    );
   });
 
   it('reads a table pasted from a spreadsheet', async () => {
-    const made = await act(createRevision, ours.as.builder, { circuitId: await circuitOf(), name: 'A', pasted: 'Designators\tQuantity\tValue\nR1\t1\t10k\nR2\t1\t22k\n' });
+    const made = await act(createRevision, ours.as.builder, {
+      circuitId: await circuitOf(),
+      name: 'A',
+      pasted: 'Designators\tQuantity\tValue\nR1\t1\t10k\nR2\t1\t22k\n',
+    });
     expect((await linesOf(made.id)).map((one) => one.text)).toEqual(['10k', '22k']);
   });
 
@@ -85,10 +111,15 @@ describe('a parts list read into a revision', () => {
     const input = { circuitId, name: 'A', file: { name: 'a.csv', bytes: new Uint8Array(SETTLED) } };
     const first = await act(createRevision, ours.as.builder, input, key);
     expect(await act(createRevision, ours.as.builder, input, key)).toEqual(first);
-    await expect(act(createRevision, ours.as.builder, { ...input, name: 'B' }, key)).rejects.toMatchObject({ code: 'key.reused' });
-    const race = await Promise.allSettled(Array.from({ length: 4 }, () => act(createRevision, ours.as.builder, { ...input, name: 'C' })));
+    await expect(act(createRevision, ours.as.builder, { ...input, name: 'B' }, key)).rejects.toMatchObject({
+      code: 'key.reused',
+    });
+    const race = await Promise.allSettled(
+      Array.from({ length: 4 }, () => act(createRevision, ours.as.builder, { ...input, name: 'C' })),
+    );
     expect(race.filter((one) => one.status === 'fulfilled')).toHaveLength(1);
-    for (const one of race) if (one.status === 'rejected') expect(one.reason).toMatchObject({ message: expect.any(String) });
+    for (const one of race)
+      if (one.status === 'rejected') expect(one.reason).toMatchObject({ message: expect.any(String) });
     expect((await revisionsOf(ours, circuitId)).map((one) => one.name).sort()).toEqual(['A', 'C']);
   });
 
@@ -98,7 +129,9 @@ describe('a parts list read into a revision', () => {
     await expect(act(createRevision, ours.as.storekeeper, input)).rejects.toMatchObject({ code: 'not-allowed' });
     await expect(act(createRevision, null, input)).rejects.toMatchObject({ code: 'signed-out' });
     await expect(act(createRevision, theirs.as.builder, input)).rejects.toMatchObject({ code: 'not-found' });
-    await expect(act(createRevision, ours.as.builder, { circuitId, name: 'A' })).rejects.toMatchObject({ code: 'input.invalid' });
+    await expect(act(createRevision, ours.as.builder, { circuitId, name: 'A' })).rejects.toMatchObject({
+      code: 'input.invalid',
+    });
     expect(await revisionsOf(ours, circuitId)).toEqual([]);
   });
 
@@ -135,7 +168,11 @@ describe('a list that can’t be read', () => {
     it(`${what} changes nothing, says why and how to mend it, and the file is kept`, async () => {
       const circuitId = await circuitOf();
       const problem = await readIn(bytes, { circuitId, fileName: 'list.csv' }).catch((error: unknown) => error);
-      expect(problem).toMatchObject({ code: 'list.unreadable', errors: [{ code: expect.any(String) }], more: { cure: expect.stringMatching(/./), uploadId: expect.any(String) } });
+      expect(problem).toMatchObject({
+        code: 'list.unreadable',
+        errors: [{ code: expect.any(String) }],
+        more: { cure: expect.stringMatching(/./), uploadId: expect.any(String) },
+      });
       expect(await revisionsOf(ours, circuitId)).toEqual([]);
       const { rejected } = await act(getCircuit, ours.as.builder, { circuitId });
       expect(rejected).toMatchObject([{ fileName: 'list.csv', problem: { code: 'list.unreadable' } }]);
@@ -145,7 +182,9 @@ describe('a list that can’t be read', () => {
   }
 
   it('a bad quantity is told with its row and column', async () => {
-    await expect(readIn(csv(HEADING, 'R1,1,10k,', 'R2,-2,10k,'))).rejects.toMatchObject({ more: { row: 3, column: expect.anything() } });
+    await expect(readIn(csv(HEADING, 'R1,1,10k,', 'R2,-2,10k,'))).rejects.toMatchObject({
+      more: { row: 3, column: expect.anything() },
+    });
   });
 });
 
@@ -156,14 +195,19 @@ describe('questions', () => {
     const made = await readIn(DOUBTFUL, { freeze: true });
     expect(made.state).toBe('draft');
     expect(made.questions.map((one) => one.row)).toEqual([2, 3, 4]);
-    await expect(act(freezeRevision, ours.as.builder, { revisionId: made.id })).rejects.toMatchObject({ code: 'list.unsettled', errors: [{ pointer: 'row 2' }, { pointer: 'row 3' }, { pointer: 'row 4' }] });
+    await expect(act(freezeRevision, ours.as.builder, { revisionId: made.id })).rejects.toMatchObject({
+      code: 'list.unsettled',
+      errors: [{ pointer: 'row 2' }, { pointer: 'row 3' }, { pointer: 'row 4' }],
+    });
     expect((await act(getRevision, ours.as.builder, { revisionId: made.id })).state).toBe('draft');
   });
 
   it('are answered with an option or in own words, each changes its line, and then it freezes', async () => {
     const made = await readIn(DOUBTFUL);
     const [mega, count, taper] = made.questions;
-    await expect(act(answerQuestion, ours.as.builder, { questionId: count?.id ?? '', answer: 'some' })).rejects.toMatchObject({ code: 'input.invalid' });
+    await expect(
+      act(answerQuestion, ours.as.builder, { questionId: count?.id ?? '', answer: 'some' }),
+    ).rejects.toMatchObject({ code: 'input.invalid' });
     await act(answerQuestion, ours.as.builder, { questionId: mega?.id ?? '', answer: '2.2 MΩ' });
     await act(answerQuestion, ours.as.builder, { questionId: count?.id ?? '', answer: '4' });
     const last = await act(answerQuestion, ours.as.builder, { questionId: taper?.id ?? '', answer: 'linear' });
@@ -172,7 +216,9 @@ describe('questions', () => {
     expect(lines[0]?.spec.value).toEqual({ significand: 22, exponent: 5, unit: 'ohm' });
     expect(lines[1]?.quantity).toBe(4);
     expect(lines[2]?.spec.taper).toBe('linear');
-    await expect(act(answerQuestion, ours.as.builder, { questionId: mega?.id ?? '', answer: '2.2 mΩ' })).rejects.toMatchObject({ code: 'state.refused' });
+    await expect(
+      act(answerQuestion, ours.as.builder, { questionId: mega?.id ?? '', answer: '2.2 mΩ' }),
+    ).rejects.toMatchObject({ code: 'state.refused' });
     expect((await act(freezeRevision, ours.as.builder, { revisionId: made.id })).state).toBe('frozen');
   });
 
@@ -180,7 +226,11 @@ describe('questions', () => {
     const shop = await makeWorkshop('Tapers');
     const list = { file: { name: 'pots.csv', bytes: new Uint8Array(csv(HEADING, 'RV1,1,B50k,')) } };
     const first = await act(createRevision, shop.as.builder, { circuitId: await circuitOf(shop), name: 'A', ...list });
-    await act(answerQuestion, shop.as.builder, { questionId: first.questions[0]?.id ?? '', answer: 'linear', remember: true });
+    await act(answerQuestion, shop.as.builder, {
+      questionId: first.questions[0]?.id ?? '',
+      answer: 'linear',
+      remember: true,
+    });
     const second = await act(createRevision, shop.as.builder, { circuitId: await circuitOf(shop), name: 'A', ...list });
     expect(second.openQuestions).toBe(0);
     expect((await act(listLines, shop.as.builder, { revisionId: second.id })).rows[0]?.spec.taper).toBe('linear');
@@ -194,10 +244,20 @@ describe('correcting a draft', () => {
     const [first] = await linesOf(made.id);
     const lineId = first?.id ?? '';
     await act(changeLine, ours.as.builder, { lineId, quantity: 3, designators: ['R1', 'R2', 'R3'], text: '4k99 0.1%' });
-    expect((await linesOf(made.id))[0]).toMatchObject({ quantity: 3, designators: ['R1', 'R2', 'R3'], spec: { value: { significand: 499, exponent: 1 }, tolerancePercent: 0.1 } });
-    await expect(act(changeLine, ours.as.builder, { lineId, text: '2.2m' })).rejects.toMatchObject({ code: 'input.invalid' });
-    await expect(act(changeLine, ours.as.builder, { lineId, quantity: 1.5 })).rejects.toMatchObject({ code: 'input.invalid' });
-    await expect(act(changeLine, ours.as.builder, { lineId, quantity: -1 })).rejects.toMatchObject({ code: 'input.invalid' });
+    expect((await linesOf(made.id))[0]).toMatchObject({
+      quantity: 3,
+      designators: ['R1', 'R2', 'R3'],
+      spec: { value: { significand: 499, exponent: 1 }, tolerancePercent: 0.1 },
+    });
+    await expect(act(changeLine, ours.as.builder, { lineId, text: '2.2m' })).rejects.toMatchObject({
+      code: 'input.invalid',
+    });
+    await expect(act(changeLine, ours.as.builder, { lineId, quantity: 1.5 })).rejects.toMatchObject({
+      code: 'input.invalid',
+    });
+    await expect(act(changeLine, ours.as.builder, { lineId, quantity: -1 })).rejects.toMatchObject({
+      code: 'input.invalid',
+    });
     expect((await linesOf(made.id))[0]?.text).toBe('4k99 0.1%');
   });
 
@@ -206,11 +266,16 @@ describe('correcting a draft', () => {
     const lines = await linesOf(made.id);
     await act(dropLine, ours.as.builder, { lineId: lines[1]?.id ?? '' });
     await act(takeRowAsLine, ours.as.builder, { revisionId: made.id, row: 2, quantity: 4, kind: 'hardware' });
-    expect((await linesOf(made.id)).map((one) => [one.row, one.kind, one.quantity])).toEqual([[3, 'resistor', 1], [2, 'hardware', 4]]);
+    expect((await linesOf(made.id)).map((one) => [one.row, one.kind, one.quantity])).toEqual([
+      [3, 'resistor', 1],
+      [2, 'hardware', 4],
+    ]);
     const reading = await act(readingOfRevision, ours.as.builder, { revisionId: made.id });
     expect(reading.notLines.map((one) => one.row)).toContain(4);
     expect(reading.notLines.map((one) => one.row)).not.toContain(2);
-    await expect(act(takeRowAsLine, ours.as.builder, { revisionId: made.id, row: 2 })).rejects.toMatchObject({ code: 'not-found' });
+    await expect(act(takeRowAsLine, ours.as.builder, { revisionId: made.id, row: 2 })).rejects.toMatchObject({
+      code: 'not-found',
+    });
   });
 
   it('a column that was taken for the wrong thing is read again, and answers stay', async () => {
@@ -226,11 +291,18 @@ describe('correcting a draft', () => {
     const made = await readIn(SETTLED);
     const [first] = await linesOf(made.id);
     await act(changeLine, ours.as.builder, { lineId: first?.id ?? '', quantity: 5 });
-    await expect(act(freezeRevision, ours.as.builder, { revisionId: made.id, version: 1 })).rejects.toMatchObject({ code: 'version.stale', more: { version: 2 } });
-    const { version } = await act(getCircuit, ours.as.builder, { circuitId: (await act(getRevision, ours.as.builder, { revisionId: made.id })).circuit.id });
+    await expect(act(freezeRevision, ours.as.builder, { revisionId: made.id, version: 1 })).rejects.toMatchObject({
+      code: 'version.stale',
+      more: { version: 2 },
+    });
+    const { version } = await act(getCircuit, ours.as.builder, {
+      circuitId: (await act(getRevision, ours.as.builder, { revisionId: made.id })).circuit.id,
+    });
     const circuitId = (await act(getRevision, ours.as.builder, { revisionId: made.id })).circuit.id;
     await act(changeCircuit, ours.as.builder, { circuitId, version, railsVolts: [5] });
-    await expect(act(changeCircuit, ours.as.builder, { circuitId, version, railsVolts: [9] })).rejects.toMatchObject({ code: 'version.stale' });
+    await expect(act(changeCircuit, ours.as.builder, { circuitId, version, railsVolts: [9] })).rejects.toMatchObject({
+      code: 'version.stale',
+    });
     expect((await act(getCircuit, ours.as.builder, { circuitId })).railsVolts).toEqual([5]);
   });
 });
@@ -250,7 +322,9 @@ describe('a frozen revision', () => {
     ]) {
       await expect(tried()).rejects.toMatchObject({ code: 'state.refused' });
     }
-    await expect(withWorkshop(ours.id, (tx) => tx.update(line).set({ quantity: 9 }).where(eq(line.id, lineId)))).rejects.toThrow();
+    await expect(
+      withWorkshop(ours.id, (tx) => tx.update(line).set({ quantity: 9 }).where(eq(line.id, lineId))),
+    ).rejects.toThrow();
     await act(changeLine, ours.as.builder, { lineId, use: 'timing' });
     const after = await linesOf(made.id);
     expect(after.map((one) => ({ ...one, use: null }))).toEqual(before.map((one) => ({ ...one, use: null })));
@@ -262,13 +336,22 @@ describe('a frozen revision', () => {
   it('is copied into a draft, and the two are compared by designator and by part', async () => {
     const made = await readIn(SETTLED, { freeze: true });
     const copy = await act(copyRevision, ours.as.builder, { revisionId: made.id, name: 'B' });
-    await expect(act(copyRevision, ours.as.builder, { revisionId: made.id, name: 'B' })).rejects.toMatchObject({ cause: expect.anything() });
+    await expect(act(copyRevision, ours.as.builder, { revisionId: made.id, name: 'B' })).rejects.toMatchObject({
+      cause: expect.anything(),
+    });
     const lines = await linesOf(copy.id);
     await act(changeLine, ours.as.builder, { lineId: lines[0]?.id ?? '', text: '5k1 1%' });
     await act(dropLine, ours.as.builder, { lineId: lines[1]?.id ?? '' });
     const compared = await act(compareRevisions, ours.as.builder, { revisionId: copy.id, with: made.id });
-    expect(compared.byDesignator.map((one) => [one.change, one.designators])).toEqual([['part', ['R1', 'R2']], ['gone', ['C1']]]);
-    expect(compared.byPart.map((one) => [one.text, one.before, one.after])).toEqual([['4k7 1%', 2, 0], ['100n X7R 50V', 1, 0], ['5k1 1%', 0, 2]]);
+    expect(compared.byDesignator.map((one) => [one.change, one.designators])).toEqual([
+      ['part', ['R1', 'R2']],
+      ['gone', ['C1']],
+    ]);
+    expect(compared.byPart.map((one) => [one.text, one.before, one.after])).toEqual([
+      ['4k7 1%', 2, 0],
+      ['100n X7R 50V', 1, 0],
+      ['5k1 1%', 0, 2],
+    ]);
   });
 
   it('goes out as a CSV that reads back to the same lines, with no cell that a spreadsheet would run', async () => {
@@ -276,7 +359,10 @@ describe('a frozen revision', () => {
     const text = await (await act(exportRevision, ours.as.buyer, { revisionId: made.id })).text();
     for (const cell of text.split(/[\r\n,]+/)) expect(cell).not.toMatch(/^[=+\-@\t]/);
     const again = await readIn(new TextEncoder().encode(text));
-    const shape = (rows: Awaited<ReturnType<typeof linesOf>>) => rows.filter((one) => one.kind === 'resistor').map((one) => [one.designators, one.quantity, one.fitted, one.spec.value, one.spec.tolerancePercent]);
+    const shape = (rows: Awaited<ReturnType<typeof linesOf>>) =>
+      rows
+        .filter((one) => one.kind === 'resistor')
+        .map((one) => [one.designators, one.quantity, one.fitted, one.spec.value, one.spec.tolerancePercent]);
     expect(shape(await linesOf(again.id))).toEqual(shape(await linesOf(made.id)));
   });
 });

@@ -12,7 +12,9 @@ export async function makeShelf(workshop: TestWorkshop): Promise<Shelf> {
   const bins = new Map<string, string>();
   await withWorkshop(workshop.id, async (tx) => {
     const cabinetId = newId();
-    await tx.insert(cabinet).values({ workshopId: workshop.id, id: cabinetId, code: 'A', room: 'bench', columns: 4, rows: 3 });
+    await tx
+      .insert(cabinet)
+      .values({ workshopId: workshop.id, id: cabinetId, code: 'A', room: 'bench', columns: 4, rows: 3 });
     for (let column = 1; column <= 4; column += 1) {
       for (let row = 1; row <= 3; row += 1) {
         const code = `A-0${column}-${row}`;
@@ -29,7 +31,20 @@ export async function makeShelf(workshop: TestWorkshop): Promise<Shelf> {
     await withWorkshop(workshop.id, async (tx) => {
       const lotId = newId();
       await tx.insert(lot).values({ workshopId: workshop.id, id: lotId, partId, binId });
-      await tx.insert(movement).values({ workshopId: workshop.id, kind: 'opening', lotId, partId, binId, quantity, referenceType: 'test', referenceId: lotId, requestKey: lotId, requestLine: 0 });
+      await tx
+        .insert(movement)
+        .values({
+          workshopId: workshop.id,
+          kind: 'opening',
+          lotId,
+          partId,
+          binId,
+          quantity,
+          referenceType: 'test',
+          referenceId: lotId,
+          requestKey: lotId,
+          requestLine: 0,
+        });
     });
     return partId;
   };

@@ -14,7 +14,8 @@ beforeAll(async () => {
 });
 afterAll(closeDatabase);
 
-const circuitsOf = async (workshop: TestWorkshop) => (await act(listCircuits, workshop.as.builder, {})).rows.map((row) => row.name);
+const circuitsOf = async (workshop: TestWorkshop) =>
+  (await act(listCircuits, workshop.as.builder, {})).rows.map((row) => row.name);
 
 describe('starting a circuit', () => {
   it('a builder starts one and everybody of the workshop sees it, the other workshop does not', async () => {
@@ -30,7 +31,9 @@ describe('starting a circuit', () => {
 
   it('refuses a storekeeper, somebody signed out, and an ended session, and changes nothing', async () => {
     const before = await circuitsOf(ours);
-    await expect(act(createCircuit, ours.as.storekeeper, { name: 'No' })).rejects.toMatchObject({ code: 'not-allowed' });
+    await expect(act(createCircuit, ours.as.storekeeper, { name: 'No' })).rejects.toMatchObject({
+      code: 'not-allowed',
+    });
     await expect(act(createCircuit, null, { name: 'No' })).rejects.toMatchObject({ code: 'signed-out' });
     const ended = { ...ours.as.builder, via: 'session' as const, sessionEpoch: 99 };
     await expect(act(createCircuit, ended, { name: 'No' })).rejects.toMatchObject({ code: 'signed-out' });
@@ -42,7 +45,12 @@ describe('starting a circuit', () => {
       code: 'input.invalid',
       errors: [{ pointer: '/railsVolts/0' }],
     });
-    const unknown = perform(createCircuit, { credentials: ours.as.builder, input: { name: 'X', workshopId: theirs.id }, requestId: newId(), idempotencyKey: null });
+    const unknown = perform(createCircuit, {
+      credentials: ours.as.builder,
+      input: { name: 'X', workshopId: theirs.id },
+      requestId: newId(),
+      idempotencyKey: null,
+    });
     await expect(unknown).rejects.toMatchObject({ code: 'input.invalid' });
   });
 
@@ -55,9 +63,14 @@ describe('starting a circuit', () => {
     const key = newId();
     const first = await act(createCircuit, ours.as.builder, { name: 'Once' }, key);
     expect(await act(createCircuit, ours.as.builder, { name: 'Once' }, key)).toEqual(first);
-    await expect(act(createCircuit, ours.as.builder, { name: 'Other' }, key)).rejects.toMatchObject({ code: 'key.reused' });
-    const race = await Promise.allSettled(Array.from({ length: 6 }, () => act(createCircuit, ours.as.builder, { name: 'Raced' }, 'race')));
-    for (const one of race) if (one.status === 'rejected') expect(one.reason).toMatchObject({ code: 'request.running' });
+    await expect(act(createCircuit, ours.as.builder, { name: 'Other' }, key)).rejects.toMatchObject({
+      code: 'key.reused',
+    });
+    const race = await Promise.allSettled(
+      Array.from({ length: 6 }, () => act(createCircuit, ours.as.builder, { name: 'Raced' }, 'race')),
+    );
+    for (const one of race)
+      if (one.status === 'rejected') expect(one.reason).toMatchObject({ code: 'request.running' });
     expect((await circuitsOf(ours)).filter((name) => name === 'Raced')).toHaveLength(1);
   });
 });

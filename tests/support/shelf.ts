@@ -25,19 +25,32 @@ export async function makePart(workshop: TestWorkshop, text: string): Promise<st
   return (await act(createPart, workshop.as.storekeeper, { text })).id;
 }
 
-export async function stock(workshop: TestWorkshop, partId: string, binId: string | undefined, quantity: number): Promise<void> {
+export async function stock(
+  workshop: TestWorkshop,
+  partId: string,
+  binId: string | undefined,
+  quantity: number,
+): Promise<void> {
   if (binId === undefined) throw new Error('no such bin');
   await act(openingStock, workshop.as.storekeeper, { entries: [{ partId, binId, quantity }] });
 }
 
 /** A frozen revision whose lines have been decided for the given parts. */
-export async function makeRevision(workshop: TestWorkshop, wants: readonly { partId: string | null; quantity: number }[]): Promise<{ revisionId: string; lineIds: string[] }> {
+export async function makeRevision(
+  workshop: TestWorkshop,
+  wants: readonly { partId: string | null; quantity: number }[],
+): Promise<{ revisionId: string; lineIds: string[] }> {
   const builder = workshop.as.builder.personId;
   return withWorkshop(workshop.id, async (tx) => {
-    const [made] = await tx.insert(circuit).values({ workshopId: workshop.id, name: `Circuit ${newId()}`, railsVolts: [12, -12] }).returning();
+    const [made] = await tx
+      .insert(circuit)
+      .values({ workshopId: workshop.id, name: `Circuit ${newId()}`, railsVolts: [12, -12] })
+      .returning();
     if (!made) throw new Error('no circuit');
     const revisionId = newId();
-    await tx.insert(revision).values({ workshopId: workshop.id, id: revisionId, circuitId: made.id, name: 'A', createdBy: builder });
+    await tx
+      .insert(revision)
+      .values({ workshopId: workshop.id, id: revisionId, circuitId: made.id, name: 'A', createdBy: builder });
     const lineIds = wants.map(() => newId());
     await tx.insert(line).values(
       wants.map((want, index) => ({
@@ -55,9 +68,25 @@ export async function makeRevision(workshop: TestWorkshop, wants: readonly { par
         specKey: `line ${index + 1}`,
       })),
     );
-    const decided = wants.flatMap((want, index) => (want.partId === null ? [] : [{ workshopId: workshop.id, lineId: lineIds[index] ?? '', partId: want.partId, verdict: 'same', reason: 'asked for', specKey: `line ${index + 1}`, decidedBy: builder }]));
+    const decided = wants.flatMap((want, index) =>
+      want.partId === null
+        ? []
+        : [
+            {
+              workshopId: workshop.id,
+              lineId: lineIds[index] ?? '',
+              partId: want.partId,
+              verdict: 'same',
+              reason: 'asked for',
+              specKey: `line ${index + 1}`,
+              decidedBy: builder,
+            },
+          ],
+    );
     if (decided.length > 0) await tx.insert(decision).values(decided);
-    await tx.execute(sql`update revision set state = 'frozen', frozen_at = now(), frozen_by = ${builder} where workshop_id = ${workshop.id} and id = ${revisionId}`);
+    await tx.execute(
+      sql`update revision set state = 'frozen', frozen_at = now(), frozen_by = ${builder} where workshop_id = ${workshop.id} and id = ${revisionId}`,
+    );
     return { revisionId, lineIds };
   });
 }

@@ -20,22 +20,45 @@ export async function makeWorkshop(name = 'Test Workshop'): Promise<TestWorkshop
   const id = newId();
   const people = (['builder', 'storekeeper', 'buyer', 'lead'] as const).map((role) => ({ role, personId: newId() }));
   await withScope('auth', (tx) =>
-    tx.insert(person).values(people.map(({ role, personId }) => ({ id: personId, email: `${role}.${personId}@example.invalid`, name: `Test ${role}` }))),
+    tx
+      .insert(person)
+      .values(
+        people.map(({ role, personId }) => ({
+          id: personId,
+          email: `${role}.${personId}@example.invalid`,
+          name: `Test ${role}`,
+        })),
+      ),
   );
   await withWorkshop(id, async (tx) => {
     await tx.insert(workshop).values({ id, name: `${name} ${id.slice(-6)}` });
-    await tx.insert(membership).values(people.map(({ role, personId }) => ({ workshopId: id, personId, roles: [role] })));
+    await tx
+      .insert(membership)
+      .values(people.map(({ role, personId }) => ({ workshopId: id, personId, roles: [role] })));
   });
   const credentials = (role: Role): Credentials => {
     const found = people.find((one) => one.role === role);
     if (!found) throw new Error(`no ${role}`);
     return { via: 'session', personId: found.personId, workshopId: id, sessionEpoch: 0 };
   };
-  return { id, as: { builder: credentials('builder'), storekeeper: credentials('storekeeper'), buyer: credentials('buyer'), lead: credentials('lead') } };
+  return {
+    id,
+    as: {
+      builder: credentials('builder'),
+      storekeeper: credentials('storekeeper'),
+      buyer: credentials('buyer'),
+      lead: credentials('lead'),
+    },
+  };
 }
 
 /** Performs a use case as a person would through the API; returns its output or throws the Refusal. */
-export async function act<U extends UseCase & { http: Endpoint }>(useCase: U, credentials: Credentials | null, input: z.input<U['input']>, idempotencyKey: string | null = null): Promise<z.output<U['output']>> {
+export async function act<U extends UseCase & { http: Endpoint }>(
+  useCase: U,
+  credentials: Credentials | null,
+  input: z.input<U['input']>,
+  idempotencyKey: string | null = null,
+): Promise<z.output<U['output']>> {
   const { output } = await perform(useCase, { credentials, input, requestId: newId(), idempotencyKey });
   return output;
 }

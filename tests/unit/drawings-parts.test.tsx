@@ -48,7 +48,9 @@ describe('a drawn resistor', () => {
   });
 
   it('has a fill of its own for every colour of the code', () => {
-    const fills = BAND_COLOURS.map((colour) => /fill-band-\w+/.exec(drawn(<ResistorDrawing bands={[colour]} body="tan" name="one band" />))?.[0]);
+    const fills = BAND_COLOURS.map(
+      (colour) => /fill-band-\w+/.exec(drawn(<ResistorDrawing bands={[colour]} body="tan" name="one band" />))?.[0],
+    );
     expect(new Set(fills).size).toBe(BAND_COLOURS.length);
     expect(fills).not.toContain(undefined);
   });
@@ -112,7 +114,9 @@ describe('a drawn transistor or diode', () => {
 
 describe('every drawing', () => {
   it('has a name for who cannot see it, or is silent where the words beside it say it', () => {
-    expect(drawn(<IcDrawing pins={8} mark="TL072" name="TL072, 8 pins" />)).toMatch(/role="img" aria-label="TL072, 8 pins"/);
+    expect(drawn(<IcDrawing pins={8} mark="TL072" name="TL072, 8 pins" />)).toMatch(
+      /role="img" aria-label="TL072, 8 pins"/,
+    );
     const silent = drawn(<IcDrawing pins={8} mark="TL072" name={null} />);
     expect(silent).toContain('aria-hidden="true"');
     expect(silent).not.toContain('role="img"');

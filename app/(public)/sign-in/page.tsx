@@ -9,7 +9,11 @@ function ownPath(next: string | string[] | undefined): string {
   return typeof next === 'string' && /^\/(?![/\\])/.test(next) ? next : '/';
 }
 
-export default async function SignInPage({ searchParams }: { readonly searchParams: Promise<{ next?: string | string[] }> }) {
+export default async function SignInPage({
+  searchParams,
+}: {
+  readonly searchParams: Promise<{ next?: string | string[] }>;
+}) {
   const { next } = await searchParams;
   return (
     <>

@@ -13,7 +13,12 @@ export default async function SettingsPage() {
   const [settings, me] = await Promise.all([ask(getSettings, {}), ask(whoAmI, {})]);
   return (
     <>
-      <PageTitle above={<AreaLinks label="Workshop" links={WORKSHOP_LINKS} />} title="Settings" remainder={settings.name} facts={[me.roles.includes('lead') ? 'They hold for everybody in the workshop.' : 'A lead can change them.']} />
+      <PageTitle
+        above={<AreaLinks label="Workshop" links={WORKSHOP_LINKS} />}
+        title="Settings"
+        remainder={settings.name}
+        facts={[me.roles.includes('lead') ? 'They hold for everybody in the workshop.' : 'A lead can change them.']}
+      />
       <SettingsForm settings={settings} mayChange={me.roles.includes('lead')} />
     </>
   );

@@ -8,5 +8,8 @@ export async function GET(): Promise<Response> {
   const database = await databaseAnswers().catch(() => false);
   const jobs = database && (await jobsAnswer().catch(() => false));
   const well = database && jobs;
-  return Response.json({ database, jobs }, { status: well ? 200 : 503, headers: { 'cache-control': 'no-store', ...(well ? {} : { 'retry-after': '5' }) } });
+  return Response.json(
+    { database, jobs },
+    { status: well ? 200 : 503, headers: { 'cache-control': 'no-store', ...(well ? {} : { 'retry-after': '5' }) } },
+  );
 }

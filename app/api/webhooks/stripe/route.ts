@@ -11,7 +11,8 @@ const LIMIT_BYTES = 256 * 1024;
 export async function POST(request: Request): Promise<Response> {
   const requestId = newRequestId();
   try {
-    if (Number(request.headers.get('content-length') ?? 0) > LIMIT_BYTES) return new Response('too large', { status: 413 });
+    if (Number(request.headers.get('content-length') ?? 0) > LIMIT_BYTES)
+      return new Response('too large', { status: 413 });
     const verified = verifyWebhook(await request.text(), request.headers.get('stripe-signature') ?? '');
     if (!verified.ok) return new Response('not signed by the payment service', { status: 400 });
     return Response.json({ received: await acceptPaymentEvent(verified.event.body) });
