@@ -38,6 +38,7 @@ export async function readUpload({ id: jobId, workshopId, payload }: HandledJob)
   const bar = progressBar(workshopId, uploadId, bytes.length);
   try {
     const read = await readList(bytes, { fileName: original.fileName, onProgress: bar.reading, signal: bar.signal });
+    if (!read.ok && read.problem.code === 'cancelled') throw new ReadingCancelled();
     if (!read.ok) {
       await giveUp(
         workshopId,

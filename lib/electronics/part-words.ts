@@ -102,11 +102,11 @@ export const KIND_WORDS: Words<PartKind> = [
     'hardware',
   ],
   [
-    /\b(?:fuse|led|battery|lens) ?(?:holders?|clips?|spacers?|bezels?)\b|\b(?:switch|button|knob|fader|slider|tact\w*)\b.*\bcaps?\b/i,
+    /\b(?:fuse|led|battery|lens) ?(?:holders?|clips?|spacers?|bezels?)\b|(?:switch|button|knob|fader|slider|\btact\w*)\b.*\bcaps?\b/i,
     'hardware',
   ],
   [
-    /\b(?:jacks?|sockets?|headers?|connectors?|buchse\w*|stecker\w*|(?:screw |spring )?terminals?(?: blocks?)?|plugs?|receptacles?|IDC|klemme\w*|conn|fassung|sockel|zoccolo|zocalo|embase|pin strips?|stiftleiste|buchsenleiste|banana)\b/i,
+    /\b(?:jacks?|sockets?|headers?|HDR|(?:sd|card|memory card) holders?|connectors?|buchse\w*|stecker\w*|(?:screw |spring )?terminals?(?: blocks?)?|plugs?|receptacles?|IDC|klemme\w*|conn|fassung|sockel|zoccolo|zocalo|embase|pin strips?|stiftleiste|buchsenleiste|banana)\b/i,
     'connector',
   ],
   [/\b(?:opto[- ]?coup\w*|opto[- ]?isol\w*|opto[- ]?koppler|vactrols?)\b/i, 'optocoupler'],

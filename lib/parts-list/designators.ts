@@ -12,11 +12,15 @@ const RANGE = new RegExp(
 
 /** A whole cell in which ranges are spelled with blanks (`J1- J6`) or words, brought to one spelling. */
 function tidy(text: string): string {
-  return text
-    .normalize('NFKC')
-    .replace(/[\u2010-\u2015]/g, '-')
-    .replace(/\s*(-|\.{2,3}|…)\s*(?=[A-Za-z]{0,4}\d)/g, '$1')
-    .replace(/(\d)\s+(?:to|bis|thru|through)\s+(?=[A-Za-z]{0,4}\d)/gi, '$1-');
+  return (
+    text
+      .normalize('NFKC')
+      // A remark in brackets, such as J5 (red stripe), names nothing; (R1, R2) does.
+      .replace(/\s*\((?=[^)]*[A-Za-z]{3})(?![^)]*\d)[^)]*\)/g, ' ')
+      .replace(/[\u2010-\u2015]/g, '-')
+      .replace(/\s*(-|\.{2,3}|…)\s*(?=[A-Za-z]{0,4}\d)/g, '$1')
+      .replace(/(\d)\s+(?:to|bis|thru|through)\s+(?=[A-Za-z]{0,4}\d)/gi, '$1-')
+  );
 }
 
 export interface Designators {
@@ -106,7 +110,10 @@ const KINDS: readonly (readonly [RegExp, string])[] = [
 
 /** The kind that the letters stand for (IEC 81346 and IEEE 315 letters, and what European lists use); null for no designator. */
 export function kindOfDesignator(designator: string): string | null {
-  const match = /^(?:[A-Z]\d?:)?([A-Za-z]{1,5}\$?)[-_]?\d{1,5}[A-Za-z]?$/.exec(designator);
+  const match =
+    /^(?:[A-Z]\d?:)?([A-Za-z]{1,5}\$?)[-_]?\d{1,5}[A-Za-z]?$/.exec(designator) ??
+    // PT-CV1: the letters, then the panel's word.
+    /^([A-Z]{2,4})[-_][A-Z]{1,8}\d{0,3}$/.exec(designator);
   const letters = match?.[1]?.toUpperCase();
   if (letters === undefined) return null;
   return KINDS.find(([pattern]) => pattern.test(letters))?.[1] ?? null;

@@ -3,9 +3,10 @@
  * be read at all is a problem with its place and cure; what can be read in two ways is a question beside its line.
  */
 import type { TaperConvention } from '@/lib/electronics/read-taper';
-import { type Column, segmentsOf } from './columns';
+import { blocksOf } from './blocks';
+import { type Column, type Segment, segmentsOf } from './columns';
 import { kindOfDesignator } from './designators';
-import { COLUMN_ROLES, type Role } from './heading-words';
+import { COLUMN_ROLES, type Role, roleOfHeading } from './heading-words';
 import { decodeText, sniff } from './read-bytes';
 import { readDelimited } from './read-delimited';
 import { looksLikeMarkdown, readMarkdown } from './read-markdown-table';
@@ -78,72 +79,25 @@ async function tablesIn(bytes: Uint8Array): Promise<{ format: ListFormat; tables
     : { format: 'text', tables: [readDelimited(text)] };
 }
 
+/** What the tables gave so far. */
+interface Gathered {
+  readonly tables: ReadTable[];
+  readonly lines: PartsListLine[];
+  readonly notLines: NotLine[];
+  readonly questions: Question[];
+}
+
 async function readTables(
   format: ListFormat,
   tables: readonly Table[],
   options: ReadingOptions,
 ): Promise<PartsListReading | PartsListProblem> {
   const total = tables.reduce((sum, table) => sum + table.rows.length, 0);
-  const read: ReadTable[] = [];
-  const lines: PartsListLine[] = [];
-  const notLines: NotLine[] = [];
-  const questions: Question[] = [];
-  let done = 0;
-  for (const table of tables) {
-    const fixed = rolesGiven(table.sheet, options);
-    const segments = segmentsOf(table.rows, fixed);
-    const reader = new RowReader(table.sheet, options.taperConvention ?? 'ask');
-    const bySegment: PartsListLine[][] = [];
-    const asked: Question[] = [];
-    for (const segment of segments) {
-      reader.startSegment();
-      const here: PartsListLine[] = [];
-      if (segment.heading)
-        notLines.push({
-          row: segment.heading.row,
-          ...(table.sheet === null ? {} : { sheet: table.sheet }),
-          why: 'heading, no part',
-          text: textOf(segment.heading),
-        });
-      for (const row of segment.rows) {
-        const understood = reader.understand(row, segment);
-        if ('line' in understood) {
-          here.push(understood.line);
-          asked.push(...understood.questions);
-        } else notLines.push(understood.notLine);
-        done += 1;
-        if (done % ROWS_BETWEEN_BREATHS === 0) {
-          options.onProgress?.(done, total);
-          await new Promise((resume) => setImmediate(resume));
-          if (options.signal?.aborted)
-            throw new ReadingStopped({
-              code: 'cancelled',
-              detail: 'The reading was cancelled.',
-              cure: 'Start it again.',
-            });
-        }
-      }
-      bySegment.push(here);
-    }
-    const repeated = repeatedSegments(bySegment);
-    bySegment.forEach((here, index) => {
-      if (!repeated.has(index)) lines.push(...here);
-      else
-        notLines.push(
-          ...here.map((line) => ({
-            row: line.row,
-            ...(line.sheet === undefined ? {} : { sheet: line.sheet }),
-            why: 'the same list again, grouped elsewhere in the file',
-            text: line.text,
-          })),
-        );
-    });
-    const kept = new Set(bySegment.flatMap((here, index) => (repeated.has(index) ? [] : here.map((line) => line.row))));
-    questions.push(...asked.filter((question) => kept.has(question.row)));
-    const longest = segments.reduce((a, b) => (b.rows.length > a.rows.length ? b : a));
-    read.push({ sheet: table.sheet, columns: longest.columns, rows: table.rows });
-  }
+  const gathered: Gathered = { tables: [], lines: [], notLines: [], questions: [] };
+  const pace = paceOf(total, options);
+  for (const table of tables) await readTable(table, gathered, options, pace);
   options.onProgress?.(total, total);
+  const { lines, notLines, questions } = gathered;
   if (lines.length === 0) {
     return {
       ok: false,
@@ -154,16 +108,92 @@ async function readTables(
       cure: 'Check that it is the parts list, with designators or quantities and a value or part number in each row.',
     };
   }
-  const inOrder = (a: { row: number }, b: { row: number }) => a.row - b.row;
-  return {
-    ok: true,
-    format,
-    sheets: tables.flatMap((table) => table.sheet ?? []),
-    tables: read,
-    lines,
-    notLines: tables.length === 1 ? notLines.sort(inOrder) : notLines,
-    questions,
+  const sheets = tables.flatMap((table) => table.sheet ?? []);
+  return { ok: true, format, sheets, tables: gathered.tables, lines, notLines, questions };
+}
+
+/** Called once a row: tells how far it is, lets other work in between, and stops when asked to. */
+function paceOf(total: number, { onProgress, signal }: ReadingOptions): () => Promise<void> | undefined {
+  let done = 0;
+  return () => {
+    done += 1;
+    if (done % ROWS_BETWEEN_BREATHS !== 0) return undefined;
+    onProgress?.(done, total);
+    return new Promise((resume) => setImmediate(resume)).then(() => {
+      if (signal?.aborted)
+        throw new ReadingStopped({ code: 'cancelled', detail: 'The reading was cancelled.', cure: 'Start it again.' });
+    });
   };
+}
+
+async function readTable(
+  table: Table,
+  into: Gathered,
+  options: ReadingOptions,
+  pace: () => Promise<void> | undefined,
+): Promise<void> {
+  const place = (row: number) => (table.sheet === null ? { row } : { row, sheet: table.sheet });
+  const segments = segmentsOfSheet(table.rows, rolesGiven(table.sheet, options));
+  const reader = new RowReader(table.sheet, options.taperConvention ?? 'ask');
+  const bySegment: PartsListLine[][] = [];
+  const notLines: NotLine[] = [];
+  const asked: Question[] = [];
+  for (const segment of segments) {
+    reader.startSegment();
+    const here: PartsListLine[] = [];
+    const { heading } = segment;
+    if (heading) notLines.push({ ...place(heading.row), why: 'heading, no part', text: textOf(heading) });
+    for (const row of segment.rows) {
+      const understood = reader.understand(row, segment);
+      if ('line' in understood) {
+        here.push(understood.line);
+        asked.push(...understood.questions);
+      } else notLines.push(understood.notLine);
+      const breath = pace();
+      if (breath) await breath;
+    }
+    bySegment.push(here);
+  }
+  const repeated = repeatedSegments(bySegment);
+  const kept = bySegment.flatMap((lines, index) => (repeated.has(index) ? [] : lines));
+  const again = bySegment.flatMap((lines, index) => (repeated.has(index) ? lines : []));
+  const why = 'the same list again, grouped elsewhere in the file';
+  notLines.push(...again.map(({ row, text }) => ({ ...place(row), why, text })));
+  const rowsOfLines = new Set(kept.map((line) => line.row));
+  into.lines.push(...kept);
+  into.notLines.push(...eachRowOnce(notLines).filter((one) => !rowsOfLines.has(one.row)));
+  into.questions.push(...asked.filter((question) => rowsOfLines.has(question.row)));
+  into.tables.push({ sheet: table.sheet, columns: columnsShown(segments), rows: table.rows });
+}
+
+/** A parts list names its places or counts its parts. */
+const COUNTING_ROLES: readonly (Role | null)[] = ['designators', 'quantity'];
+
+/** Of tables side by side, those with a heading are lists; what stands beside them is something else. */
+function segmentsOfSheet(rows: readonly TableRow[], fixed: Record<number, Role> | null): Segment[] {
+  const blocks = blocksOf(rows).map((block) => segmentsOf(block, fixed));
+  const headed = blocks.filter((segments) =>
+    segments.some(({ heading }) => heading?.cells.some((cell) => COUNTING_ROLES.includes(roleOfHeading(cell)))),
+  );
+  return (headed.length > 0 ? headed : blocks).flat();
+}
+
+/** The columns of the longest stretch, and of the tables beside it. */
+function columnsShown(segments: readonly Segment[]): readonly Column[] {
+  const shown = new Map<number, Column>();
+  for (const segment of [...segments].sort((a, b) => b.rows.length - a.rows.length)) {
+    for (const column of segment.columns) {
+      const before = shown.get(column.index);
+      if (!before || (before.role === 'ignore' && column.role !== 'ignore')) shown.set(column.index, column);
+    }
+  }
+  return [...shown.values()].sort((a, b) => a.index - b.index);
+}
+
+function eachRowOnce(notLines: readonly NotLine[]): NotLine[] {
+  const byRow = new Map<number, NotLine>();
+  for (const one of notLines) if (!byRow.has(one.row)) byRow.set(one.row, one);
+  return [...byRow.values()].sort((a, b) => a.row - b.row);
 }
 
 /** Null where nobody said anything of this sheet. */

@@ -1,14 +1,16 @@
 /** One row under known columns to a line, a row that is no part, or a line with questions. */
 import { familyOf } from '@/lib/electronics/families/family-of';
-import { PART_KINDS, type PartKind, type PartSpec } from '@/lib/electronics/part-spec';
-import { firstOf, KIND_WORDS, NOT_FITTED } from '@/lib/electronics/part-words';
+import type { PartKind, PartSpec } from '@/lib/electronics/part-spec';
+import { firstOf, KIND_WORDS } from '@/lib/electronics/part-words';
 import { readPartText } from '@/lib/electronics/read-part-text';
 import type { TaperConvention } from '@/lib/electronics/read-taper';
 import { toNumber } from '@/lib/electronics/quantity';
-import type { Column, Segment } from './columns';
+import type { Segment } from './columns';
 import { expandDesignators, kindOfDesignator } from './designators';
 import type { Role } from './heading-words';
-import { columnLetters, ReadingStopped, type TableRow } from './table';
+import { kindOfRow } from './kind-of-row';
+import { isFitted, quantityIn } from './quantity-and-fitting';
+import { columnLetters, type TableRow } from './table';
 
 export interface PartsListLine {
   readonly row: number;
@@ -46,6 +48,8 @@ export type Understood =
   | { readonly notLine: NotLine };
 
 const TOTAL = /^(?:grand\s+)?(?:total|sum|summe|gesamt(?:summe)?|subtotal|somme|totale|totaal|zwischensumme|suma)\b/i;
+/** `Vertical card holder` in the place of a designator describes; RATE and `Main out` are a panel's words. */
+const SENTENCE = /^(?=.*[a-z]{3})\S+(?:\s+\S+){2,}$/;
 const ARTWORK = /^(?:outline|logo|artwork|fiducial|board outline|silkscreen|frame|\*{2,}.*)$/i;
 
 export const textOf = (row: TableRow): string => row.cells.filter((cell) => cell !== '').join(' · ');
@@ -88,11 +92,14 @@ export class RowReader {
       )
     )
       return notLine('total, no part');
+    const places = text('designators');
+    const isSentence =
+      SENTENCE.test(places) && expandDesignators(places).list.every((one) => kindOfDesignator(one) === null);
     const cells = {
-      designators: text('designators'),
+      designators: isSentence ? '' : places,
       quantity: text('quantity'),
       value: text('value'),
-      description: text('description'),
+      description: [text('description'), isSentence ? places : ''].filter((piece) => piece !== '').join(' '),
       kind: text('kind'),
       package: text('package'),
       notes: text('notes'),
@@ -150,9 +157,9 @@ export class RowReader {
       questions.push({ ...place, ...(column === undefined ? {} : { column }), code, ask: said, options });
     };
     const { list: designators } = expandDesignators(cells.designators);
-    const quantity = this.quantityIn(cells.quantity, place, letterOf('quantity') ?? 'A', columns);
+    const quantity = quantityIn(cells.quantity, place, letterOf('quantity') ?? 'A');
     const source = cells.value || cells.description || cells.number || cells.kind || cells.package;
-    const kind = this.kindOf(designators, source, cells);
+    const kind = kindOfRow({ ...cells, designators, source, section: this.section });
     const wholeText = [
       source,
       cells.value === '' ? '' : cells.notes,
@@ -163,10 +170,13 @@ export class RowReader {
     const main = this.specOf(source, kind);
     const around = wholeText === source ? main : this.specOf(wholeText, kind);
     const spec = merged(main, around, cells.package, kind);
-    const fitted = spec.fitted && this.isFitted(columns, row, cells);
+    const remarks = [cells.value, cells.notes, cells.description, cells.quantity, cells.package];
+    const fitted = spec.fitted && isFitted(columns, row, remarks);
     const number =
       cells.number !== '' && /\d/.test(cells.number) && !/^\d{1,3}$/.test(cells.number) ? cells.number : null;
-    const ownNumber = numberFor(kind, main, source) ?? (main.value === null ? number : null);
+    const ownNumber = VOLTS_ONLY.test(source)
+      ? (this.specOf(cells.description, kind).partNumber ?? numberOf(kind, main, source, number))
+      : numberOf(kind, main, source, number);
     for (const doubt of fitted ? main.doubts : []) ask(doubt.code, doubt.ask, doubt.options, 'value');
     const named = designators.filter((one) => kindOfDesignator(one) !== null);
     const count = named.length === designators.length ? designators.length : 0;
@@ -178,22 +188,8 @@ export class RowReader {
         'quantity',
       );
     }
-    const value = main.value ?? (around.value && main.partNumber === null ? around.value : null);
-    const keepsValue =
-      value !== null &&
-      !(
-        [
-          'ic',
-          'transistor',
-          'diode',
-          'connector',
-          'hardware',
-          'regulator',
-          'switch',
-          'led',
-          'optocoupler',
-        ] as PartKind[]
-      ).includes(kind);
+    const read = main.value ?? (main.partNumber === null ? around.value : null);
+    const value = NAMED_BY_NUMBER.includes(kind) ? null : read;
     return {
       line: {
         ...place,
@@ -201,14 +197,16 @@ export class RowReader {
         quantity,
         fitted,
         kind,
-        value: keepsValue ? { si: toNumber(value), unit: value.unit } : null,
+        value: value === null ? null : { si: toNumber(value), unit: value.unit },
         partNumber: ownNumber,
         alternatives: spec.alternatives,
         text: source,
         spec: {
           ...spec,
           kind,
-          value: keepsValue ? value : null,
+          // What other cells add belongs to what the line asks for.
+          text: addsTo(main, spec) ? wholeText.slice(0, MOST_SPEC_TEXT) : source,
+          value,
           partNumber: ownNumber,
           fitted,
           family: spec.family ?? (ownNumber === null ? null : (familyOf(ownNumber)?.familyId ?? null)),
@@ -231,119 +229,34 @@ export class RowReader {
     this.read.set(key, spec);
     return spec;
   }
-
-  /** Whole and positive, or nothing; a fraction or a negative number stops the reading with its place. */
-  private quantityIn(
-    text: string,
-    place: { row: number; sheet?: string },
-    column: string,
-    columns: readonly Column[],
-  ): number | null {
-    if (text === '' || !columns.some((one) => one.role === 'quantity')) return null;
-    const cell = text.normalize('NFKC').trim();
-    const stop = (what: string) =>
-      new ReadingStopped({
-        code: 'bad-quantity',
-        detail: `The quantity “${text.slice(0, 40)}” in row ${place.row}, column ${column} is ${what}.`,
-        ...place,
-        column,
-        cure: 'Write a whole number of parts, or leave the cell empty.',
-      });
-    if (/^[-−]\s*\d/.test(cell)) throw stop('negative');
-    const number = /^(?:[x×]\s*)?(\d{1,7})(?:[.,](\d+))?\s*(?:[x×]|pcs?\.?|st(?:k|ück)?\.?|pieces?)?(?=$|\s|\()/i.exec(
-      cell,
-    );
-    if (!number) return null;
-    if (number[2] !== undefined && !/^0+$/.test(number[2])) throw stop('a fraction');
-    return Number(number[1]);
-  }
-
-  private isFitted(
-    columns: readonly Column[],
-    row: TableRow,
-    cells: { value: string; notes: string; description: string; quantity: string; package: string },
-  ): boolean {
-    for (const column of columns) {
-      if (column.role !== 'fitted') continue;
-      const cell = (row.cells[column.index] ?? '').trim();
-      if (cell === '') continue;
-      const meansNot = /^(?:dnp|dnf|dni|do not|not|no pop|omit|excluded)/i.test(cell);
-      const yes = /^(?:1|x|yes|y|true|ja|oui|sí|si|wahr)$/i.test(cell);
-      const headingSaysNot = /dn[pfi]|not/i.test(column.heading);
-      if (meansNot || (yes && headingSaysNot) || (!headingSaysNot && /^(?:0|no|n|false|nein|non)$/i.test(cell)))
-        return false;
-    }
-    return ![cells.value, cells.notes, cells.description, cells.quantity, cells.package].some((cell) =>
-      NOT_FITTED.test(cell),
-    );
-  }
-
-  /** A part number that is known wins; then words; then the letters of the designator; then section and value. */
-  private kindOf(
-    designators: readonly string[],
-    source: string,
-    cells: { kind: string; description: string; package: string; notes: string; value: string },
-  ): PartKind {
-    const letters = designators.map((one) => kindOfDesignator(one)).find((one) => one !== null) ?? null;
-    const byLetters = PART_KINDS.find((one) => one === letters) ?? null;
-    const byColumn = firstOf(KIND_WORDS, cells.kind);
-    const byWords =
-      firstOf(KIND_WORDS, source) ??
-      firstOf(KIND_WORDS, cells.description) ??
-      firstOf(KIND_WORDS, cells.package.replaceAll('_', ' ')) ??
-      firstOf(KIND_WORDS, cells.notes);
-    const isValue =
-      byLetters !== null && ['resistor', 'capacitor', 'inductor', 'potentiometer', 'trimmer'].includes(byLetters);
-    const family = isValue || byColumn === 'resistor' || byColumn === 'capacitor' ? null : familyOf(source);
-    if (family && compatible(byLetters, family.kind)) return family.kind;
-    if (byColumn !== null && compatible(byLetters, byColumn)) return refine(byColumn, byWords);
-    if (byLetters !== null)
-      return byWords !== null && byWords !== byLetters && narrows(byLetters, byWords) ? byWords : byLetters;
-    if (byColumn !== null) return refine(byColumn, byWords);
-    if (byWords !== null) return byWords;
-    if (this.section !== null) return this.section;
-    if (family) return family.kind;
-    const guessed = readPartText(source, {}).kind;
-    return guessed ?? 'other';
-  }
 }
 
-/** Kinds that the same letters are used for, so that words or a part number may say which. */
-const SHARED: Readonly<Partial<Record<PartKind, readonly PartKind[]>>> = {
-  resistor: ['thermistor', 'potentiometer', 'trimmer'],
-  potentiometer: ['trimmer', 'connector', 'thermistor', 'resistor'],
-  trimmer: ['potentiometer', 'transistor', 'transformer'],
-  diode: ['led', 'ic', 'regulator'],
-  transistor: ['regulator', 'ic', 'transformer', 'trimmer', 'diode'],
-  ic: ['regulator', 'optocoupler', 'connector', 'other', 'pcb', 'crystal'],
-  connector: ['crystal', 'ic', 'switch', 'hardware'],
-  switch: ['connector', 'hardware'],
-  inductor: ['led'],
-  fuse: ['inductor', 'hardware'],
-  hardware: ['connector', 'pcb'],
-  other: [
-    'connector',
-    'switch',
-    'optocoupler',
-    'transformer',
-    'crystal',
-    'diode',
-    'hardware',
-    'pcb',
-    'regulator',
-    'ic',
-    'led',
-  ],
-  crystal: ['ic'],
-  capacitor: [],
-  optocoupler: ['ic'],
-};
+/** Kinds whose figures are part of their number. */
+const NAMED_BY_NUMBER: readonly PartKind[] = [
+  'ic',
+  'transistor',
+  'diode',
+  'connector',
+  'hardware',
+  'regulator',
+  'switch',
+  'led',
+  'optocoupler',
+];
 
-const narrows = (letters: PartKind, words: PartKind): boolean => SHARED[letters]?.includes(words) ?? false;
-const compatible = (letters: PartKind | null, kind: PartKind): boolean =>
-  letters === null || letters === kind || narrows(letters, kind);
-const refine = (general: PartKind, words: PartKind | null): PartKind =>
-  words !== null && narrows(general, words) ? words : general;
+const MOST_SPEC_TEXT = 300;
+
+const RATINGS = [
+  'tolerancePercent',
+  'ratedVolts',
+  'ratedWatts',
+  'ratedAmperes',
+  'dielectric',
+  'technology',
+  'taper',
+] as const;
+
+const addsTo = (before: PartSpec, after: PartSpec): boolean => RATINGS.some((one) => before[one] !== after[one]);
 
 function shorten(designators: readonly string[]): string {
   return designators.length <= 3 ? designators.join(', ') : `${designators[0]} … ${designators.at(-1)}`;
@@ -366,6 +279,14 @@ function merged(main: PartSpec, around: PartSpec, packageCell: string, kind: Par
     fitted: main.fitted && around.fitted,
   };
 }
+
+/** The number that names the part: where the part is named, else in the column of part numbers. */
+function numberOf(kind: PartKind, main: PartSpec, source: string, column: string | null): string | null {
+  return numberFor(kind, main, source) ?? (main.value === null ? column : null);
+}
+
+/** `10V` of a reference whose description says LM4040 is what it gives, not what it is. */
+const VOLTS_ONLY = /^[+-]?\d+(?:[.,]\d+)?\s*V?$/i;
 
 /** A number only where the kind has numbers: `510` on a resistor is a value. */
 function numberFor(kind: PartKind, spec: PartSpec, source: string): string | null {
