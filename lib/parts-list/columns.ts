@@ -54,9 +54,28 @@ export function segmentsOf(rows: readonly TableRow[], fixed: Readonly<Record<num
   return [
     ...(headed.length > 0
       ? leading.map((segment) => ({ ...segment, columns: [] as Column[] }))
-      : leading.map((segment) => ({ ...segment, columns: columnsOf(null, segment.rows, fixed) }))),
+      : leading.map(underUnknownHeading).map((segment) => ({
+          ...segment,
+          columns: columnsOf(segment.heading, segment.rows, fixed),
+        }))),
     ...headed.map((segment) => ({ ...segment, columns: columnsOf(segment.heading, segment.rows, fixed) })),
   ];
+}
+
+/** A first row of words without a figure, over columns full of figures, is a heading in words we don't know. */
+function underUnknownHeading(segment: { heading: TableRow | null; rows: TableRow[] }): typeof segment {
+  const [first, ...rest] = segment.rows;
+  const words = first?.cells.filter((cell) => cell !== '') ?? [];
+  if (!first || words.length < 2 || rest.length === 0 || words.some((cell) => /\d/.test(cell) || cell.length > 40))
+    return segment;
+  const below = rest.slice(0, SAMPLE_ROWS);
+  const figures = first.cells.filter((cell, index) => {
+    const cells = below.map((row) => row.cells[index] ?? '').filter((one) => one !== '');
+    return (
+      cell !== '' && cells.length >= below.length / 2 && cells.filter((one) => /\d/.test(one)).length > cells.length / 2
+    );
+  });
+  return figures.length >= 2 ? { heading: first, rows: rest } : segment;
 }
 
 interface Content {
@@ -163,7 +182,7 @@ function columnsOf(
         : undefined);
     if (byContent) give(byContent.index, 'quantity', `${said(byContent)}: whole numbers`);
   }
-  giveValue(columns, free, give, said);
+  if (![...roles.values()].some((one) => one.role === 'value')) giveValue(columns, free, give, said);
   for (const column of free()) {
     if (column.hint !== null && column.hint !== 'designators' && column.hint !== 'quantity' && column.hint !== 'value')
       give(column.index, column.hint, `${said(column)} says so`);

@@ -23,7 +23,7 @@ const WORDS: readonly (readonly [Role, RegExp])[] = [
     'fitted',
     /^(?:dnp|dnf|dni|fitted|populate[d]?|fit|bestückt|bestueckt|mounted|monté|montado|gemonteerd|do not (?:fit|populate|place))\??$/,
   ],
-  ['price', /(?:price|cost|^total(?!\s*q)|preis|kosten|prix|coût|precio|prijs|prezzo|€|\$|eur\b|usd\b|€\/)/],
+  ['price', /(?:price|cost|^total(?!\s*q)|preis|kosten|prix|coût|precio|prijs|prezzo|€|\$|\beur\b|\busd\b|€\/)/],
   [
     'order-code',
     /(?:^sku|order (?:code|no|number|nr|#)|bestell|digi-?key|mouser|lcsc|farnell|newark|rs (?:no|part|#)|reichelt|tayda|thonk|supplier|vendor|lieferant|fournisseur|proveedor|leverancier|fornitore|^link|^url|shop|distributor|oc_|catalog|ref\.? mouser|customer reference|jlc|szlcsc)/,
