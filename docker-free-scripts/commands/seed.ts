@@ -8,7 +8,7 @@ import { mkdirSync, writeFileSync } from 'node:fs';
 import path from 'node:path';
 import { closeDatabase, withScope } from '@/db/client';
 import { workshop } from '@/db/schema/people';
-import { makeBatches, makeCircuits } from '../seed/making';
+import { decideUsual, makeBatches, makeCircuits } from '../seed/making';
 import { makeOffers, makeOrders, makeSuppliers } from '../seed/buying';
 import { FERNHOLLOW, LARKSPUR, makeWorkshop } from '../seed/people';
 import { makeShelf } from '../seed/shelf';
@@ -34,6 +34,10 @@ async function main(): Promise<void> {
   console.log(`${offers.size} offers of three suppliers`);
   const revisions = await makeCircuits(fernhollow.id, fernhollow.people);
   console.log(`${revisions.size} revisions read`);
+  const settled = ['Wave Folder 1.0', 'State-Variable Filter A', 'Slope Pair C'].flatMap(
+    (name) => revisions.get(name) ?? [],
+  );
+  await decideUsual(fernhollow.id, fernhollow.people, settled);
   await makeBatches(fernhollow.id, fernhollow.people, revisions);
   await makeOrders(fernhollow.id, fernhollow.people, suppliers, offers);
 

@@ -204,21 +204,19 @@ async function markPaid(workshopId: string, orderId: string, personId: string): 
       .from(purchaseOrder)
       .where(and(eq(purchaseOrder.workshopId, workshopId), eq(purchaseOrder.id, orderId)));
     if (!order) throw new Error('no such order');
-    await tx
-      .insert(payment)
-      .values({
-        workshopId,
-        id: newId(),
-        orderId,
-        attempt: 1,
-        state: 'paid',
-        amountMinor: order.totalMinor,
-        currency: order.currency,
-        checkoutSessionId: `cs_demo_${orderId}`,
-        paymentIntentId: `pi_demo_${orderId}`,
-        paidAt: new Date(),
-        createdBy: personId,
-      });
+    await tx.insert(payment).values({
+      workshopId,
+      id: newId(),
+      orderId,
+      attempt: 1,
+      state: 'paid',
+      amountMinor: order.totalMinor,
+      currency: order.currency,
+      checkoutSessionId: `cs_demo_${orderId}`,
+      paymentIntentId: `pi_demo_${orderId}`,
+      paidAt: new Date(),
+      createdBy: personId,
+    });
     await tx
       .update(purchaseOrder)
       .set({ state: 'paid' })

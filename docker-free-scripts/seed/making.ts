@@ -1,10 +1,11 @@
 /** Circuits, revisions read from their lists, and batches under way. */
-import { eq, and } from 'drizzle-orm';
+import { and, eq, sql } from 'drizzle-orm';
 import { withWorkshop } from '@/db/client';
 import { line } from '@/db/schema/circuits';
 import { bin } from '@/db/schema/stores';
 import { demoCircuits } from '@/db/seed/circuits';
 import { createCircuit } from '@/lib/circuits/create-circuit';
+import { decideLine } from '@/lib/circuits/decide-line';
 import { createRevision } from '@/lib/circuits/create-revision';
 import { matchLines } from '@/lib/circuits/match-revision';
 import { openCount } from '@/lib/stores/open-count';
@@ -53,6 +54,24 @@ export async function makeCircuits(workshopId: string, people: People): Promise<
     }
   }
   return revisions;
+}
+
+/** What the checks can't settle by themselves, such as a jack by its description, somebody decided long ago. */
+export async function decideUsual(workshopId: string, people: People, revisionIds: readonly string[]): Promise<void> {
+  for (const revisionId of revisionIds) {
+    const asking = await withWorkshop(workshopId, (tx) =>
+      tx.execute<{ line_id: string; part_id: string }>(sql`
+        select k.line_id, k.part_id from candidate k join line l on l.workshop_id = k.workshop_id and l.id = k.line_id
+         where k.workshop_id = ${workshopId} and l.revision_id = ${revisionId} and k.rank = 1 and k.verdict = 'ask'
+           and l.kind in ('connector', 'hardware', 'capacitor', 'switch') order by l.position`),
+    );
+    for (const one of asking.rows)
+      await as(people.builder, decideLine, {
+        lineId: one.line_id,
+        partId: one.part_id,
+        reason: 'the one this workshop always uses',
+      });
+  }
 }
 
 export async function makeBatches(

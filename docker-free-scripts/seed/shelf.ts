@@ -92,18 +92,16 @@ async function fillBins(tx: Tx, workshopId: string, personId: string, ids: Reado
     if (!place) throw new Error('the cabinets have no bins');
     return { one, lotId: newId(), partId: ids.get(one.name) ?? '', binId: place.id };
   });
-  await tx
-    .insert(lot)
-    .values(
-      lots.map(({ one, ...row }) => ({
-        workshopId,
-        id: row.lotId,
-        partId: row.partId,
-        binId: row.binId,
-        unitCost: one.price,
-        receivedAt: at,
-      })),
-    );
+  await tx.insert(lot).values(
+    lots.map(({ one, ...row }) => ({
+      workshopId,
+      id: row.lotId,
+      partId: row.partId,
+      binId: row.binId,
+      unitCost: one.price,
+      receivedAt: at,
+    })),
+  );
   await tx.insert(movement).values(
     lots.map(({ one, ...row }, index) => ({
       workshopId,
