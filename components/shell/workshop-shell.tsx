@@ -40,16 +40,3 @@ export function Banner({ children }: { readonly children: ReactNode }) {
     </aside>
   );
 }
-
-/** A page outside any workshop (signing in, an invitation): the product's name and one sheet. */
-export function OutsideShell({ banner, children }: { readonly banner?: ReactNode; readonly children: ReactNode }) {
-  return (
-    <div className="flex min-h-dvh flex-col">
-      <header className="border-b border-ink px-6.5 py-3 text-lead font-bold max-sm:px-4">Ohmstead</header>
-      {banner === undefined || banner === null ? null : <Banner>{banner}</Banner>}
-      <main id="page" className="mx-auto w-full max-w-md flex-1 px-4 py-10">
-        {children}
-      </main>
-    </div>
-  );
-}

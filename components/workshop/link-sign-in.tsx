@@ -24,7 +24,7 @@ export function LinkSignIn() {
   async function enter() {
     setState('busy');
     const answer = await signIn('link', { token, redirect: false }).catch(() => undefined);
-    if (answer?.ok && !answer.error) window.location.assign('/');
+    if (answer?.ok && !answer.error) window.location.replace(new URL('/', window.location.href));
     else setState('refused');
   }
   return (

@@ -106,30 +106,26 @@ function commandContext(tx: Tx, actor: Actor, input: unknown, requestId: string,
     requestKey,
     record: (subjectId, detail = {}) => void records.push({ subjectId, detail }),
     enqueue: async (job) => {
-      await tx
-        .insert(outbox)
-        .values({
-          workshopId: actor.workshopId,
-          queue: job.queue,
-          payload: job.payload,
-          ...(job.runAfter ? { runAfter: job.runAfter } : {}),
-        });
+      await tx.insert(outbox).values({
+        workshopId: actor.workshopId,
+        queue: job.queue,
+        payload: job.payload,
+        ...(job.runAfter ? { runAfter: job.runAfter } : {}),
+      });
     },
   };
   const writeAudit = async (command: string): Promise<void> => {
     const rows = records.length ? records : [{ subjectId: null, detail: {} }];
-    await tx
-      .insert(auditEvent)
-      .values(
-        rows.map((row) => ({
-          workshopId: actor.workshopId,
-          personId: actor.personId,
-          command,
-          subjectId: row.subjectId,
-          detail: row.detail,
-          requestId,
-        })),
-      );
+    await tx.insert(auditEvent).values(
+      rows.map((row) => ({
+        workshopId: actor.workshopId,
+        personId: actor.personId,
+        command,
+        subjectId: row.subjectId,
+        detail: row.detail,
+        requestId,
+      })),
+    );
   };
   return { context, writeAudit };
 }

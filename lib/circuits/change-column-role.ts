@@ -133,18 +133,16 @@ async function bringDecisionsBack(
     const lines = await tx.execute<{ id: string }>(sql`
       select id from line where workshop_id = ${workshopId} and revision_id = ${revisionId} and source_row = ${one.source_row} and sheet is not distinct from ${one.sheet}::text and spec_key = ${one.line_key}`);
     for (const { id: lineId } of lines.rows) {
-      await tx
-        .insert(decision)
-        .values({
-          workshopId,
-          lineId,
-          partId: one.part_id,
-          verdict: one.verdict,
-          reason: one.reason,
-          specKey: one.spec_key,
-          decidedBy: one.decided_by,
-          decidedAt: new Date(one.decided_at),
-        });
+      await tx.insert(decision).values({
+        workshopId,
+        lineId,
+        partId: one.part_id,
+        verdict: one.verdict,
+        reason: one.reason,
+        specKey: one.spec_key,
+        decidedBy: one.decided_by,
+        decidedAt: new Date(one.decided_at),
+      });
     }
   }
 }

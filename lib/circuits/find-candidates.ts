@@ -31,7 +31,8 @@ export interface Candidate extends Ranked {
 
 /** Statements stay small and answers bounded however long the list. */
 const ASKED_AT_ONCE = 400;
-const NEAR_BY_RATIO = 1.2;
+/** Half a step of E6, the coarsest series that parts are stocked in (1.0 to 1.5). */
+const NEAR_BY_RATIO = 1.23;
 /** More capacitance on a rail does no harm, so larger ones come into question there. */
 const BULK_BY_RATIO = 2.2;
 const MOST_BY_KEY = 24;

@@ -9,6 +9,7 @@ import { partFacts, partFactsJson } from '@/lib/stores/part-facts';
 import { type Candidate, findCandidates } from './find-candidates';
 import { lineInView, type LineInView, lookAtLine } from './line-in-view';
 import { binsOf, VERDICTS } from './line-standing';
+import { preferredNear, preferredValuesNear } from './preferred-near';
 
 const MOST_SHOWN = 24;
 
@@ -47,6 +48,8 @@ const sheet = z.object({
   candidates: z.array(candidateFields),
   /** The best that may be taken and is on the shelf: what to propose beside a refused one. */
   insteadPartId: id().nullable(),
+  /** What the value rounds to in each preferred series, and which of those are on the shelf. */
+  preferred: z.array(preferredNear),
   /** Of this line, newest first; the newest holds. */
   decisions: z.array(decisionFields),
   /** The newest decision on a line alike, with the circuit it was made for. */
@@ -78,6 +81,7 @@ export const lineCandidates = query({
       line,
       candidates,
       insteadPartId: instead?.part.id ?? null,
+      preferred: preferredValuesNear(line.spec, candidates),
       decisions: await decisionsOf(tx, actor.workshopId, line.id),
       remembered: await rememberedFor(tx, actor.workshopId, line),
     };

@@ -1,5 +1,5 @@
 /** What a part does in the circuit, where the list says so: `2n2 C0G, timing`. Pure. */
-import { USES, type Use } from '@/lib/electronics/stand-in/check';
+import type { Use } from '@/lib/electronics/stand-in/check';
 
 const WORDS: readonly (readonly [RegExp, Use])[] = [
   [/\b(?:timing|tempo|clock|oscillator|vco)\b/i, 'timing'],
@@ -10,12 +10,8 @@ const WORDS: readonly (readonly [RegExp, Use])[] = [
 ];
 
 /** @returns the use that the text names, or null where it names none or several */
-export function useIn(text: string): Use | null {
+export function circuitUseIn(text: string): Use | null {
   const named = new Set(WORDS.filter(([pattern]) => pattern.test(text)).map(([, use]) => use));
   const [only] = named;
   return named.size === 1 && only !== undefined ? only : null;
-}
-
-export function isUse(text: string | null): text is Use {
-  return text !== null && (USES as readonly string[]).includes(text);
 }

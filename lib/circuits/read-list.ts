@@ -3,7 +3,7 @@ import { type FieldProblem, Refusal } from '@/lib/api/problem';
 import { type PartsListProblem, type PartsListReading, readPartsList } from '@/lib/parts-list/read-parts-list';
 import { type ColumnCorrection, type KeptReading, MOST_KEPT_CELL_CHARACTERS, MOST_KEPT_ROWS } from './kept-reading';
 import type { LineDraft, QuestionDraft } from './line-draft';
-import { useIn } from './line-use';
+import { circuitUseIn } from './line-use';
 
 export interface ReadList {
   readonly lines: readonly LineDraft[];
@@ -34,7 +34,7 @@ function listOf(read: PartsListReading, columnRoles: readonly ColumnCorrection[]
       designators: line.designators,
       quantity: line.quantity ?? Math.max(1, line.designators.length),
       spec: line.spec,
-      use: useIn(line.text),
+      use: circuitUseIn(line.text),
     }),
   );
   const questions = read.questions.map(
@@ -66,14 +66,12 @@ function keptOf(read: PartsListReading, columnRoles: readonly ColumnCorrection[]
         rowCount: table.rows.length,
       };
     }),
-    notLines: read.notLines
-      .slice(0, MOST_KEPT_ROWS)
-      .map(({ row, sheet, why, text }) => ({
-        row,
-        sheet: sheet ?? null,
-        why,
-        text: text.slice(0, MOST_KEPT_CELL_CHARACTERS),
-      })),
+    notLines: read.notLines.slice(0, MOST_KEPT_ROWS).map(({ row, sheet, why, text }) => ({
+      row,
+      sheet: sheet ?? null,
+      why,
+      text: text.slice(0, MOST_KEPT_CELL_CHARACTERS),
+    })),
     notLineCount: read.notLines.length,
     columnRoles: [...columnRoles],
   };

@@ -64,16 +64,14 @@ export async function readUpload({ id: jobId, workshopId, payload }: HandledJob)
         .update(progress)
         .set({ state: 'done', done: bytes.length, updatedAt: new Date() })
         .where(and(eq(progress.workshopId, workshopId), eq(progress.id, uploadId)));
-      await tx
-        .insert(auditEvent)
-        .values({
-          workshopId,
-          personId: start.createdBy,
-          command: 'revisions.read',
-          subjectId: revisionId,
-          detail: { ...written },
-          requestId: jobId,
-        });
+      await tx.insert(auditEvent).values({
+        workshopId,
+        personId: start.createdBy,
+        command: 'revisions.read',
+        subjectId: revisionId,
+        detail: { ...written },
+        requestId: jobId,
+      });
     });
   } catch (error) {
     if (!(error instanceof ReadingCancelled)) throw error;

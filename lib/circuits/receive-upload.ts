@@ -61,16 +61,14 @@ export async function receiveUpload(file: StoredUpload): Promise<{ uploadId: str
       .onConflictDoNothing({ target: [upload.workshopId, upload.storeKey] })
       .returning({ id: upload.id });
     if (made) {
-      await tx
-        .insert(auditEvent)
-        .values({
-          workshopId,
-          personId,
-          command: 'uploads.receive',
-          subjectId: made.id,
-          detail: { fileName: file.name, bytes: file.size },
-          requestId: newRequestId(),
-        });
+      await tx.insert(auditEvent).values({
+        workshopId,
+        personId,
+        command: 'uploads.receive',
+        subjectId: made.id,
+        detail: { fileName: file.name, bytes: file.size },
+        requestId: newRequestId(),
+      });
       return { uploadId: made.id };
     }
     const [there] = await tx

@@ -12,7 +12,7 @@ import { readPartText } from '@/lib/electronics/read-part-text';
 import { designatorFields, quantityField } from './change-line';
 import { keptReading } from './kept-reading';
 import { lineRowOf } from './line-draft';
-import { useIn } from './line-use';
+import { circuitUseIn } from './line-use';
 import { lockDraft, touchRevision } from './locked-revision';
 import { matchLines } from './match-revision';
 import { insertLines } from './store-lines';
@@ -58,7 +58,7 @@ export const takeRowAsLine = command({
           designators: input.designators,
           quantity,
           spec: { ...spec, doubts: [] },
-          use: useIn(text),
+          use: circuitUseIn(text),
         },
         lineId,
         (last.rows[0]?.position ?? 0) + 1,

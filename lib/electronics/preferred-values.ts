@@ -1,6 +1,6 @@
 /** Preferred numbers of IEC 60063: E3 to E192, nearest by ratio, neighbours, and the series a value belongs to. */
 import type { Quantity } from './part-spec';
-import { quantity, ratioOf, toNumber } from './quantity';
+import { quantity, ratioOf } from './quantity';
 
 export const SERIES = ['E3', 'E6', 'E12', 'E24', 'E48', 'E96', 'E192'] as const;
 export type Series = (typeof SERIES)[number];
@@ -57,7 +57,7 @@ function decadeOf(value: number): number {
 const at = (number: number, decade: number): number => Number(`${number}e${decade}`);
 
 /** Preferred values just below and above (or the value itself twice where it is one). Throws RangeError unless > 0. */
-export function neighbours(value: number, series: Series): readonly [number, number] {
+function neighbours(value: number, series: Series): readonly [number, number] {
   positive(value);
   const decade = decadeOf(value);
   const around = [decade - 1, decade, decade + 1].flatMap((power) =>
@@ -82,12 +82,6 @@ export function isPreferred(value: Quantity, series: Series): boolean {
   return digits.length <= 3 && NUMBERS[series].includes(Number(digits.padEnd(3, '0')));
 }
 
-/** The coarsest series that has the value; null where none has. Throws RangeError unless > 0. */
-export function seriesOf(value: number): Series | null {
-  positive(value);
-  return SERIES.find((series) => Math.abs(nearestPreferred(value, series) / value - 1) < 1e-6) ?? null;
-}
-
 /** The preferred quantity nearest by ratio, exactly. Throws RangeError unless > 0. */
 export function roundToSeries(value: Quantity, series: Series): Quantity {
   const [below, above] = stepsAround(value, series);
@@ -109,41 +103,4 @@ export function stepsAround(value: Quantity, series: Series): readonly [Quantity
       : quantity(numbers[aboveIndex] ?? 1000, exponent, value.unit);
   const below = numbers[(aboveIndex === -1 ? numbers.length : aboveIndex) - 1] ?? 100;
   return [quantity(below, exponent, value.unit), above];
-}
-
-/** The preferred quantities one step down and one step up, skipping the value itself. Throws RangeError unless > 0. */
-export function stepDownAndUp(value: Quantity, series: Series): readonly [Quantity, Quantity] {
-  const [below, above] = stepsAround(value, series);
-  if (below !== above) return [below, above];
-  const numbers = NUMBERS[series];
-  const exponent = value.exponent + String(value.significand).length - 3;
-  const index = numbers.indexOf(Number(String(value.significand).padEnd(3, '0')));
-  const down =
-    index > 0
-      ? quantity(numbers[index - 1] ?? 100, exponent, value.unit)
-      : quantity(numbers.at(-1) ?? 100, exponent - 1, value.unit);
-  const up = quantity(numbers[index + 1] ?? 1000, exponent, value.unit);
-  return [down, up];
-}
-
-/** The stocked value nearest by ratio, with its deviation in percent; null from an empty shelf. */
-export function nearestStocked<Item>(
-  value: number,
-  stock: readonly Item[],
-  valueOf: (item: Item) => number,
-): { item: Item; deviationPercent: number } | null {
-  positive(value);
-  let best: { item: Item; distance: number } | null = null;
-  for (const item of stock) {
-    const candidate = valueOf(item);
-    if (!(candidate > 0)) continue;
-    const distance = Math.abs(Math.log(candidate / value));
-    if (!best || distance < best.distance) best = { item, distance };
-  }
-  return best && { item: best.item, deviationPercent: (valueOf(best.item) / value - 1) * 100 };
-}
-
-/** Whether the value lies within ±percent of the wanted one, both bounds included; floats, so one part in 10^12 is forgiven. */
-export function withinTolerance(value: Quantity, wanted: Quantity, tolerancePercent: number): boolean {
-  return Math.abs(toNumber(value) / toNumber(wanted) - 1) * 100 <= tolerancePercent * (1 + 1e-12) + 1e-10;
 }

@@ -75,34 +75,6 @@ export function printQuantity(value: Quantity): string {
   return `${decimalAt(value, exponent)} ${prefix}${UNIT_SIGNS[value.unit]}`;
 }
 
-/**
- * `4k7`, `100n`, `R47`, `3V3` as IEC 60062 writes resistance and capacitance (and, by the same habit, inductance and
- * volts). Frequency, current and power have no such form and are printed as `printQuantity` does, without the space.
- */
-export function printCode(value: Quantity): string {
-  if (value.unit === 'hertz' || value.unit === 'ampere' || value.unit === 'watt') {
-    return printQuantity(value).replace(' ', '');
-  }
-  const shown = value.unit === 'ohm' && magnitude(value) < 0 ? ([0, ''] as const) : prefixFor(value);
-  const [exponent, prefix] = shown;
-  const letter = prefix === '' ? LETTERS_AT_ONE[value.unit] : prefix;
-  const [whole = '0', fraction = ''] = decimalAt(value, exponent).split('.');
-  if (fraction === '') return `${whole}${letter}`;
-  // More than three places would read as a part number (1n4148), so such values keep their point.
-  if (fraction.length > 3) return printQuantity(value).replace(' ', '');
-  // R47 and p47 stand without their zero; a lone V, F or H before digits would look like a designator or a case.
-  return whole === '0' && (value.unit === 'ohm' || prefix !== '')
-    ? `${letter}${fraction}`
-    : `${whole}${letter}${fraction}`;
-}
-
-const LETTERS_AT_ONE: Readonly<Record<'ohm' | 'farad' | 'henry' | 'volt', string>> = {
-  ohm: 'R',
-  farad: 'F',
-  henry: 'H',
-  volt: 'V',
-};
-
 /** Power of ten of the first digit: 3 for 4700, -1 for 0.47. */
 function magnitude(value: Quantity): number {
   return value.significand === 0 ? 0 : value.exponent + String(Math.abs(value.significand)).length - 1;

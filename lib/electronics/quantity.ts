@@ -97,28 +97,6 @@ export function compareQuantity(a: Quantity, b: Quantity): number {
 }
 
 /**
- * The exact sum, as two resistors in series make it.
- *
- * @throws QuantityError `unit-mismatch`, or `too-long` where the exact sum needs more than 15 digits
- */
-export function addQuantity(a: Quantity, b: Quantity): Quantity {
-  const [left, right, exponent] = aligned(a, b);
-  return fromDecimal(`${left + right}e${exponent}`, a.unit);
-}
-
-/**
- * The exact product with a plain decimal, for factors such as 0.8 or 12.
- *
- * @param factor a plain decimal text, since a float could not say 0.1
- * @throws QuantityError `not-a-decimal`, `too-long`, `out-of-range`
- */
-export function multiplyQuantity(value: Quantity, factor: string): Quantity {
-  const times = fromDecimal(factor, value.unit);
-  const product = BigInt(value.significand) * BigInt(times.significand);
-  return fromDecimal(`${product}e${value.exponent + times.exponent}`, value.unit);
-}
-
-/**
  * `a / b` as a float: 1 for equal values, 2 for twice as much.
  *
  * @throws QuantityError `unit-mismatch`, `division-by-zero`
@@ -127,15 +105,6 @@ export function ratioOf(a: Quantity, b: Quantity): number {
   requireSameUnit(a, b);
   if (b.significand === 0) throw new QuantityError('division-by-zero', 'A ratio to zero has no value');
   return Number(`${a.significand}e${a.exponent - b.exponent}`) / b.significand;
-}
-
-/**
- * How far `a` lies from `b`, in percent of `b`: 1.5 means 1.5 % more.
- *
- * @throws QuantityError `unit-mismatch`, `division-by-zero`
- */
-export function deviationPercent(a: Quantity, b: Quantity): number {
-  return (ratioOf(a, b) - 1) * 100;
 }
 
 function aligned(a: Quantity, b: Quantity): [bigint, bigint, number] {

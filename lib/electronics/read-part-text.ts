@@ -52,13 +52,14 @@ export function readPartText(text: string, options: ReadOptions = {}): PartSpec 
   const kindSaid = refinedKind(options.kind ?? null, main, number?.family?.kind ?? null);
   const packaging = packageIn(main);
   const ratings = readRatings(
-    withoutNames(main, [packaging?.found, number?.family == null ? undefined : number.partNumber], kindSaid),
+    withoutNames(main, [packaging?.found, number?.family ? number.partNumber : undefined], kindSaid),
   );
   const taper = readTaper(ratings.rest, options.taperConvention ?? 'ask', kindSaid);
   const kindKnown = kindSaid ?? (taper.taper === null ? null : 'potentiometer');
   const dielectric = firstOf(DIELECTRIC_WORDS, main);
   const technology = firstOf(TECHNOLOGY_WORDS, main);
-  const value = number?.family == null ? valueOf(taper.rest, kindKnown, dielectric, ratings.ratedVolts) : null;
+  const value =
+    (number?.family ?? null) === null ? valueOf(taper.rest, kindKnown, dielectric, ratings.ratedVolts) : null;
   const kind =
     kindKnown ??
     kindOfUnit(value?.quantity.unit ?? null) ??
@@ -87,7 +88,7 @@ export function readPartText(text: string, options: ReadOptions = {}): PartSpec 
     mounting: packaging?.mounting ?? firstOf(MOUNTING_WORDS, main),
     package: packaging?.name ?? null,
     partNumber:
-      value !== null && number?.family == null && (finalKind === null || unitOfKind(finalKind) !== null)
+      value !== null && (number?.family ?? null) === null && (finalKind === null || unitOfKind(finalKind) !== null)
         ? null
         : (number?.partNumber ?? null),
     family: number?.family?.familyId ?? null,

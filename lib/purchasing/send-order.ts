@@ -36,16 +36,14 @@ export const sendOrder = command({
     const expectedOn = new Date(now.getTime() + days * 86_400_000).toISOString().slice(0, 10);
     const sent = await moveOrder(tx, order, next, { sentAt: now, expectedOn });
     const subject = `Order ${order.number} from ${actor.workshopName}`;
-    await tx
-      .insert(orderMail)
-      .values({
-        workshopId: order.workshopId,
-        orderId: order.id,
-        messageId: `order:${order.id}`,
-        to: from.email,
-        subject,
-        detail: { attachments: [`order-${order.number}.pdf`, `order-${order.number}.csv`] },
-      });
+    await tx.insert(orderMail).values({
+      workshopId: order.workshopId,
+      orderId: order.id,
+      messageId: `order:${order.id}`,
+      to: from.email,
+      subject,
+      detail: { attachments: [`order-${order.number}.pdf`, `order-${order.number}.csv`] },
+    });
     await enqueue({ queue: 'send-order', payload: { orderId: order.id } });
     record(order.id, { to: from.email, expectedOn });
     return { id: sent.id, number: sent.number, state: sent.state, expectedOn };

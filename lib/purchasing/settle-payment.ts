@@ -145,15 +145,13 @@ async function bookPaid(
   const amountRight = now.amountMinor === order.totalMinor && now.currency === order.currency;
   if (next !== null && others.length === 0 && amountRight) {
     await moveOrder(tx, order, next);
-    await tx
-      .insert(auditEvent)
-      .values({
-        workshopId,
-        command: 'payments.settle',
-        subjectId: order.id,
-        detail: { attempt: row.attempt, amountMinor: now.amountMinor },
-        requestId: row.id,
-      });
+    await tx.insert(auditEvent).values({
+      workshopId,
+      command: 'payments.settle',
+      subjectId: order.id,
+      detail: { attempt: row.attempt, amountMinor: now.amountMinor },
+      requestId: row.id,
+    });
     await tellBuyer(
       tx,
       order,

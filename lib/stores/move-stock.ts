@@ -32,18 +32,16 @@ export const moveStock = command({
       .from(bin)
       .where(and(eq(bin.workshopId, actor.workshopId), eq(bin.id, from.binId)));
     const toLotId = newId();
-    await tx
-      .insert(lot)
-      .values({
-        workshopId: actor.workshopId,
-        id: toLotId,
-        partId: from.partId,
-        binId: to.id,
-        unitCost: from.unitCost,
-        receivedAt: from.receivedAt,
-        lotCode: from.lotCode,
-        dateCode: from.dateCode,
-      });
+    await tx.insert(lot).values({
+      workshopId: actor.workshopId,
+      id: toLotId,
+      partId: from.partId,
+      binId: to.id,
+      unitCost: from.unitCost,
+      receivedAt: from.receivedAt,
+      lotCode: from.lotCode,
+      dateCode: from.dateCode,
+    });
     // Both halves name the new lot, so that the ledger can show them as one move.
     const moved = { kind: 'move' as const, partId: from.partId, referenceType: 'move', referenceId: toLotId };
     await recordMovements(context, [

@@ -94,33 +94,29 @@ export const receiveDelivery = command({
       receiptLineId: newId(),
       unitCost: prices.get(index) ?? line.unitCost ?? '0',
     }));
-    await tx
-      .insert(lot)
-      .values(
-        bags.map((one) => ({
-          workshopId: actor.workshopId,
-          id: one.lotId,
-          partId: one.partId,
-          binId: one.binId,
-          unitCost: one.unitCost,
-          lotCode: one.lotCode ?? null,
-          dateCode: one.dateCode ?? null,
-        })),
-      );
-    await tx
-      .insert(receiptLine)
-      .values(
-        bags.map((one) => ({
-          workshopId: actor.workshopId,
-          id: one.receiptLineId,
-          receiptId,
-          orderLineId: one.orderLineId ?? null,
-          partId: one.partId,
-          binId: one.binId,
-          lotId: one.lotId,
-          quantity: one.quantity,
-        })),
-      );
+    await tx.insert(lot).values(
+      bags.map((one) => ({
+        workshopId: actor.workshopId,
+        id: one.lotId,
+        partId: one.partId,
+        binId: one.binId,
+        unitCost: one.unitCost,
+        lotCode: one.lotCode ?? null,
+        dateCode: one.dateCode ?? null,
+      })),
+    );
+    await tx.insert(receiptLine).values(
+      bags.map((one) => ({
+        workshopId: actor.workshopId,
+        id: one.receiptLineId,
+        receiptId,
+        orderLineId: one.orderLineId ?? null,
+        partId: one.partId,
+        binId: one.binId,
+        lotId: one.lotId,
+        quantity: one.quantity,
+      })),
+    );
     await recordMovements(
       context,
       bags.map((one) => ({

@@ -20,14 +20,12 @@ async function mailLink(tx: Tx, address: string, purpose: 'sign-in' | 'password-
     .where(eq(person.email, address));
   if (!found) return;
   const token = newToken();
-  await tx
-    .insert(oneTimeLink)
-    .values({
-      tokenHash: hashToken(token),
-      personId: found.id,
-      purpose,
-      expiresAt: new Date(Date.now() + LINK_MINUTES * 60_000),
-    });
+  await tx.insert(oneTimeLink).values({
+    tokenHash: hashToken(token),
+    personId: found.id,
+    purpose,
+    expiresAt: new Date(Date.now() + LINK_MINUTES * 60_000),
+  });
   const path = purpose === 'sign-in' ? '/sign-in/link' : '/password-reset/new';
   const [subject, said] =
     purpose === 'sign-in'

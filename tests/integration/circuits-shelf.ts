@@ -31,20 +31,18 @@ export async function makeShelf(workshop: TestWorkshop): Promise<Shelf> {
     await withWorkshop(workshop.id, async (tx) => {
       const lotId = newId();
       await tx.insert(lot).values({ workshopId: workshop.id, id: lotId, partId, binId });
-      await tx
-        .insert(movement)
-        .values({
-          workshopId: workshop.id,
-          kind: 'opening',
-          lotId,
-          partId,
-          binId,
-          quantity,
-          referenceType: 'test',
-          referenceId: lotId,
-          requestKey: lotId,
-          requestLine: 0,
-        });
+      await tx.insert(movement).values({
+        workshopId: workshop.id,
+        kind: 'opening',
+        lotId,
+        partId,
+        binId,
+        quantity,
+        referenceType: 'test',
+        referenceId: lotId,
+        requestKey: lotId,
+        requestLine: 0,
+      });
     });
     return partId;
   };

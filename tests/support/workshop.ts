@@ -20,15 +20,13 @@ export async function makeWorkshop(name = 'Test Workshop'): Promise<TestWorkshop
   const id = newId();
   const people = (['builder', 'storekeeper', 'buyer', 'lead'] as const).map((role) => ({ role, personId: newId() }));
   await withScope('auth', (tx) =>
-    tx
-      .insert(person)
-      .values(
-        people.map(({ role, personId }) => ({
-          id: personId,
-          email: `${role}.${personId}@example.invalid`,
-          name: `Test ${role}`,
-        })),
-      ),
+    tx.insert(person).values(
+      people.map(({ role, personId }) => ({
+        id: personId,
+        email: `${role}.${personId}@example.invalid`,
+        name: `Test ${role}`,
+      })),
+    ),
   );
   await withWorkshop(id, async (tx) => {
     await tx.insert(workshop).values({ id, name: `${name} ${id.slice(-6)}` });

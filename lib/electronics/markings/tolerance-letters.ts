@@ -3,11 +3,6 @@
  * disagree (A, E, L, P, W, Y) are left out of reading; they mean nothing certain without the maker's sheet.
  */
 
-export interface ToleranceRange {
-  readonly lowPercent: number;
-  readonly highPercent: number;
-}
-
 const SYMMETRIC: Readonly<Record<string, number>> = {
   B: 0.1,
   C: 0.25,
@@ -21,23 +16,8 @@ const SYMMETRIC: Readonly<Record<string, number>> = {
   N: 30,
 };
 
-/** One-sided ranges met on electrolytic and class 2 ceramic capacitors. */
-const LOPSIDED: Readonly<Record<string, ToleranceRange>> = {
-  Q: { lowPercent: -10, highPercent: 30 },
-  S: { lowPercent: -20, highPercent: 50 },
-  T: { lowPercent: -10, highPercent: 50 },
-  V: { lowPercent: -10, highPercent: 100 },
-  Z: { lowPercent: -20, highPercent: 80 },
-};
-
 /** Below 10 pF these letters are absolute, in picofarads (IEC 60062). */
 const ABSOLUTE_PICOFARADS: Readonly<Record<string, number>> = { B: 0.1, C: 0.25, D: 0.5, F: 1, G: 2 };
-
-/** @returns the range that a capital letter stands for, or null where it is none or sources disagree */
-export function toleranceRange(letter: string): ToleranceRange | null {
-  const symmetric = SYMMETRIC[letter];
-  return symmetric === undefined ? (LOPSIDED[letter] ?? null) : { lowPercent: -symmetric, highPercent: symmetric };
-}
 
 /**
  * ±percent for a letter beside a value.
@@ -51,9 +31,4 @@ export function tolerancePercentOf(letter: string, picofarads: number | null): n
     return Number(((absolute / picofarads) * 100).toPrecision(3));
   }
   return SYMMETRIC[letter] ?? null;
-}
-
-/** The letter for ±percent, or null where none is in use. */
-export function toleranceLetter(tolerancePercent: number): string | null {
-  return Object.keys(SYMMETRIC).find((letter) => SYMMETRIC[letter] === tolerancePercent) ?? null;
 }
