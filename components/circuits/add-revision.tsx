@@ -43,10 +43,7 @@ export function AddRevision({ circuitId, nextName }: { readonly circuitId: strin
     }
     const source = file === null ? { pasted } : await send(file);
     if (source === null) return;
-    create.mutate(
-      { circuitId, name, ...source },
-      { onSuccess: ({ id }) => router.push(`/revisions/${id}/import`) },
-    );
+    create.mutate({ circuitId, name, ...source }, { onSuccess: ({ id }) => router.push(`/revisions/${id}/import`) });
   }
 
   /** The upload's id, or null where it did not arrive; what was wrong is then on the page. */
@@ -90,7 +87,13 @@ export function AddRevision({ circuitId, nextName }: { readonly circuitId: strin
         </Notice>
       )}
       <div className="max-w-[14rem]">
-        <TextField label="Name of the revision" required maxLength={60} value={name} onChange={(event) => setName(event.target.value)} />
+        <TextField
+          label="Name of the revision"
+          required
+          maxLength={60}
+          value={name}
+          onChange={(event) => setName(event.target.value)}
+        />
       </div>
       <div
         onDragOver={(event) => {

@@ -55,8 +55,20 @@ export function CircuitForm() {
             {create.error.details.detail}
           </Notice>
         ) : null}
-        <TextField label="Name" required value={name} maxLength={100} onChange={(event) => setName(event.target.value)} />
-        <TextArea label="What it is" optional rows={2} value={description} onChange={(event) => setDescription(event.target.value)} />
+        <TextField
+          label="Name"
+          required
+          value={name}
+          maxLength={100}
+          onChange={(event) => setName(event.target.value)}
+        />
+        <TextArea
+          label="What it is"
+          optional
+          rows={2}
+          value={description}
+          onChange={(event) => setDescription(event.target.value)}
+        />
         <TextField
           label="Supply rails"
           optional

@@ -24,7 +24,12 @@ interface ReadLine {
 }
 interface ReadTable {
   readonly sheet: string | null;
-  readonly columns: readonly { readonly index: number; readonly heading: string; readonly role: string; readonly because: string }[];
+  readonly columns: readonly {
+    readonly index: number;
+    readonly heading: string;
+    readonly role: string;
+    readonly because: string;
+  }[];
   readonly rows: readonly {
     readonly row: number;
     readonly cells: readonly string[];
@@ -51,7 +56,9 @@ export function ImportTable({
   const change = useCommand<typeof changeColumnRole>('POST /revisions/{revisionId}/columns');
   const take = useCommand<typeof takeRowAsLine>('POST /revisions/{revisionId}/rows');
   const problem = change.error ?? take.error;
-  const shown = table.columns.filter((column) => column.role !== 'ignore' || table.rows.some((row) => (row.cells[column.index] ?? '') !== ''));
+  const shown = table.columns.filter(
+    (column) => column.role !== 'ignore' || table.rows.some((row) => (row.cells[column.index] ?? '') !== ''),
+  );
 
   function setRole(index: number, role: string) {
     const known = COLUMN_ROLE_WORDS.find(([name]) => name === role)?.[0];
@@ -78,7 +85,12 @@ export function ImportTable({
           </Notice>
         </div>
       ) : null}
-      <div role="region" aria-label="The list, scrollable" tabIndex={0} className="max-w-full overflow-x-auto border border-rule">
+      <div
+        role="region"
+        aria-label="The list, scrollable"
+        tabIndex={0}
+        className="max-w-full overflow-x-auto border border-rule"
+      >
         <table className="w-full border-collapse bg-sheet text-small">
           <thead>
             <tr className="align-bottom">
@@ -86,8 +98,14 @@ export function ImportTable({
                 Row
               </th>
               {shown.map((column) => (
-                <th key={column.index} scope="col" className="min-w-32 border-b border-ink px-2 py-2 text-left font-normal">
-                  <span className="block font-semibold text-ink">{column.heading === '' ? 'no heading' : column.heading}</span>
+                <th
+                  key={column.index}
+                  scope="col"
+                  className="min-w-32 border-b border-ink px-2 py-2 text-left font-normal"
+                >
+                  <span className="block font-semibold text-ink">
+                    {column.heading === '' ? 'no heading' : column.heading}
+                  </span>
                   {mayChange ? (
                     <select
                       aria-label={`What the column ${column.heading === '' ? column.index + 1 : column.heading} is`}
@@ -103,12 +121,17 @@ export function ImportTable({
                       ))}
                     </select>
                   ) : (
-                    <span className="block">{COLUMN_ROLE_WORDS.find(([role]) => role === column.role)?.[1] ?? column.role}</span>
+                    <span className="block">
+                      {COLUMN_ROLE_WORDS.find(([role]) => role === column.role)?.[1] ?? column.role}
+                    </span>
                   )}
                   <span className="mt-0.5 block text-fine text-soft">{column.because}</span>
                 </th>
               ))}
-              <th scope="col" className="min-w-56 border-b border-l border-ink px-2 py-2 text-left font-semibold text-soft">
+              <th
+                scope="col"
+                className="min-w-56 border-b border-l border-ink px-2 py-2 text-left font-semibold text-soft"
+              >
                 Understood as
               </th>
             </tr>
@@ -117,7 +140,10 @@ export function ImportTable({
             {table.rows.map((row) => {
               const noPart = row.lines.length === 0;
               return (
-                <tr key={row.row} className={noPart ? 'hatched text-soft' : row.questionIds.length > 0 ? 'bg-amber-wash' : ''}>
+                <tr
+                  key={row.row}
+                  className={noPart ? 'hatched text-soft' : row.questionIds.length > 0 ? 'bg-amber-wash' : ''}
+                >
                   <td className="border-b border-hair px-2 py-1 text-right font-mono text-soft">{row.row}</td>
                   {shown.map((column) => (
                     <td key={column.index} className="max-w-64 border-b border-hair px-2 py-1 break-words">
@@ -145,7 +171,9 @@ export function ImportTable({
                         ) : null}
                       </span>
                     ) : (
-                      row.lines.map((line) => <UnderstoodLine key={line.id} line={line} asks={row.questionIds.length > 0} />)
+                      row.lines.map((line) => (
+                        <UnderstoodLine key={line.id} line={line} asks={row.questionIds.length > 0} />
+                      ))
                     )}
                   </td>
                 </tr>
@@ -161,7 +189,11 @@ export function ImportTable({
 function UnderstoodLine({ line, asks }: { readonly line: ReadLine; readonly asks: boolean }) {
   return (
     <span className="flex flex-wrap items-baseline gap-x-2">
-      {asks ? <Glyph name="ask" size={13} className="translate-y-[2px] text-amber" /> : <Glyph name="same" size={13} className="translate-y-[2px] text-mask" />}
+      {asks ? (
+        <Glyph name="ask" size={13} className="translate-y-[2px] text-amber" />
+      ) : (
+        <Glyph name="same" size={13} className="translate-y-[2px] text-mask" />
+      )}
       <span className="font-mono">{line.quantity} ×</span>
       <span>{line.kind}</span>
       <span className="font-mono font-semibold">{line.text}</span>

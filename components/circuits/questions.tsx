@@ -21,9 +21,18 @@ export interface AskedQuestion {
   readonly text: string;
 }
 
-export function Questions({ questions, mayAnswer }: { readonly questions: readonly AskedQuestion[]; readonly mayAnswer: boolean }) {
+export function Questions({
+  questions,
+  mayAnswer,
+}: {
+  readonly questions: readonly AskedQuestion[];
+  readonly mayAnswer: boolean;
+}) {
   return (
-    <Section title={`${questions.length} ${questions.length === 1 ? 'question' : 'questions'}`} remainder="before it can be frozen">
+    <Section
+      title={`${questions.length} ${questions.length === 1 ? 'question' : 'questions'}`}
+      remainder="before it can be frozen"
+    >
       <ol className="border-t border-ink">
         {questions.map((question) => (
           <Question
@@ -38,7 +47,15 @@ export function Questions({ questions, mayAnswer }: { readonly questions: readon
   );
 }
 
-function Question({ question, alike, mayAnswer }: { readonly question: AskedQuestion; readonly alike: number; readonly mayAnswer: boolean }) {
+function Question({
+  question,
+  alike,
+  mayAnswer,
+}: {
+  readonly question: AskedQuestion;
+  readonly alike: number;
+  readonly mayAnswer: boolean;
+}) {
   const router = useRouter();
   const say = useSay();
   const [own, setOwn] = useState('');
@@ -52,7 +69,9 @@ function Question({ question, alike, mayAnswer }: { readonly question: AskedQues
       { questionId: question.id, answer: text, alike: alike > 1 && all, remember: mayRemember && remember },
       {
         onSuccess: ({ answered, openQuestions }) => {
-          say(`${answered === 1 ? 'Answered' : `${answered} answered`}; ${openQuestions === 0 ? 'no question is left' : `${openQuestions} left`}`);
+          say(
+            `${answered === 1 ? 'Answered' : `${answered} answered`}; ${openQuestions === 0 ? 'no question is left' : `${openQuestions} left`}`,
+          );
           router.refresh();
         },
       },
@@ -98,10 +117,18 @@ function Question({ question, alike, mayAnswer }: { readonly question: AskedQues
             )}
           </form>
           {alike > 1 ? (
-            <CheckboxField label={`for all ${alike} that ask this`} checked={all} onChange={(event) => setAll(event.target.checked)} />
+            <CheckboxField
+              label={`for all ${alike} that ask this`}
+              checked={all}
+              onChange={(event) => setAll(event.target.checked)}
+            />
           ) : null}
           {mayRemember ? (
-            <CheckboxField label="always, in this workshop" checked={remember} onChange={(event) => setRemember(event.target.checked)} />
+            <CheckboxField
+              label="always, in this workshop"
+              checked={remember}
+              onChange={(event) => setRemember(event.target.checked)}
+            />
           ) : null}
         </div>
       ) : null}

@@ -20,7 +20,11 @@ export function ReadingUnderWay({
   readonly mayStop: boolean;
 }) {
   const router = useRouter();
-  const { data, error } = useAnswer<typeof getUpload>('GET /uploads/{uploadId}', { uploadId }, { refetchIntervalMs: ASK_EVERY_MS });
+  const { data, error } = useAnswer<typeof getUpload>(
+    'GET /uploads/{uploadId}',
+    { uploadId },
+    { refetchIntervalMs: ASK_EVERY_MS },
+  );
   const stop = useCommand<typeof cancelReading>('POST /uploads/{uploadId}/cancel');
   const state = data?.progress?.state;
   useEffect(() => {

@@ -33,7 +33,8 @@ export function LookOf({ part, scale }: { readonly part: LookedFor; readonly sca
   const surface = part.mounting === 'surface';
   if (part.kind === 'resistor' && value !== null) {
     const tolerance = part.tolerancePercent ?? 5;
-    if (surface) return <ChipDrawing kind="resistor" mark={chipCode(value)} name={`chip marked ${chipCode(value)}`} {...size} />;
+    if (surface)
+      return <ChipDrawing kind="resistor" mark={chipCode(value)} name={`chip marked ${chipCode(value)}`} {...size} />;
     const bands = resistorBands(value, tolerance);
     if (bands === null) return null;
     const words = bands.join(', ');
@@ -58,12 +59,21 @@ export function LookOf({ part, scale }: { readonly part: LookedFor; readonly sca
   return <NumberedLook part={part} mark={mark} size={size} />;
 }
 
-function NumberedLook({ part, mark, size }: { readonly part: LookedFor; readonly mark: string; readonly size: { scale?: number } }) {
+function NumberedLook({
+  part,
+  mark,
+  size,
+}: {
+  readonly part: LookedFor;
+  readonly mark: string;
+  readonly size: { scale?: number };
+}) {
   const family = part.family === null ? null : findFamily(part.family);
   const pinOut = family?.pinOut?.value ?? null;
   if (part.kind === 'transistor' && (part.package ?? pinOut?.package ?? 'TO-92') === 'TO-92') {
     const leads = pinOut && pinOut.pins.length === 3 ? pinOut.pins.map((pin) => pin[0] ?? '?').join('') : null;
-    const said = leads === null ? 'lead order not known' : `leads ${[...leads].join(', ')} from the left, flat side to you`;
+    const said =
+      leads === null ? 'lead order not known' : `leads ${[...leads].join(', ')} from the left, flat side to you`;
     return <To92Drawing leads={leads} mark={mark} name={`${mark}, ${said}`} {...size} />;
   }
   if (['ic', 'optocoupler', 'regulator'].includes(part.kind)) {

@@ -3,7 +3,12 @@ import { Glyph, type GlyphName } from '@/components/ui/glyph';
 
 type Tone = 'good' | 'look' | 'stop' | 'plain';
 
-const INK: Readonly<Record<Tone, string>> = { good: 'text-mask', look: 'text-amber', stop: 'text-oxide', plain: 'text-soft' };
+const INK: Readonly<Record<Tone, string>> = {
+  good: 'text-mask',
+  look: 'text-amber',
+  stop: 'text-oxide',
+  plain: 'text-soft',
+};
 
 const STATES: Readonly<Record<string, readonly [word: string, tone: Tone, glyph: GlyphName]>> = {
   draft: ['draft', 'look', 'with-effect'],
@@ -32,7 +37,9 @@ const STATES: Readonly<Record<string, readonly [word: string, tone: Tone, glyph:
 export function StateWord({ state, strong = false }: { readonly state: string; readonly strong?: boolean }) {
   const [word, tone, glyph] = STATES[state] ?? [state, 'plain', 'note'];
   return (
-    <span className={`inline-flex items-baseline gap-1.5 whitespace-nowrap ${INK[tone]} ${strong ? 'font-semibold' : ''}`}>
+    <span
+      className={`inline-flex items-baseline gap-1.5 whitespace-nowrap ${INK[tone]} ${strong ? 'font-semibold' : ''}`}
+    >
       <Glyph name={glyph} size={14} className="translate-y-[2px]" />
       {word}
     </span>

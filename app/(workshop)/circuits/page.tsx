@@ -36,7 +36,8 @@ export default async function CircuitsPage({ searchParams }: { readonly searchPa
       />
       {rows.length === 0 ? (
         <EmptyState title="No circuit yet" actions={mayWrite ? <CircuitForm /> : undefined}>
-          A circuit holds the parts lists of one design, revision by revision. Make one, then drop its spreadsheet on it.
+          A circuit holds the parts lists of one design, revision by revision. Make one, then drop its spreadsheet on
+          it.
         </EmptyState>
       ) : (
         <Table label="Circuits" stacked>
@@ -54,7 +55,9 @@ export default async function CircuitsPage({ searchParams }: { readonly searchPa
                   <Link href={`/circuits/${one.id}`} className="font-semibold text-copper hover:underline">
                     {one.name}
                   </Link>
-                  {one.description === '' ? null : <span className="block text-small text-soft">{one.description}</span>}
+                  {one.description === '' ? null : (
+                    <span className="block text-small text-soft">{one.description}</span>
+                  )}
                 </Cell>
                 <Cell label="Rails">{railsText(one.railsVolts)}</Cell>
                 <Cell label="Newest">

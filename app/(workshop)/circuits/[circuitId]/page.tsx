@@ -42,7 +42,9 @@ export default async function CircuitPage({ params }: { readonly params: Promise
         }
       >
         {circuit.revisions.length === 0 ? (
-          <EmptyState title="No parts list yet">Drop its spreadsheet below; every line comes out understood.</EmptyState>
+          <EmptyState title="No parts list yet">
+            Drop its spreadsheet below; every line comes out understood.
+          </EmptyState>
         ) : (
           <Table label={`Revisions of ${circuit.name}`} stacked>
             <TableHead>

@@ -49,7 +49,8 @@ export default async function ImportPage({
         facts={[
           <StateWord key="state" state={revision.state} />,
           <>
-            <Strong mono>{revision.lines}</Strong> lines, <Strong mono>{revision.notLines}</Strong> rows that are no parts
+            <Strong mono>{revision.lines}</Strong> lines, <Strong mono>{revision.notLines}</Strong> rows that are no
+            parts
           </>,
           revision.upload === null ? null : <span className="font-mono break-all">{revision.upload.fileName}</span>,
         ]}
