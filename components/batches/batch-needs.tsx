@@ -40,9 +40,7 @@ export function BatchNeeds({
                   className="inline-flex items-baseline gap-1.5 text-copper hover:underline"
                 >
                   <Glyph name="ask" size={13} />
-                  <span>
-                    {need.text}: choose a part
-                  </span>
+                  <span>{need.text}: choose a part</span>
                 </Link>
               ) : (
                 <Link href={`/parts/${need.part.id}`} className="hover:underline">

@@ -11,7 +11,15 @@ import { useCommand } from '@/lib/api/client';
 import type { finishBatch } from '@/lib/stores/finish-batch';
 import type { BatchNeed } from './batch-need';
 
-export function FinishForm({ batchId, number, needs }: { readonly batchId: string; readonly number: string; readonly needs: readonly BatchNeed[] }) {
+export function FinishForm({
+  batchId,
+  number,
+  needs,
+}: {
+  readonly batchId: string;
+  readonly number: string;
+  readonly needs: readonly BatchNeed[];
+}) {
   const router = useRouter();
   const say = useSay();
   const [left, setLeft] = useState<Readonly<Record<string, string>>>({});
@@ -42,10 +50,15 @@ export function FinishForm({ batchId, number, needs }: { readonly batchId: strin
         </div>
       ) : null}
       <details>
-        <summary className="min-h-9 cursor-pointer font-semibold text-copper max-sm:min-h-11">Something is left over</summary>
+        <summary className="min-h-9 cursor-pointer font-semibold text-copper max-sm:min-h-11">
+          Something is left over
+        </summary>
         <ul className="mt-2 border-t border-rule">
           {needs.map((need) => (
-            <li key={need.needId} className="flex flex-wrap items-center justify-between gap-3 border-b border-hair py-1.5">
+            <li
+              key={need.needId}
+              className="flex flex-wrap items-center justify-between gap-3 border-b border-hair py-1.5"
+            >
               <span className="min-w-0 flex-1">
                 {need.part?.name ?? need.text}
                 <span className="font-mono text-small text-soft"> {designatorText(need.designators, 3)}</span>

@@ -148,7 +148,10 @@ export function PickSheet({
                 Took fewer for now
               </Button>
               {next === null ? null : (
-                <Button kind="quiet" onClick={() => router.push(`/batches/${batchId}/pick?stop=${next}`, { scroll: false })}>
+                <Button
+                  kind="quiet"
+                  onClick={() => router.push(`/batches/${batchId}/pick?stop=${next}`, { scroll: false })}
+                >
                   Leave it for later
                 </Button>
               )}
@@ -157,7 +160,9 @@ export function PickSheet({
         ) : (
           <div className="mt-4">
             <p className="mb-2 font-semibold">
-              {mode === 'fewer' ? `How many of ${stop.take} did you take?` : 'How many were there? What is missing is looked for elsewhere, and the bin is flagged for a count.'}
+              {mode === 'fewer'
+                ? `How many of ${stop.take} did you take?`
+                : 'How many were there? What is missing is looked for elsewhere, and the bin is flagged for a count.'}
             </p>
             <KeyPad
               key={mode}

@@ -48,7 +48,12 @@ export function ReserveActs({
         </Notice>
       ) : null}
       <div className="flex flex-wrap items-center gap-2.5">
-        <Button kind={canFind > 0 ? 'primary' : 'secondary'} busy={reserve.isPending} busyWord="Reserving …" onClick={() => send(false)}>
+        <Button
+          kind={canFind > 0 ? 'primary' : 'secondary'}
+          busy={reserve.isPending}
+          busyWord="Reserving …"
+          onClick={() => send(false)}
+        >
           Reserve whole lines
         </Button>
         <Button busy={reserve.isPending} busyWord="Reserving …" onClick={() => send(true)}>

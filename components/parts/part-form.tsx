@@ -20,7 +20,12 @@ export function PartForm() {
   function submit(event: FormEvent) {
     event.preventDefault();
     create.mutate(
-      { text, ...(name === '' ? {} : { name }), ...(reorderPoint === '' ? {} : { reorderPoint: Number(reorderPoint) }), safety },
+      {
+        text,
+        ...(name === '' ? {} : { name }),
+        ...(reorderPoint === '' ? {} : { reorderPoint: Number(reorderPoint) }),
+        safety,
+      },
       { onSuccess: ({ id }) => router.push(`/parts/${id}`) },
     );
   }
@@ -46,9 +51,21 @@ export function PartForm() {
             {create.error.details.detail}
           </Notice>
         ) : null}
-        <TextField label="What it is" mono required hint="Such as 100n X7R 50V, 4k7 1% metal film, TL072CP, BC547B" value={text} onChange={(event) => setText(event.target.value)} />
+        <TextField
+          label="What it is"
+          mono
+          required
+          hint="Such as 100n X7R 50V, 4k7 1% metal film, TL072CP, BC547B"
+          value={text}
+          onChange={(event) => setText(event.target.value)}
+        />
         <TextField label="Name on the drawer" optional value={name} onChange={(event) => setName(event.target.value)} />
-        <NumberField label="Reorder point" optional value={reorderPoint} onChange={(event) => setReorderPoint(event.target.value)} />
+        <NumberField
+          label="Reorder point"
+          optional
+          value={reorderPoint}
+          onChange={(event) => setReorderPoint(event.target.value)}
+        />
         <CheckboxField
           label="mains, fuse or isolation part"
           hint="Nothing is ever offered in its stead."

@@ -10,5 +10,10 @@ export function money(minor: number, currency: string): string {
 /** A unit price with as many places as it has, at least two: `0.0105` stays so. */
 export function unitPriceText(price: string, currency: string): string {
   const places = Math.min(6, Math.max(2, (price.replace(/0+$/, '').split('.')[1] ?? '').length));
-  return new Intl.NumberFormat('en-GB', { style: 'currency', currency, minimumFractionDigits: places, maximumFractionDigits: places }).format(Number(price));
+  return new Intl.NumberFormat('en-GB', {
+    style: 'currency',
+    currency,
+    minimumFractionDigits: places,
+    maximumFractionDigits: places,
+  }).format(Number(price));
 }

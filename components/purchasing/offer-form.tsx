@@ -34,7 +34,9 @@ export function OfferForm({ supplierId }: { readonly supplierId: string }) {
         supplierCode: code,
         orderMultiple: Number(multiple),
         minimumQuantity: Number(least),
-        breaks: breaks.filter((one) => one.price !== '').map((one) => ({ fromQuantity: Number(one.from), unitPrice: one.price.replace(',', '.') })),
+        breaks: breaks
+          .filter((one) => one.price !== '')
+          .map((one) => ({ fromQuantity: Number(one.from), unitPrice: one.price.replace(',', '.') })),
       },
       {
         onSuccess: () => {
@@ -58,21 +60,44 @@ export function OfferForm({ supplierId }: { readonly supplierId: string }) {
       ) : null}
       <div className="grid gap-4 sm:grid-cols-2">
         <PartChoice label="Part" chosen={part} onChoose={setPart} />
-        <TextField label="Supplier’s code" mono required value={code} onChange={(event) => setCode(event.target.value)} />
-        <NumberField label="Sold in multiples of" value={multiple} onChange={(event) => setMultiple(event.target.value)} />
+        <TextField
+          label="Supplier’s code"
+          mono
+          required
+          value={code}
+          onChange={(event) => setCode(event.target.value)}
+        />
+        <NumberField
+          label="Sold in multiples of"
+          value={multiple}
+          onChange={(event) => setMultiple(event.target.value)}
+        />
         <NumberField label="Smallest quantity" value={least} onChange={(event) => setLeast(event.target.value)} />
       </div>
       <fieldset>
         <legend className="text-small font-semibold">Prices</legend>
         {breaks.map((one, index) => (
           <div key={index} className="mt-2 grid grid-cols-2 gap-3">
-            <NumberField label="From quantity" value={one.from} onChange={(event) => changeBreak(index, 'from', event.target.value)} />
-            <NumberField label="Each" whole={false} value={one.price} onChange={(event) => changeBreak(index, 'price', event.target.value)} />
+            <NumberField
+              label="From quantity"
+              value={one.from}
+              onChange={(event) => changeBreak(index, 'from', event.target.value)}
+            />
+            <NumberField
+              label="Each"
+              whole={false}
+              value={one.price}
+              onChange={(event) => changeBreak(index, 'price', event.target.value)}
+            />
           </div>
         ))}
         {breaks.length < MOST_BREAKS ? (
           <div className="mt-2">
-            <Button size="small" kind="quiet" onClick={() => setBreaks((before) => [...before, { from: '', price: '' }])}>
+            <Button
+              size="small"
+              kind="quiet"
+              onClick={() => setBreaks((before) => [...before, { from: '', price: '' }])}
+            >
               Another break
             </Button>
           </div>

@@ -13,7 +13,15 @@ import type { sendOrder } from '@/lib/purchasing/send-order';
 import { money } from './money';
 import type { OrderFacts } from './order-facts';
 
-export function OrderActs({ order, isLead, paymentUnderWay }: { readonly order: OrderFacts; readonly isLead: boolean; readonly paymentUnderWay: boolean }) {
+export function OrderActs({
+  order,
+  isLead,
+  paymentUnderWay,
+}: {
+  readonly order: OrderFacts;
+  readonly isLead: boolean;
+  readonly paymentUnderWay: boolean;
+}) {
   const may = (act: OrderFacts['acts'][number]) => order.acts.includes(act);
   const input = { orderId: order.id };
   const arrived = order.lines.some((line) => line.received > 0);
@@ -118,7 +126,11 @@ function PayActs({ order }: { readonly order: OrderFacts }) {
   }
   return (
     <>
-      <Button kind={order.supplier.takesCards ? 'secondary' : 'primary'} busy={pay.isPending} onClick={() => send('on-account')}>
+      <Button
+        kind={order.supplier.takesCards ? 'secondary' : 'primary'}
+        busy={pay.isPending}
+        onClick={() => send('on-account')}
+      >
         Pay on account
       </Button>
       {order.supplier.takesCards ? (

@@ -23,7 +23,9 @@ export function OrderLines({ order, mayChange }: { readonly order: OrderFacts; r
   const sent = order.sentAt !== null;
 
   function save() {
-    const lines = order.lines.map((line) => ({ offerId: line.offerId, quantity: Number(quantityOf(line)) })).filter((line) => line.quantity !== 0);
+    const lines = order.lines
+      .map((line) => ({ offerId: line.offerId, quantity: Number(quantityOf(line)) }))
+      .filter((line) => line.quantity !== 0);
     change.mutate(
       { orderId: order.id, version: order.version, lines },
       {
@@ -67,7 +69,11 @@ export function OrderLines({ order, mayChange }: { readonly order: OrderFacts; r
               </Cell>
               <Cell label="Who waits">
                 {line.waiting.slice(0, 3).map((batch) => (
-                  <Link key={batch.batchId} href={`/batches/${batch.batchId}`} className="mr-2 font-mono text-small text-copper hover:underline">
+                  <Link
+                    key={batch.batchId}
+                    href={`/batches/${batch.batchId}`}
+                    className="mr-2 font-mono text-small text-copper hover:underline"
+                  >
                     {batch.number}
                   </Link>
                 ))}
@@ -85,7 +91,9 @@ export function OrderLines({ order, mayChange }: { readonly order: OrderFacts; r
                 ) : (
                   <>
                     {line.quantity}
-                    {line.cancelled > 0 ? <span className="block text-small text-oxide">{line.cancelled} taken off</span> : null}
+                    {line.cancelled > 0 ? (
+                      <span className="block text-small text-oxide">{line.cancelled} taken off</span>
+                    ) : null}
                   </>
                 )}
               </Cell>
@@ -109,7 +117,9 @@ export function OrderLines({ order, mayChange }: { readonly order: OrderFacts; r
           <Button busy={change.isPending} busyWord="Changing …" disabled={!dirty} onClick={save}>
             Change the quantities
           </Button>
-          <span className="text-small text-soft">0 takes a line out. Breaks, multiples and minimums are applied again.</span>
+          <span className="text-small text-soft">
+            0 takes a line out. Breaks, multiples and minimums are applied again.
+          </span>
         </div>
       ) : null}
     </>

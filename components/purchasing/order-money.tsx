@@ -29,7 +29,11 @@ export function OrderMoney({ order }: { readonly order: OrderFacts }) {
       </Column>
       <Column title="Paid">
         {order.payments.length === 0 && order.refunds.length === 0 ? (
-          <p className="text-soft">{order.state === 'on-account' || order.sentAt !== null ? 'On account: the supplier’s invoice follows.' : 'Nothing yet.'}</p>
+          <p className="text-soft">
+            {order.state === 'on-account' || order.sentAt !== null
+              ? 'On account: the supplier’s invoice follows.'
+              : 'Nothing yet.'}
+          </p>
         ) : (
           <Facts
             facts={[

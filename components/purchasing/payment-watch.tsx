@@ -33,7 +33,11 @@ export function PaymentWatch({
 }) {
   const router = useRouter();
   const [waiting, setWaiting] = useState(checkout === 'done');
-  const { data } = useAnswer<typeof getOrder>('GET /orders/{orderId}', { orderId }, { enabled: waiting, refetchIntervalMs: ASK_EVERY_MS });
+  const { data } = useAnswer<typeof getOrder>(
+    'GET /orders/{orderId}',
+    { orderId },
+    { enabled: waiting, refetchIntervalMs: ASK_EVERY_MS },
+  );
   const state = data?.state;
   useEffect(() => {
     if (state !== undefined && state !== 'approved') router.replace(`/orders/${orderId}`);
@@ -60,7 +64,13 @@ export function PaymentWatch({
       <Notice
         tone={declined ? 'stop' : 'look'}
         announce
-        title={declined ? 'The card was declined' : checkout === 'left' ? 'The checkout was left without paying' : 'A payment is under way'}
+        title={
+          declined
+            ? 'The card was declined'
+            : checkout === 'left'
+              ? 'The checkout was left without paying'
+              : 'A payment is under way'
+        }
         actions={
           <>
             {latest.checkoutUrl === null ? null : (

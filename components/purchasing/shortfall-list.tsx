@@ -19,19 +19,31 @@ import { money, unitPriceText } from './money';
 
 type Shortfall = z.output<typeof listShortfalls.output>['shortfalls'][number];
 
-export function ShortfallList({ shortfalls, mayBuy }: { readonly shortfalls: readonly Shortfall[]; readonly mayBuy: boolean }) {
+export function ShortfallList({
+  shortfalls,
+  mayBuy,
+}: {
+  readonly shortfalls: readonly Shortfall[];
+  readonly mayBuy: boolean;
+}) {
   const router = useRouter();
   const [offers, setOffers] = useState<Readonly<Record<string, string>>>({});
   const [left, setLeft] = useState<ReadonlySet<string>>(new Set());
   const raise = useCommand<typeof orderShortfalls>('POST /orders/from-shortfalls');
 
-  const chosenOf = (one: Shortfall) => one.purchases.find((purchase) => purchase.offerId === offers[one.partId]) ?? one.purchases[0];
+  const chosenOf = (one: Shortfall) =>
+    one.purchases.find((purchase) => purchase.offerId === offers[one.partId]) ?? one.purchases[0];
   const wanted = shortfalls.filter((one) => !left.has(one.partId) && one.purchases.length > 0);
   const sums = new Map<string, { supplier: string; currency: string; minor: number; lines: number }>();
   for (const one of wanted) {
     const purchase = chosenOf(one);
     if (!purchase) continue;
-    const sum = sums.get(purchase.supplierId) ?? { supplier: purchase.supplierName, currency: purchase.currency, minor: 0, lines: 0 };
+    const sum = sums.get(purchase.supplierId) ?? {
+      supplier: purchase.supplierName,
+      currency: purchase.currency,
+      minor: 0,
+      lines: 0,
+    };
     sums.set(purchase.supplierId, { ...sum, minor: sum.minor + purchase.totalMinor, lines: sum.lines + 1 });
   }
   function toggle(partId: string) {
@@ -43,7 +55,12 @@ export function ShortfallList({ shortfalls, mayBuy }: { readonly shortfalls: rea
   }
   function send() {
     raise.mutate(
-      { parts: wanted.map((one) => ({ partId: one.partId, ...(chosenOf(one) ? { offerId: chosenOf(one)?.offerId } : {}) })) },
+      {
+        parts: wanted.map((one) => ({
+          partId: one.partId,
+          ...(chosenOf(one) ? { offerId: chosenOf(one)?.offerId } : {}),
+        })),
+      },
       {
         onSuccess: ({ orders }) => {
           const [only] = orders;
@@ -111,7 +128,8 @@ export function ShortfallList({ shortfalls, mayBuy }: { readonly shortfalls: rea
                     <span className="text-oxide">no supplier offers it</span>
                   ) : one.purchases.length === 1 || !mayBuy ? (
                     <>
-                      {purchase.supplierName} <span className="font-mono text-small text-soft">{purchase.supplierCode}</span>
+                      {purchase.supplierName}{' '}
+                      <span className="font-mono text-small text-soft">{purchase.supplierCode}</span>
                     </>
                   ) : (
                     <SelectField
@@ -155,8 +173,8 @@ export function ShortfallList({ shortfalls, mayBuy }: { readonly shortfalls: rea
           <ul className="text-soft">
             {[...sums.values()].map((sum) => (
               <li key={sum.supplier}>
-                {sum.supplier}: <span className="font-mono text-ink">{money(sum.minor, sum.currency)}</span> for {sum.lines}{' '}
-                {sum.lines === 1 ? 'line' : 'lines'}, before postage
+                {sum.supplier}: <span className="font-mono text-ink">{money(sum.minor, sum.currency)}</span> for{' '}
+                {sum.lines} {sum.lines === 1 ? 'line' : 'lines'}, before postage
               </li>
             ))}
           </ul>

@@ -100,7 +100,12 @@ export function SupplierForm({ supplier }: { readonly supplier: SupplierFacts | 
         />
       </div>
       <div>
-        <Button type="submit" kind={supplier === null ? 'primary' : 'secondary'} busy={create.isPending || change.isPending} busyWord="Saving …">
+        <Button
+          type="submit"
+          kind={supplier === null ? 'primary' : 'secondary'}
+          busy={create.isPending || change.isPending}
+          busyWord="Saving …"
+        >
           {supplier === null ? 'Add the supplier' : 'Save the details'}
         </Button>
       </div>

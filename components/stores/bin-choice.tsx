@@ -25,7 +25,11 @@ export function BinChoice({
 }) {
   const [text, setText] = useState('');
   const search = useDeferredValue(text.trim().toUpperCase());
-  const { data } = useAnswer<typeof listBins>('GET /bins', { search, size: MOST_SHOWN }, { enabled: chosen === null && search !== '' });
+  const { data } = useAnswer<typeof listBins>(
+    'GET /bins',
+    { search, size: MOST_SHOWN },
+    { enabled: chosen === null && search !== '' },
+  );
   return (
     <div>
       <TextField

@@ -12,7 +12,13 @@ import type { retireBin } from '@/lib/stores/retire-bin';
 import { LotActs } from './lot-acts';
 import { movementWord } from './movements-table';
 
-export function BinSheet({ bin, mayWrite }: { readonly bin: z.output<typeof getBin.output>; readonly mayWrite: boolean }) {
+export function BinSheet({
+  bin,
+  mayWrite,
+}: {
+  readonly bin: z.output<typeof getBin.output>;
+  readonly mayWrite: boolean;
+}) {
   return (
     <Sheet
       title={<span className="font-mono">{bin.code}</span>}
@@ -54,7 +60,9 @@ export function BinSheet({ bin, mayWrite }: { readonly bin: z.output<typeof getB
                 {lot.lotCode === null ? '' : `, lot ${lot.lotCode}`}
                 {lot.dateCode === null ? '' : `, date ${lot.dateCode}`}
               </p>
-              {mayWrite ? <LotActs lotId={lot.lotId} what={`${lot.part.name} from ${bin.code}`} free={lot.free} /> : null}
+              {mayWrite ? (
+                <LotActs lotId={lot.lotId} what={`${lot.part.name} from ${bin.code}`} free={lot.free} />
+              ) : null}
             </li>
           ))}
         </ul>

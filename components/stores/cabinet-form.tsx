@@ -20,7 +20,13 @@ export function CabinetForm() {
   function submit(event: FormEvent) {
     event.preventDefault();
     create.mutate(
-      { code: typed.code.toUpperCase(), name: typed.name, room: typed.room, columns: Number(typed.columns), rows: Number(typed.rows) },
+      {
+        code: typed.code.toUpperCase(),
+        name: typed.name,
+        room: typed.room,
+        columns: Number(typed.columns),
+        rows: Number(typed.rows),
+      },
       {
         onSuccess: ({ id }) => {
           setOpen(false);

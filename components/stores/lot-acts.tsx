@@ -13,7 +13,15 @@ import type { moveStock } from '@/lib/stores/move-stock';
 import type { scrapStock } from '@/lib/stores/scrap-stock';
 import { BinChoice, type ChosenBin } from './bin-choice';
 
-export function LotActs({ lotId, what, free }: { readonly lotId: string; readonly what: string; readonly free: number }) {
+export function LotActs({
+  lotId,
+  what,
+  free,
+}: {
+  readonly lotId: string;
+  readonly what: string;
+  readonly free: number;
+}) {
   return (
     <span className="flex flex-wrap gap-2">
       <MoveLot lotId={lotId} what={what} free={free} />
@@ -88,7 +96,12 @@ function MoveLot({ lotId, what, free }: { readonly lotId: string; readonly what:
           </Notice>
         ) : null}
         <BinChoice label="To bin" chosen={bin} onChoose={setBin} />
-        <NumberField label="How many" hint={`${free} are free.`} value={quantity} onChange={(event) => setQuantity(event.target.value)} />
+        <NumberField
+          label="How many"
+          hint={`${free} are free.`}
+          value={quantity}
+          onChange={(event) => setQuantity(event.target.value)}
+        />
       </form>
     </Dialog>
   );

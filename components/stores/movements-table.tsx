@@ -18,7 +18,15 @@ const KINDS: Readonly<Record<string, string>> = {
 };
 export const movementWord = (kind: string): string => KINDS[kind] ?? kind;
 
-export function MovementsTable({ movements, label, without = [] }: { readonly movements: readonly MovementShown[]; readonly label: string; readonly without?: readonly ('part' | 'bin')[] }) {
+export function MovementsTable({
+  movements,
+  label,
+  without = [],
+}: {
+  readonly movements: readonly MovementShown[];
+  readonly label: string;
+  readonly without?: readonly ('part' | 'bin')[];
+}) {
   return (
     <Table label={label} stacked>
       <TableHead>

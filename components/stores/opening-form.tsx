@@ -55,8 +55,20 @@ export function OpeningForm({ partId }: { readonly partId: string }) {
       <div className="grid items-start gap-3 sm:grid-cols-4">
         <BinChoice label="Bin" chosen={bin} onChoose={setBin} />
         <NumberField label="How many" required value={quantity} onChange={(event) => setQuantity(event.target.value)} />
-        <NumberField label="Cost of one" optional whole={false} value={cost} onChange={(event) => setCost(event.target.value)} />
-        <TextField label="Lot code" optional mono value={lotCode} onChange={(event) => setLotCode(event.target.value)} />
+        <NumberField
+          label="Cost of one"
+          optional
+          whole={false}
+          value={cost}
+          onChange={(event) => setCost(event.target.value)}
+        />
+        <TextField
+          label="Lot code"
+          optional
+          mono
+          value={lotCode}
+          onChange={(event) => setLotCode(event.target.value)}
+        />
       </div>
       <div>
         <Button type="submit" busy={enter.isPending} busyWord="Entering …">

@@ -18,11 +18,18 @@ export function StockHistory({ history }: { readonly history: readonly DayBalanc
   const span = Math.max(1, Date.parse(last.day) - from);
   const x = (day: string) => EDGE + ((Date.parse(day) - from) / span) * (WIDTH - 2 * EDGE);
   const y = (balance: number) => HEIGHT - EDGE - (balance / most) * (HEIGHT - 2 * EDGE);
-  const line = history.map((one, index) => (index === 0 ? `M${x(one.day)} ${y(one.balance)}` : `H${x(one.day)}V${y(one.balance)}`)).join('');
+  const line = history
+    .map((one, index) => (index === 0 ? `M${x(one.day)} ${y(one.balance)}` : `H${x(one.day)}V${y(one.balance)}`))
+    .join('');
   const said = `From ${first.balance} on ${first.day} to ${last.balance} on ${last.day}; at most ${most}.`;
   return (
     <figure>
-      <svg viewBox={`0 0 ${WIDTH} ${HEIGHT}`} className="w-full max-w-[44rem] border-b border-rule" role="img" aria-label={said}>
+      <svg
+        viewBox={`0 0 ${WIDTH} ${HEIGHT}`}
+        className="w-full max-w-[44rem] border-b border-rule"
+        role="img"
+        aria-label={said}
+      >
         <path d={line} className="fill-none stroke-copper" strokeWidth="2" />
         <circle cx={x(last.day)} cy={y(last.balance)} r="3.5" className="fill-copper" />
       </svg>

@@ -12,10 +12,22 @@ export interface ChosenPart {
   readonly name: string;
 }
 
-export function PartChoice({ label, chosen, onChoose }: { readonly label: string; readonly chosen: ChosenPart | null; readonly onChoose: (part: ChosenPart | null) => void }) {
+export function PartChoice({
+  label,
+  chosen,
+  onChoose,
+}: {
+  readonly label: string;
+  readonly chosen: ChosenPart | null;
+  readonly onChoose: (part: ChosenPart | null) => void;
+}) {
   const [text, setText] = useState('');
   const search = useDeferredValue(text.trim());
-  const { data } = useAnswer<typeof listParts>('GET /parts', { search, size: MOST_SHOWN }, { enabled: chosen === null && search.length >= 2 });
+  const { data } = useAnswer<typeof listParts>(
+    'GET /parts',
+    { search, size: MOST_SHOWN },
+    { enabled: chosen === null && search.length >= 2 },
+  );
   return (
     <div>
       <TextField

@@ -45,7 +45,7 @@ export async function movementsPage(tx: Tx, conditions: readonly SQL[], size: nu
                when 'batch' then 'batch ' || coalesce(bt.number, '?') when 'receipt-line' then 'delivery ' || coalesce(rc.number, '?') when 'count-entry' then 'count ' || coalesce(ct.number, '?')
                when 'opening' then 'opening stock' else m.reference_type end,
              'causeHref', case m.reference_type when 'batch' then '/batches/' || m.reference_id when 'count-entry' then '/counts/' || ct.id
-               when 'receipt-line' then case when rc.order_id is null then '/receipts/' || rc.id else '/orders/' || rc.order_id end end) as row
+               when 'receipt-line' then case when rc.order_id is null then '/receive' else '/orders/' || rc.order_id end end) as row
       from page m
       join part p on p.workshop_id = m.workshop_id and p.id = m.part_id
       join bin b on b.workshop_id = m.workshop_id and b.id = m.bin_id

@@ -68,7 +68,9 @@ export default async function BinsPage({
       <PageTitle
         above={<AreaLinks label="Stores" links={STORES_LINKS} />}
         title={`Cabinet ${cabinet.code}`}
-        remainder={[cabinet.name, cabinet.room].filter((word) => word !== '').join(', ')}
+        remainder={[cabinet.name, cabinet.room]
+          .filter((word) => word !== '' && word !== `Cabinet ${cabinet.code}`)
+          .join(', ')}
         facts={[
           <>
             <Strong mono>{cabinet.bins}</Strong> bins

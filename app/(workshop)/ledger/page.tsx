@@ -22,7 +22,9 @@ type Asked = Partial<Record<(typeof PLACES)[number] | 'before' | 'kind' | 'from'
 
 export default async function LedgerPage({ searchParams }: { readonly searchParams: Promise<Asked> }) {
   const asked = await searchParams;
-  const places = Object.fromEntries(PLACES.flatMap((name) => (UUID.test(asked[name] ?? '') ? [[name, asked[name]]] : [])));
+  const places = Object.fromEntries(
+    PLACES.flatMap((name) => (UUID.test(asked[name] ?? '') ? [[name, asked[name]]] : [])),
+  );
   const kind = KINDS.find((one) => one === asked.kind);
   const days = {
     ...(DAY.test(asked.from ?? '') ? { from: asked.from } : {}),
@@ -39,7 +41,9 @@ export default async function LedgerPage({ searchParams }: { readonly searchPara
   const [first] = rows;
   const about = places.partId !== undefined ? first?.partName : places.binId !== undefined ? first?.binCode : undefined;
   const filters = new URLSearchParams(
-    Object.entries({ ...places, ...days, ...(kind === undefined ? {} : { kind }) }).flatMap(([name, value]) => (value === undefined ? [] : [[name, value]])),
+    Object.entries({ ...places, ...days, ...(kind === undefined ? {} : { kind }) }).flatMap(([name, value]) =>
+      value === undefined ? [] : [[name, value]],
+    ),
   );
   const narrowed = [...filters].length > 0;
   return (
@@ -59,7 +63,10 @@ export default async function LedgerPage({ searchParams }: { readonly searchPara
             label="What happened"
             name="kind"
             defaultValue={kind ?? ''}
-            options={[{ value: '', label: 'anything' }, ...KINDS.map((one) => ({ value: one, label: movementWord(one) }))]}
+            options={[
+              { value: '', label: 'anything' },
+              ...KINDS.map((one) => ({ value: one, label: movementWord(one) })),
+            ]}
           />
         </div>
         <div className="w-40">
@@ -76,13 +83,19 @@ export default async function LedgerPage({ searchParams }: { readonly searchPara
         ) : null}
       </form>
       {rows.length === 0 ? (
-        <EmptyState title="No line fits">{narrowed ? 'Show all of it, or choose another day.' : 'The first receipt, or opening stock, writes the first line.'}</EmptyState>
+        <EmptyState title="No line fits">
+          {narrowed
+            ? 'Show all of it, or choose another day.'
+            : 'The first receipt, or opening stock, writes the first line.'}
+        </EmptyState>
       ) : (
         <MovementsTable movements={rows} label="Movements, newest first" />
       )}
       {further === null ? null : (
         <p className="mt-4">
-          <ButtonLink href={`/ledger?${new URLSearchParams([...filters, ['before', String(further)]])}`}>Earlier lines</ButtonLink>
+          <ButtonLink href={`/ledger?${new URLSearchParams([...filters, ['before', String(further)]])}`}>
+            Earlier lines
+          </ButtonLink>
         </p>
       )}
     </>

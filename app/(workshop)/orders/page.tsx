@@ -17,13 +17,32 @@ import { listOrders } from '@/lib/purchasing/get-order';
 export const metadata: Metadata = { title: 'Orders' };
 
 const SIZE = 50;
-const STATES = ['draft', 'submitted', 'approved', 'paid', 'on-account', 'sent', 'part-received', 'received', 'closed', 'cancelled'] as const;
+const STATES = [
+  'draft',
+  'submitted',
+  'approved',
+  'paid',
+  'on-account',
+  'sent',
+  'part-received',
+  'received',
+  'closed',
+  'cancelled',
+] as const;
 
-export default async function OrdersPage({ searchParams }: { readonly searchParams: Promise<{ page?: string; state?: string }> }) {
+export default async function OrdersPage({
+  searchParams,
+}: {
+  readonly searchParams: Promise<{ page?: string; state?: string }>;
+}) {
   const asked = await searchParams;
   const page = Math.max(1, Number(asked.page) || 1);
   const state = STATES.find((one) => one === asked.state);
-  const { rows, total, byState } = await ask(listOrders, { page, size: SIZE, ...(state === undefined ? {} : { state: [state] }) });
+  const { rows, total, byState } = await ask(listOrders, {
+    page,
+    size: SIZE,
+    ...(state === undefined ? {} : { state: [state] }),
+  });
   const address = (to: number) => `/orders?page=${to}${state === undefined ? '' : `&state=${state}`}`;
   return (
     <>
@@ -46,13 +65,15 @@ export default async function OrdersPage({ searchParams }: { readonly searchPara
           </li>
           {STATES.flatMap((one) => {
             const count = byState.find((row) => row.state === one)?.count ?? 0;
-            return count === 0 ? [] : [
-              <li key={one}>
-                <StateLink href={`/orders?state=${one}`} current={state === one}>
-                  <StateWord state={one} /> <span className="font-mono">{count}</span>
-                </StateLink>
-              </li>,
-            ];
+            return count === 0
+              ? []
+              : [
+                  <li key={one}>
+                    <StateLink href={`/orders?state=${one}`} current={state === one}>
+                      <StateWord state={one} /> <span className="font-mono">{count}</span>
+                    </StateLink>
+                  </li>,
+                ];
           })}
         </ul>
       </nav>
@@ -121,7 +142,15 @@ export default async function OrdersPage({ searchParams }: { readonly searchPara
   );
 }
 
-function StateLink({ href, current, children }: { readonly href: string; readonly current: boolean; readonly children: React.ReactNode }) {
+function StateLink({
+  href,
+  current,
+  children,
+}: {
+  readonly href: string;
+  readonly current: boolean;
+  readonly children: React.ReactNode;
+}) {
   return (
     <Link
       href={href}

@@ -66,7 +66,14 @@ export default async function PartsPage({ searchParams }: { readonly searchParam
       />
       <form role="search" className="mb-4 flex flex-wrap items-end gap-3">
         <div className="w-64 max-sm:w-full">
-          <TextField label="Name, number or value" optional mono name="search" defaultValue={search} placeholder="TL072, 4k7 1%, 100n" />
+          <TextField
+            label="Name, number or value"
+            optional
+            mono
+            name="search"
+            defaultValue={search}
+            placeholder="TL072, 4k7 1%, 100n"
+          />
         </div>
         <div className="w-44">
           <SelectField
@@ -102,14 +109,20 @@ export default async function PartsPage({ searchParams }: { readonly searchParam
                   <Link href={`/parts/${one.id}`} className="font-semibold text-copper hover:underline">
                     {one.name}
                   </Link>
-                  {one.description === '' ? null : <span className="block text-small text-soft">{one.description}</span>}
+                  {one.description === '' ? null : (
+                    <span className="block text-small text-soft">{one.description}</span>
+                  )}
                 </Cell>
                 <Cell label="Kind">{kindWord(one.kind)}</Cell>
                 <Cell label="Look for">
                   <LookOf part={one} />
                 </Cell>
                 <Cell label="Free" number>
-                  {one.reorderPoint !== null && one.free < one.reorderPoint ? <strong className="text-oxide">{one.free}</strong> : one.free}
+                  {one.reorderPoint !== null && one.free < one.reorderPoint ? (
+                    <strong className="text-oxide">{one.free}</strong>
+                  ) : (
+                    one.free
+                  )}
                 </Cell>
                 <Cell label="On hand" number>
                   {one.onHand}

@@ -66,7 +66,10 @@ export default async function ShortfallsPage() {
                     {one.designators.slice(0, 5).join(', ')}
                   </Cell>
                   <Cell label="Asks for">
-                    <Link href={`/revisions/${one.revisionId}?line=${one.lineId}`} className="text-copper hover:underline">
+                    <Link
+                      href={`/revisions/${one.revisionId}?line=${one.lineId}`}
+                      className="text-copper hover:underline"
+                    >
                       {one.text}
                     </Link>
                   </Cell>

@@ -58,7 +58,10 @@ export default async function BatchPage({ params }: { readonly params: Promise<{
               />
             ) : null}
             {batch.stopsOpen > 0 ? (
-              <ButtonLink kind={builds && may('reserve') && toFind.length > 0 ? 'secondary' : 'primary'} href={`/batches/${batchId}/pick`}>
+              <ButtonLink
+                kind={builds && may('reserve') && toFind.length > 0 ? 'secondary' : 'primary'}
+                href={`/batches/${batchId}/pick`}
+              >
                 Pick {batch.stopsOpen} {batch.stopsOpen === 1 ? 'stop' : 'stops'}
               </ButtonLink>
             ) : null}
@@ -104,7 +107,11 @@ export default async function BatchPage({ params }: { readonly params: Promise<{
       ) : null}
       {builds && may('finish') ? (
         <Section title="Finish" remainder="with what is left going back to the bins">
-          <FinishForm batchId={batchId} number={batch.number} needs={batch.needsList.filter((need) => need.picked > 0)} />
+          <FinishForm
+            batchId={batchId}
+            number={batch.number}
+            needs={batch.needsList.filter((need) => need.picked > 0)}
+          />
         </Section>
       ) : null}
       <Section title="What it needs" remainder={`for ${batch.units} ${batch.units === 1 ? 'unit' : 'units'}`}>

@@ -44,7 +44,9 @@ export default async function OrderPage({
           <>
             <Strong mono>{money(order.totalMinor, order.currency)}</Strong>
           </>,
-          <>raised by {order.createdBy}, {dayText(order.createdAt)}</>,
+          <>
+            raised by {order.createdBy}, {dayText(order.createdAt)}
+          </>,
           order.approvedBy === null ? null : <>approved by {order.approvedBy}</>,
           order.expectedOn === null ? null : order.late ? (
             <span className="inline-flex items-baseline gap-1.5 text-oxide">
@@ -63,7 +65,9 @@ export default async function OrderPage({
             <ButtonLink kind="quiet" href={`/api/v1/orders/${orderId}/csv`} download>
               CSV
             </ButtonLink>
-            {buys ? <OrderActs order={order} isLead={me.roles.includes('lead')} paymentUnderWay={underWay !== null} /> : null}
+            {buys ? (
+              <OrderActs order={order} isLead={me.roles.includes('lead')} paymentUnderWay={underWay !== null} />
+            ) : null}
             {coming && receives ? (
               <ButtonLink kind="primary" href={`/receive/${orderId}`}>
                 Receive
@@ -74,12 +78,17 @@ export default async function OrderPage({
       />
       <OrderLife state={order.state} />
       {order.state === 'approved' && buys && (underWay !== null || checkout !== undefined) ? (
-        <PaymentWatch orderId={orderId} payment={underWay} checkout={checkout === 'done' ? 'done' : checkout === 'left' ? 'left' : null} />
+        <PaymentWatch
+          orderId={orderId}
+          payment={underWay}
+          checkout={checkout === 'done' ? 'done' : checkout === 'left' ? 'left' : null}
+        />
       ) : null}
       {order.state === 'submitted' ? (
         <div className="mb-4">
           <Notice tone="look" title="Waits for a lead">
-            It is above the workshop’s limit, so {order.submittedByYou ? 'somebody else than you' : 'a lead who did not submit it'} has to approve it.
+            It is above the workshop’s limit, so{' '}
+            {order.submittedByYou ? 'somebody else than you' : 'a lead who did not submit it'} has to approve it.
           </Notice>
         </div>
       ) : null}

@@ -64,8 +64,20 @@ export default async function PartPage({ params }: { readonly params: Promise<{ 
                 word="Change"
                 questions={[
                   { field: 'name', label: 'Name on the drawer', kind: 'line', initial: part.name },
-                  { field: 'reorderPoint', label: 'Reorder point', kind: 'number', optional: true, initial: part.reorderPoint === null ? '' : String(part.reorderPoint) },
-                  { field: 'reorderQuantity', label: 'Reorder quantity', kind: 'number', optional: true, initial: part.reorderQuantity === null ? '' : String(part.reorderQuantity) },
+                  {
+                    field: 'reorderPoint',
+                    label: 'Reorder point',
+                    kind: 'number',
+                    optional: true,
+                    initial: part.reorderPoint === null ? '' : String(part.reorderPoint),
+                  },
+                  {
+                    field: 'reorderQuantity',
+                    label: 'Reorder quantity',
+                    kind: 'number',
+                    optional: true,
+                    initial: part.reorderQuantity === null ? '' : String(part.reorderQuantity),
+                  },
                 ]}
                 said="The part was changed"
               />
@@ -81,7 +93,9 @@ export default async function PartPage({ params }: { readonly params: Promise<{ 
       </div>
       <Section title="On the shelf">
         {part.lots.length === 0 ? (
-          <EmptyState title="None on the shelf">What comes in through a receipt, or is entered below, stands here lot by lot.</EmptyState>
+          <EmptyState title="None on the shelf">
+            What comes in through a receipt, or is entered below, stands here lot by lot.
+          </EmptyState>
         ) : (
           <Table label={`Lots of ${part.name}`} stacked>
             <TableHead>
@@ -119,7 +133,11 @@ export default async function PartPage({ params }: { readonly params: Promise<{ 
                   </Cell>
                   {mayWrite ? (
                     <Cell label="Do">
-                      <LotActs lotId={lot.lotId} what={`${part.name} from ${lot.binCode}`} free={lot.onHand - lot.reserved} />
+                      <LotActs
+                        lotId={lot.lotId}
+                        what={`${part.name} from ${lot.binCode}`}
+                        free={lot.onHand - lot.reserved}
+                      />
                     </Cell>
                   ) : null}
                 </TableRow>
@@ -129,7 +147,9 @@ export default async function PartPage({ params }: { readonly params: Promise<{ 
         )}
         {mayWrite ? (
           <details className="mt-3">
-            <summary className="min-h-9 cursor-pointer font-semibold text-copper max-sm:min-h-11">Enter opening stock</summary>
+            <summary className="min-h-9 cursor-pointer font-semibold text-copper max-sm:min-h-11">
+              Enter opening stock
+            </summary>
             <div className="mt-2">
               <OpeningForm partId={partId} />
             </div>
@@ -191,7 +211,15 @@ export default async function PartPage({ params }: { readonly params: Promise<{ 
   );
 }
 
-function List({ title, empty, children }: { readonly title: string; readonly empty: string; readonly children: readonly React.ReactNode[] }) {
+function List({
+  title,
+  empty,
+  children,
+}: {
+  readonly title: string;
+  readonly empty: string;
+  readonly children: readonly React.ReactNode[];
+}) {
   return (
     <section>
       <h2 className="border-b border-ink pb-1 font-bold">{title}</h2>

@@ -78,7 +78,9 @@ export default async function SupplierPage({
                   </Cell>
                   <Cell label="Prices">
                     <span className="font-mono text-small">
-                      {one.breaks.map((step) => `${step.fromQuantity}+ ${unitPriceText(step.unitPrice, one.currency)}`).join('  ')}
+                      {one.breaks
+                        .map((step) => `${step.fromQuantity}+ ${unitPriceText(step.unitPrice, one.currency)}`)
+                        .join('  ')}
                     </span>
                   </Cell>
                   <Cell label="Multiple" number>

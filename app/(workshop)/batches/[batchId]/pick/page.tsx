@@ -55,7 +55,10 @@ export default async function PickPage({
         actions={<PrintButton word="Print the pick list" />}
       />
       {list.stops.length === 0 ? (
-        <EmptyState title="Nothing is reserved yet" actions={<ButtonLink href={`/batches/${batchId}`}>To the batch</ButtonLink>}>
+        <EmptyState
+          title="Nothing is reserved yet"
+          actions={<ButtonLink href={`/batches/${batchId}`}>To the batch</ButtonLink>}
+        >
           Reserve the batch first; its stops then stand here in walking order.
         </EmptyState>
       ) : current === null ? (
@@ -93,7 +96,21 @@ export default async function PickPage({
           <div className="mb-4 sm:hidden print:hidden">
             <ProgressBar label="Stops taken" done={done} total={list.stops.length} unit="stops" />
           </div>
-          <Beside beside={<PickSheet key={`${current.stop} ${current.take}`} batchId={batchId} stop={current} stops={list.stops.length} next={open.find((stop) => stop.stop > current.stop)?.stop ?? open.find((stop) => stop !== current)?.stop ?? null} />}>
+          <Beside
+            beside={
+              <PickSheet
+                key={`${current.stop} ${current.take}`}
+                batchId={batchId}
+                stop={current}
+                stops={list.stops.length}
+                next={
+                  open.find((stop) => stop.stop > current.stop)?.stop ??
+                  open.find((stop) => stop !== current)?.stop ??
+                  null
+                }
+              />
+            }
+          >
             <div className="max-lg:hidden print:block">
               <Table label="Stops in walking order" stickyHead>
                 <TableHead>
@@ -110,7 +127,11 @@ export default async function PickPage({
                       <Cell number>{stop.stop}</Cell>
                       <Cell mono>
                         {stop.take > 0 ? (
-                          <Link href={`/batches/${batchId}/pick?stop=${stop.stop}`} scroll={false} className="text-copper hover:underline">
+                          <Link
+                            href={`/batches/${batchId}/pick?stop=${stop.stop}`}
+                            scroll={false}
+                            className="text-copper hover:underline"
+                          >
                             {stop.binCode}
                           </Link>
                         ) : (
