@@ -3,10 +3,12 @@ import type { UseCase } from '@/lib/api/use-case';
 import { answerQuestion } from './answer-question';
 import { assessPart } from './assess-part';
 import { changeCircuit } from './change-circuit';
+import { changeColumnRole } from './change-column-role';
 import { changeLine } from './change-line';
 import { compareRevisions } from './compare-revisions';
 import { copyRevision } from './copy-revision';
 import { createCircuit } from './create-circuit';
+import { createRevision } from './create-revision';
 import { decideLine } from './decide-line';
 import { dropLine } from './drop-line';
 import { exportRevision } from './export-revision';
@@ -27,6 +29,8 @@ export const circuitsUseCases: readonly UseCase[] = [
   listCircuits,
   getCircuit,
   changeCircuit,
+  createRevision,
+  changeColumnRole,
   getRevision,
   readingOfRevision,
   takeRowAsLine,
