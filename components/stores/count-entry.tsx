@@ -108,7 +108,7 @@ export function CountEntry({
         ) : (
           <>
             <p className="mt-2 font-mono text-title leading-tight font-semibold break-words">{current.part.name}</p>
-            {current.attempt > 1 ? <p className="text-amber">Count it once more: attempt {current.attempt}.</p> : null}
+            {current.attempt > 0 ? <p className="text-amber">Count it once more.</p> : null}
             <div className="my-3">
               <LookOf part={current.part} scale={1.6} />
             </div>

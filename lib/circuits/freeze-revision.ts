@@ -22,7 +22,8 @@ export const freezeRevision = command({
   async run({ tx, actor, input, record }) {
     const draft = await lockDraft(tx, actor.workshopId, input.revisionId, input.version);
     const open = await listQuestions(tx, actor.workshopId, draft.id, MOST_NAMED);
-    if (open.length > 0) {
+    const [first] = open;
+    if (first) {
       const count =
         open.length === MOST_NAMED
           ? `${MOST_NAMED} or more questions are`
@@ -31,10 +32,10 @@ export const freezeRevision = command({
             : `${open.length} questions are`;
       throw new Refusal(
         'list.unsettled',
-        `${count} open in revision ${draft.name}. Answer them first; nothing was changed.`,
+        `${count} open in revision ${draft.name}, the first at ${placeOf(first)}: ${first.ask} Answer first; nothing was changed.`,
         {
           errors: open.map((one) => ({
-            pointer: `${one.sheet === null ? '' : `sheet ${one.sheet}, `}row ${one.row}`,
+            pointer: placeOf(one),
             code: one.code,
             detail: one.ask,
           })),
@@ -58,3 +59,7 @@ export const freezeRevision = command({
     return { id: draft.id, name: draft.name, state: 'frozen' as const, version: made.version };
   },
 });
+
+function placeOf({ sheet, row }: { readonly sheet: string | null; readonly row: number }): string {
+  return `${sheet === null ? '' : `sheet ${sheet}, `}row ${row}`;
+}

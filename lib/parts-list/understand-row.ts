@@ -183,7 +183,7 @@ export class RowReader {
     if (quantity !== null && count > 0 && quantity !== count && fitted) {
       ask(
         'quantity-differs',
-        `${count === 1 ? 'One designator' : `${count} designators`} (${shorten(designators)}), but ${quantity} asked for. Which is right?`,
+        `${count === 1 ? 'One designator' : `${count} designators`} (${shorten(designators)}), but column ${letterOf('quantity') ?? '?'} asks for ${quantity}. Which is right?`,
         [String(count), String(quantity)],
         'quantity',
       );
