@@ -112,9 +112,9 @@ free_block() {
   fail "no free block of ports from $1 on: choose another with TEST_PORT=…"
 }
 
-# The databases: `ohmstead` for the running application with the demo in it, and a migrated, empty one to copy from.
+# The databases: `ohmstead` for the running application with the demo in it, and an empty one for the integration tests.
 start_database() {
-  $DB destroy --yes && OHMSTEAD_DB_PORT=$((PORT + 32)) $DB start && $DB create ohmstead_template
+  $DB destroy --yes && OHMSTEAD_DB_PORT=$((PORT + 32)) $DB start && $DB create ohmstead_integration
 }
 migrate() { DATABASE_OWNER_URL=$1 node --import tsx docker-free-scripts/commands/migrate.ts; }
 # check runs a command in another bash; these functions go with it.
@@ -123,19 +123,22 @@ export DB
 
 if [ $NEEDS_SERVER = yes ]; then
   PORT=$(free_block "${TEST_PORT:-4700}")
-  export PORT SIGN_INS_FILE=$OUT/sign-ins.txt TEST_DATABASE_TEMPLATE=ohmstead_template
+  export PORT SIGN_INS_FILE=$OUT/sign-ins.txt
   served=no
   if check database 180 bash -euo pipefail -c start_database; then
     settings=$(OWN_DATABASE_URL=$($DB url app) node --import tsx docker-free-scripts/commands/write-environment.ts --new "$OUT/environment")
     eval "$settings"
     DATABASE_OWNER_URL=$($DB url owner)
     export DATABASE_OWNER_URL FAKES_DATA=
-    TEST_DATABASE_ADMIN_URL=$($DB url admin postgres)
-    TEMPLATE_URL=$($DB url owner ohmstead_template)
-    export TEST_DATABASE_ADMIN_URL TEMPLATE_URL TEST_BASE_URL=http://127.0.0.1:$PORT TEST_FAKES_URL=http://127.0.0.1:$((PORT + 1))
+    INTEGRATION_OWNER_URL=$($DB url owner ohmstead_integration)
+    INTEGRATION_URL=$($DB url app ohmstead_integration)
+    export INTEGRATION_OWNER_URL TEST_BASE_URL=http://127.0.0.1:$PORT TEST_FAKES_URL=http://127.0.0.1:$((PORT + 1))
     # Migrating twice shows that a second start has nothing to do.
-    if check migrate 180 bash -euo pipefail -c 'migrate "$TEMPLATE_URL" && migrate "$DATABASE_OWNER_URL" && migrate "$DATABASE_OWNER_URL" | grep "up to date"'; then
+    if check migrate 180 bash -euo pipefail -c 'migrate "$INTEGRATION_OWNER_URL" && migrate "$DATABASE_OWNER_URL" && migrate "$DATABASE_OWNER_URL" | grep "up to date"'; then
+      DEMO_URL=$DATABASE_URL
+      export DATABASE_URL=$INTEGRATION_URL
       tests integration 1800
+      export DATABASE_URL=$DEMO_URL
       serving=no
       for part in api browser faults; do if wants $part && has_tests $part; then serving=yes; fi; done
       if [ $serving = yes ]; then
