@@ -36,8 +36,7 @@ describe('a storekeeper with a phone', () => {
       expect(await page.getByText('Ledger', { exact: true }).count()).toBe(0);
       const nothing = page.getByRole('button', { name: 'Nothing else lies there' });
       if (await nothing.isVisible()) {
-        await nothing.click();
-        await page.waitForTimeout(400);
+        await Promise.all([page.waitForResponse((response) => response.url().endsWith('/entries')), nothing.click()]);
         continue;
       }
       const pad = page.getByRole('group', { name: /^Units of/ });
