@@ -40,6 +40,34 @@ export function Pager({
   );
 }
 
+/** The pager of a list that is asked for page by page; nothing where one page holds all. */
+export function Pages({
+  page,
+  size,
+  total,
+  what,
+  hrefOf,
+}: {
+  /** Counted from 1. */
+  readonly page: number;
+  readonly size: number;
+  readonly total: number;
+  readonly what: string;
+  readonly hrefOf: (page: number) => string;
+}) {
+  if (total <= size) return null;
+  return (
+    <Pager
+      first={(page - 1) * size + 1}
+      last={Math.min(total, page * size)}
+      total={total}
+      what={what}
+      previousHref={page > 1 ? hrefOf(page - 1) : null}
+      nextHref={page * size < total ? hrefOf(page + 1) : null}
+    />
+  );
+}
+
 function Step({
   href,
   word,

@@ -5,7 +5,7 @@ import { AreaLinks } from '@/components/shell/area-links';
 import { ButtonLink } from '@/components/ui/button';
 import { EmptyState } from '@/components/ui/empty-state';
 import { PageTitle, Strong } from '@/components/ui/page-title';
-import { Pager } from '@/components/ui/pager';
+import { Pages } from '@/components/ui/pager';
 import { Cell, HeadCell, Table, TableBody, TableHead, TableRow } from '@/components/ui/table';
 import { dayText } from '@/components/workshop/clock-time';
 import { StateWord } from '@/components/workshop/state-word';
@@ -96,16 +96,7 @@ export default async function BatchesPage({
           </TableBody>
         </Table>
       )}
-      {total > SIZE ? (
-        <Pager
-          first={(page - 1) * SIZE + 1}
-          last={Math.min(total, page * SIZE)}
-          total={total}
-          what="batches"
-          previousHref={page > 1 ? address(page - 1) : null}
-          nextHref={page * SIZE < total ? address(page + 1) : null}
-        />
-      ) : null}
+      <Pages page={page} size={SIZE} total={total} what="batches" hrefOf={address} />
     </>
   );
 }

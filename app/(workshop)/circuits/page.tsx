@@ -6,7 +6,7 @@ import { railsText } from '@/components/circuits/rails-text';
 import { AreaLinks } from '@/components/shell/area-links';
 import { EmptyState } from '@/components/ui/empty-state';
 import { PageTitle, Strong } from '@/components/ui/page-title';
-import { Pager } from '@/components/ui/pager';
+import { Pages } from '@/components/ui/pager';
 import { Cell, HeadCell, Table, TableBody, TableHead, TableRow } from '@/components/ui/table';
 import { dayText } from '@/components/workshop/clock-time';
 import { StateWord } from '@/components/workshop/state-word';
@@ -84,16 +84,7 @@ export default async function CircuitsPage({ searchParams }: { readonly searchPa
           </TableBody>
         </Table>
       )}
-      {total > SIZE ? (
-        <Pager
-          first={(page - 1) * SIZE + 1}
-          last={Math.min(total, page * SIZE)}
-          total={total}
-          what="circuits"
-          previousHref={page > 1 ? `/circuits?page=${page - 1}` : null}
-          nextHref={page * SIZE < total ? `/circuits?page=${page + 1}` : null}
-        />
-      ) : null}
+      <Pages page={page} size={SIZE} total={total} what="circuits" hrefOf={(to) => `/circuits?page=${to}`} />
     </>
   );
 }

@@ -1,34 +1,23 @@
 import type { Metadata } from 'next';
 import Link from 'next/link';
+import { ExpectedOn } from '@/components/purchasing/expected-on';
 import { money } from '@/components/purchasing/money';
 import { PURCHASING_LINKS } from '@/components/purchasing/purchasing-links';
 import { AreaLinks } from '@/components/shell/area-links';
 import { ButtonLink } from '@/components/ui/button';
 import { EmptyState } from '@/components/ui/empty-state';
-import { Glyph } from '@/components/ui/glyph';
 import { PageTitle, Strong } from '@/components/ui/page-title';
-import { Pager } from '@/components/ui/pager';
+import { Pages } from '@/components/ui/pager';
 import { Cell, HeadCell, Table, TableBody, TableHead, TableRow } from '@/components/ui/table';
 import { dayText } from '@/components/workshop/clock-time';
 import { StateWord } from '@/components/workshop/state-word';
 import { ask } from '@/lib/api/ask';
 import { listOrders } from '@/lib/purchasing/get-order';
+import { ORDER_STATES } from '@/lib/purchasing/order-states';
 
 export const metadata: Metadata = { title: 'Orders' };
 
 const SIZE = 50;
-const STATES = [
-  'draft',
-  'submitted',
-  'approved',
-  'paid',
-  'on-account',
-  'sent',
-  'part-received',
-  'received',
-  'closed',
-  'cancelled',
-] as const;
 
 export default async function OrdersPage({
   searchParams,
@@ -37,7 +26,7 @@ export default async function OrdersPage({
 }) {
   const asked = await searchParams;
   const page = Math.max(1, Number(asked.page) || 1);
-  const state = STATES.find((one) => one === asked.state);
+  const state = ORDER_STATES.find((one) => one === asked.state);
   const { rows, total, byState } = await ask(listOrders, {
     page,
     size: SIZE,
@@ -63,7 +52,7 @@ export default async function OrdersPage({
               all
             </StateLink>
           </li>
-          {STATES.flatMap((one) => {
+          {ORDER_STATES.flatMap((one) => {
             const count = byState.find((row) => row.state === one)?.count ?? 0;
             return count === 0
               ? []
@@ -105,14 +94,7 @@ export default async function OrdersPage({
                   <StateWord state={one.state} />
                 </Cell>
                 <Cell label="Expected">
-                  {one.expectedOn === null ? null : one.late ? (
-                    <span className="inline-flex items-baseline gap-1.5 text-oxide">
-                      <Glyph name="look" size={14} className="translate-y-[2px]" />
-                      {dayText(one.expectedOn)}, late
-                    </span>
-                  ) : (
-                    dayText(one.expectedOn)
-                  )}
+                  <ExpectedOn day={one.expectedOn} late={one.late} />
                 </Cell>
                 <Cell label="Lines" number>
                   {one.lines}
@@ -128,16 +110,7 @@ export default async function OrdersPage({
           </TableBody>
         </Table>
       )}
-      {total > SIZE ? (
-        <Pager
-          first={(page - 1) * SIZE + 1}
-          last={Math.min(total, page * SIZE)}
-          total={total}
-          what="orders"
-          previousHref={page > 1 ? address(page - 1) : null}
-          nextHref={page * SIZE < total ? address(page + 1) : null}
-        />
-      ) : null}
+      <Pages page={page} size={SIZE} total={total} what="orders" hrefOf={address} />
     </>
   );
 }

@@ -9,7 +9,7 @@ import { Button } from '@/components/ui/button';
 import { EmptyState } from '@/components/ui/empty-state';
 import { CheckboxField, SelectField, TextField } from '@/components/ui/field';
 import { PageTitle, Strong } from '@/components/ui/page-title';
-import { Pager } from '@/components/ui/pager';
+import { Pages } from '@/components/ui/pager';
 import { Cell, HeadCell, Table, TableBody, TableHead, TableRow } from '@/components/ui/table';
 import { ask } from '@/lib/api/ask';
 import { PART_KINDS } from '@/lib/electronics/part-spec';
@@ -141,16 +141,7 @@ export default async function PartsPage({ searchParams }: { readonly searchParam
           </TableBody>
         </Table>
       )}
-      {total > SIZE ? (
-        <Pager
-          first={(page - 1) * SIZE + 1}
-          last={Math.min(total, page * SIZE)}
-          total={total}
-          what="parts"
-          previousHref={page > 1 ? address(page - 1) : null}
-          nextHref={page * SIZE < total ? address(page + 1) : null}
-        />
-      ) : null}
+      <Pages page={page} size={SIZE} total={total} what="parts" hrefOf={address} />
     </>
   );
 }

@@ -1,11 +1,11 @@
 import type { Metadata } from 'next';
 import Link from 'next/link';
+import { ExpectedOn } from '@/components/purchasing/expected-on';
 import { ReceiveForm } from '@/components/stores/receive-form';
 import { STORES_LINKS } from '@/components/stores/stores-links';
 import { AreaLinks } from '@/components/shell/area-links';
 import { EmptyState } from '@/components/ui/empty-state';
 import { ButtonLink } from '@/components/ui/button';
-import { Glyph } from '@/components/ui/glyph';
 import { PageTitle } from '@/components/ui/page-title';
 import { Section } from '@/components/ui/section';
 import { Cell, HeadCell, Table, TableBody, TableHead, TableRow } from '@/components/ui/table';
@@ -54,16 +54,7 @@ export default async function ReceivePage() {
                   </Cell>
                   <Cell label="From">{one.supplierName}</Cell>
                   <Cell label="Expected">
-                    {one.expectedOn === null ? (
-                      '–'
-                    ) : one.late ? (
-                      <span className="inline-flex items-baseline gap-1.5 text-oxide">
-                        <Glyph name="look" size={14} className="translate-y-[2px]" />
-                        {dayText(one.expectedOn)}, late
-                      </span>
-                    ) : (
-                      dayText(one.expectedOn)
-                    )}
+                    <ExpectedOn day={one.expectedOn} late={one.late} />
                   </Cell>
                   <Cell label="State">
                     <StateWord state={one.state} />

@@ -8,7 +8,7 @@ import { SupplierForm } from '@/components/purchasing/supplier-form';
 import { AreaLinks } from '@/components/shell/area-links';
 import { EmptyState } from '@/components/ui/empty-state';
 import { PageTitle, Strong } from '@/components/ui/page-title';
-import { Pager } from '@/components/ui/pager';
+import { Pages } from '@/components/ui/pager';
 import { Section } from '@/components/ui/section';
 import { Cell, HeadCell, Table, TableBody, TableHead, TableRow } from '@/components/ui/table';
 import { ask } from '@/lib/api/ask';
@@ -97,16 +97,7 @@ export default async function SupplierPage({
             </TableBody>
           </Table>
         )}
-        {offers.total > SIZE ? (
-          <Pager
-            first={(page - 1) * SIZE + 1}
-            last={Math.min(offers.total, page * SIZE)}
-            total={offers.total}
-            what="offers"
-            previousHref={page > 1 ? address(page - 1) : null}
-            nextHref={page * SIZE < offers.total ? address(page + 1) : null}
-          />
-        ) : null}
+        <Pages page={page} size={SIZE} total={offers.total} what="offers" hrefOf={address} />
       </Section>
       {mayWrite ? (
         <>
