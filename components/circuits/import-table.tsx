@@ -89,7 +89,7 @@ export function ImportTable({
         role="region"
         aria-label="The list, scrollable"
         tabIndex={0}
-        className="max-w-full overflow-x-auto border border-rule"
+        className="relative max-w-full overflow-x-auto border border-rule"
       >
         <table className="w-full border-collapse bg-sheet text-small">
           <thead>

@@ -38,7 +38,7 @@ export function CabinetDrawing({
 }) {
   const inOrder = [...bins].sort((a, b) => a.row - b.row || a.column - b.column);
   return (
-    <div role="region" aria-label={label} tabIndex={0} className="max-w-full overflow-x-auto p-1">
+    <div role="region" aria-label={label} tabIndex={0} className="relative max-w-full overflow-x-auto p-1">
       <ul className="grid gap-[3px]" style={{ gridTemplateColumns: `repeat(${columns}, minmax(74px, 84px))` }}>
         {inOrder.map((bin) => (
           <li key={bin.code} style={{ gridColumn: `${bin.column} / span ${bin.span ?? 1}`, gridRow: bin.row }}>

@@ -39,7 +39,7 @@ export function Table({
   if (stacked || stickyHead) return table;
   // A wide table scrolls in its own frame and not the page; the frame takes the focus so that a keyboard can scroll it.
   return (
-    <div role="region" aria-label={`${label}, scrollable`} tabIndex={0} className="max-w-full overflow-x-auto">
+    <div role="region" aria-label={`${label}, scrollable`} tabIndex={0} className="relative max-w-full overflow-x-auto">
       {table}
     </div>
   );

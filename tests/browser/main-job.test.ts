@@ -155,7 +155,7 @@ describe('from a spreadsheet to a finished kit', () => {
     await page.getByRole('button', { name: /^Send to/ }).click();
     await page.getByText('sent').first().waitFor();
     const mails = await fake<unknown[]>(
-      `/mail.json?subject=${encodeURIComponent(seen.orderNumber)}&count=1&waitMs=20000`,
+      `/mail.json?subject=${encodeURIComponent(`Order ${seen.orderNumber} from`)}&count=1&waitMs=20000`,
     );
     const text = JSON.stringify(mails);
     expect(text).toContain(`${seen.orderNumber}.pdf`);
