@@ -67,7 +67,7 @@ const KINDS = {
     roles: ['builder'],
     title: many('kit complete', 'kits complete'),
     act: 'Take it',
-    list: '/batches?state=kitted',
+    list: '/batches?show=kitted',
   },
   bags: {
     what: 'deliveries-expected',
@@ -135,12 +135,14 @@ export const whatWaits = query({
     const found = await tx.execute<Row & { key: Key }>(sql`
       select 'approve' as key, count(*)::int as count, max(s.name || ', order ' || o.number) as detail, case when count(*) = 1 then '/orders/' || max(o.id::text) end as href
         from purchase_order o join supplier s on s.workshop_id = o.workshop_id and s.id = o.supplier_id where o.workshop_id = ${w} and o.state = 'submitted' and o.submitted_by is distinct from ${actor.personId}
-      union all select 'settle', count(*)::int, max(c.name || ' ' || v.name), '/revisions/' || max(v.id::text) || '/import'
+      union all select 'settle', count(*)::int, (array_agg(c.name || ' ' || v.name order by v.id))[1], (array_agg('/revisions/' || v.id || '/import' order by v.id))[1]
         from question q join revision v on v.workshop_id = q.workshop_id and v.id = q.revision_id join circuit c on c.workshop_id = v.workshop_id and c.id = v.circuit_id where q.workshop_id = ${w} and q.answer is null and v.state = 'draft'
-      union all select 'decide', count(*)::int, max(c.name || ', batch ' || b.number), '/revisions/' || max(v.id::text)
+      union all select 'decide', count(*)::int, (array_agg(c.name || ', batch ' || b.number order by b.needed_by nulls last, b.id))[1],
+             (array_agg('/revisions/' || v.id || '?standing=ask&units=' || b.units order by b.needed_by nulls last, b.id))[1]
         from batch_need n join batch b on b.workshop_id = n.workshop_id and b.id = n.batch_id join revision v on v.workshop_id = b.workshop_id and v.id = b.revision_id join circuit c on c.workshop_id = v.workshop_id and c.id = v.circuit_id
        where n.workshop_id = ${w} and n.part_id is null and b.state in ('planned', 'reserved', 'picking')
-      union all select 'pick', count(*)::int, max(c.name || ' × ' || b.units || ', batch ' || b.number), '/batches/' || max(b.id::text) || '/pick'
+      union all select 'pick', count(*)::int, (array_agg(c.name || ' × ' || b.units || ', batch ' || b.number order by b.needed_by nulls last, b.id))[1],
+             (array_agg('/batches/' || b.id || '/pick' order by b.needed_by nulls last, b.id))[1]
         from reservation r join batch b on b.workshop_id = r.workshop_id and b.id = r.batch_id join revision v on v.workshop_id = b.workshop_id and v.id = b.revision_id join circuit c on c.workshop_id = v.workshop_id and c.id = v.circuit_id
        where r.workshop_id = ${w} and r.open > 0 and b.state in ('reserved', 'picking')
       union all select 'kits', count(*)::int, max(c.name || ' × ' || b.units), case when count(*) = 1 then '/batches/' || max(b.id::text) end

@@ -17,6 +17,7 @@ export const metadata: Metadata = { title: 'Batches' };
 const SIZE = 50;
 const UNDER_WAY = ['planned', 'reserved', 'picking', 'kitted'] as const;
 const ENDED = ['finished', 'cancelled'] as const;
+const KITTED = ['kitted'] as const;
 
 export default async function BatchesPage({
   searchParams,
@@ -26,19 +27,20 @@ export default async function BatchesPage({
   const { page: asked, show } = await searchParams;
   const page = Math.max(1, Number(asked) || 1);
   const ended = show === 'ended';
+  const states = ended ? ENDED : show === 'kitted' ? KITTED : UNDER_WAY;
   const { rows, total } = await ask(listBatches, {
     page,
     size: SIZE,
-    state: ended ? [...ENDED] : [...UNDER_WAY],
+    state: [...states],
     sort: ended ? 'newest' : 'needed',
   });
-  const address = (to: number) => `/batches?page=${to}${ended ? '&show=ended' : ''}`;
+  const address = (to: number) => `/batches?page=${to}${show === undefined ? '' : `&show=${encodeURIComponent(show)}`}`;
   return (
     <>
       <PageTitle
         above={<AreaLinks label="Circuits" links={CIRCUITS_LINKS} />}
         title="Batches"
-        remainder={ended ? 'that are over' : 'under way'}
+        remainder={ended ? 'that are over' : show === 'kitted' ? 'whose kit is complete' : 'under way'}
         facts={[
           <>
             <Strong mono>{total}</Strong> batches
