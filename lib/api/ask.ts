@@ -20,7 +20,8 @@ export async function ask<In extends z.ZodType, Out extends z.ZodType>(
   } catch (error) {
     if (error instanceof Refusal) {
       if (error.code === 'signed-out') redirect('/sign-in');
-      if (error.code === 'not-found') notFound();
+      // What an address names in a form that nothing has is as little there as what it names by an unknown id.
+      if (error.code === 'not-found' || error.code === 'input.invalid') notFound();
       if (error.code === 'not-allowed') forbidden();
     }
     throw error;

@@ -39,6 +39,9 @@ const AWAY = new Set([
   '53300',
 ]);
 
+/** character_not_in_repertoire and untranslatable_character: a zero byte, or half of a pair. */
+const UNKEEPABLE = new Set(['22021', '22P05']);
+
 /** The refusal behind an error, or null where it is a bug. */
 export function refusalFrom(error: unknown): Refusal | null {
   if (error instanceof Refusal) return error;
@@ -53,6 +56,11 @@ export function refusalFrom(error: unknown): Refusal | null {
       'The database does not answer right now. Nothing was changed; try again in a moment.',
       { cause: error },
     );
+  }
+  if (fault && UNKEEPABLE.has(fault.code)) {
+    return new Refusal('input.invalid', 'A text holds a character that can’t be kept. Nothing was changed.', {
+      cause: error,
+    });
   }
   // pg raises these two without a code.
   for (let cause = error, depth = 0; cause instanceof Error && depth < 5; cause = cause.cause, depth += 1) {

@@ -121,3 +121,20 @@ describe('two workshops', () => {
     await page.getByText('No circuit yet').waitFor();
   });
 });
+
+describe('an address that names nothing', () => {
+  it.each([
+    '/batches/abc',
+    '/revisions/abc',
+    '/parts?page=99999999999',
+    '/ledger?from=2026-99-99',
+    '/find?q=%00',
+    '/bins?bin=x',
+  ])('%s says so, and is no failure of ours', async (address) => {
+    const { page, context } = await signedIn(browser, 'lead');
+    const answer = await page.goto(`${BASE}${address}`);
+    expect(answer?.status()).toBeLessThan(500);
+    await page.getByRole('heading', { level: 1 }).waitFor();
+    await context.close();
+  });
+});

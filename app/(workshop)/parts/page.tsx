@@ -31,7 +31,7 @@ export default async function PartsPage({ searchParams }: { readonly searchParam
   const asked = await searchParams;
   const page = Math.max(1, Number(asked.page) || 1);
   const kind = PART_KINDS.find((one) => one === asked.kind);
-  const search = asked.search?.trim() ?? '';
+  const search = String(asked.search ?? '').trim();
   const low = asked.low === 'on';
   const [{ rows, total }, me] = await Promise.all([
     ask(listParts, {

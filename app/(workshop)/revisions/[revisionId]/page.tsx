@@ -47,7 +47,8 @@ export default async function RevisionPage({
   const asked = await searchParams;
   const units = Math.min(10_000, Math.max(1, Number(asked.units) || 1));
   const standing = STANDINGS.find((one) => one === asked.standing);
-  const search = asked.search?.trim() === '' ? undefined : asked.search?.trim();
+  const words = String(asked.search ?? '').trim();
+  const search = words === '' ? undefined : words;
   const filter = {
     ...(standing === undefined ? {} : { standing: [standing] }),
     ...(search === undefined ? {} : { search }),
