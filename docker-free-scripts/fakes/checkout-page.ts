@@ -1,7 +1,8 @@
 /** The page where a person pays with a test card, or goes back without paying. */
 import { type Answer, type Call, redirect } from './http';
 import { type Html, markup, page, raw } from './page';
-import { PaymentRefusal, type PaymentRules, type Session, minorDigits } from './payment-rules';
+import { type Session } from './payment-records';
+import { PaymentRefusal, type PaymentRules, minorDigits } from './payment-rules';
 
 const MOST_FORM_BYTES = 10_000;
 

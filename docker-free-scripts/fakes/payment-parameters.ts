@@ -1,6 +1,7 @@
 /** Reads the parameters of the two requests that change something, with the provider's rules and limits. */
 import { type Form, mapUnder, oneOf, refuseUnknown, requiredText, wholeNumber, yesOrNo } from './payment-form';
-import { type LineItem, PaymentRefusal, type PaymentRules } from './payment-rules';
+import { type LineItem } from './payment-records';
+import { PaymentRefusal, type PaymentRules } from './payment-rules';
 
 const SESSION_PARAMETERS = [
   'mode',

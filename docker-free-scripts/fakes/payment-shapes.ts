@@ -1,5 +1,5 @@
 /** The provider's JSON objects, as far as an SDK of API version 2026-10-28.endive looks at them in payment mode. */
-import type { Charge, Intent, Refund, Session } from './payment-rules';
+import type { Charge, Intent, Refund, Session } from './payment-records';
 
 export const API_VERSION = '2026-10-28.endive';
 

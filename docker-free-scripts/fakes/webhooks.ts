@@ -3,7 +3,7 @@
  * not taken. Tests hold, reorder, lose, duplicate and forge them here.
  */
 import { createHmac } from 'node:crypto';
-import type { PaymentEvent } from './payment-rules';
+import type { PaymentEvent } from './payment-records';
 import { BadRequest } from './http';
 
 export type Delivery = {
