@@ -1,10 +1,11 @@
 'use client';
 /**
- * The list as it stood, each column with what it was taken for and why, each row beside what was understood. Client: a
+ * The list as it stood, each column with what it was taken for and why, what was understood of each row beside its text. Client: a
  * column's role and a row that is no part can be corrected in place.
  */
 import { useRouter } from 'next/navigation';
 import { useState } from 'react';
+import { kindWord } from '@/components/lines/line-words';
 import { Button } from '@/components/ui/button';
 import { Glyph } from '@/components/ui/glyph';
 import { Notice } from '@/components/ui/notice';
@@ -97,6 +98,12 @@ export function ImportTable({
               <th scope="col" className="border-b border-ink px-2 py-2 text-right font-semibold text-soft">
                 Row
               </th>
+              <th
+                scope="col"
+                className="min-w-44 border-r border-b border-ink px-2 py-2 text-left font-semibold text-soft"
+              >
+                Understood as
+              </th>
               {shown.map((column) => (
                 <th
                   key={column.index}
@@ -128,12 +135,6 @@ export function ImportTable({
                   <span className="mt-0.5 block text-fine text-soft">{column.because}</span>
                 </th>
               ))}
-              <th
-                scope="col"
-                className="min-w-56 border-b border-l border-ink px-2 py-2 text-left font-semibold text-soft"
-              >
-                Understood as
-              </th>
             </tr>
           </thead>
           <tbody>
@@ -145,12 +146,7 @@ export function ImportTable({
                   className={noPart ? 'hatched text-soft' : row.questionIds.length > 0 ? 'bg-amber-wash' : ''}
                 >
                   <td className="border-b border-hair px-2 py-1 text-right font-mono text-soft">{row.row}</td>
-                  {shown.map((column) => (
-                    <td key={column.index} className="max-w-64 border-b border-hair px-2 py-1 break-words">
-                      {row.cells[column.index] ?? ''}
-                    </td>
-                  ))}
-                  <td className="border-b border-l border-hair px-2 py-1">
+                  <td className="border-r border-b border-hair px-2 py-1">
                     {noPart ? (
                       <span className="flex flex-wrap items-center justify-between gap-2">
                         {row.notLine ?? 'no part'}
@@ -176,6 +172,11 @@ export function ImportTable({
                       ))
                     )}
                   </td>
+                  {shown.map((column) => (
+                    <td key={column.index} className="max-w-64 border-b border-hair px-2 py-1 break-words">
+                      {row.cells[column.index] ?? ''}
+                    </td>
+                  ))}
                 </tr>
               );
             })}
@@ -195,7 +196,7 @@ function UnderstoodLine({ line, asks }: { readonly line: ReadLine; readonly asks
         <Glyph name="same" size={13} className="translate-y-[2px] text-mask" />
       )}
       <span className="font-mono">{line.quantity} ×</span>
-      <span>{line.kind}</span>
+      <span>{kindWord(line.kind)}</span>
       <span className="font-mono font-semibold">{line.text}</span>
       {line.fitted ? null : <span className="text-oxide">not fitted</span>}
     </span>
