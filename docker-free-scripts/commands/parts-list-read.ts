@@ -1,11 +1,12 @@
 /** Reads one parts list and prints what it understood as JSON: npm run -s parts-list:read -- FILE. Exit 2 with row, column and cure where it can't. */
-import { readFileSync, statSync } from 'node:fs';
+import { existsSync, readFileSync, statSync } from 'node:fs';
 import { readPartsList } from '@/lib/parts-list/read-parts-list';
 
 const MOST_BYTES = 64 * 1024 * 1024;
 
 async function main(file: string | undefined): Promise<void> {
   if (file === undefined) throw new Error('say which file: npm run -s parts-list:read -- FILE');
+  if (!existsSync(file) || !statSync(file).isFile()) throw new Error(`there is no file ${file}`);
   if (statSync(file).size > MOST_BYTES) throw new Error(`${file} is larger than ${MOST_BYTES / 1024 / 1024} MiB`);
   const reading = await readPartsList(readFileSync(file), { fileName: file });
   if (!reading.ok) {
